@@ -1,0 +1,23 @@
+import { z } from "zod";
+import { resolveKinetics } from "../kinetics/disposition.ts";
+import { quantity } from "./quantity.ts";
+
+const KineticValues = z.strictObject({
+  volumeL: quantity("volumeL").exactOptional(),
+  clearanceLPerH: quantity("clearanceLPerH").exactOptional(),
+  eliminationRatePerH: quantity("eliminationRatePerH").exactOptional(),
+  halfLifeH: quantity("halfLifeH").exactOptional(),
+  absorptionRatePerH: quantity("absorptionRatePerH").exactOptional(),
+  bioavailability: quantity("bioavailability").default(1),
+  saltFactor: quantity("saltFactor").default(1),
+});
+
+/**
+ * Kinetics of one person and one drug. Two independent values of volume, clearance, rate constant and
+ * half-life fix the other two; more than two are accepted only where they agree.
+ */
+export const Parameters = KineticValues.superRefine((value, context) => {
+  const resolved = resolveKinetics(value);
+  if (!resolved.ok) context.addIssue({ code: "custom", path: [resolved.field], message: resolved.problem });
+}).meta({ id: "Parameters" });
+export type Parameters = z.infer<typeof Parameters>;

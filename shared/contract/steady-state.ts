@@ -1,0 +1,54 @@
+import { z } from "zod";
+import { Caution } from "./caution.ts";
+import { Dose, EliminationChange, RangeMgPerL } from "./dose.ts";
+import { counts } from "./limits.ts";
+import { Parameters } from "./parameters.ts";
+import { Exposure } from "./prediction.ts";
+import { quantity } from "./quantity.ts";
+
+/** Doses of one cycle, atH from 0 up to cycleH, repeated for ever. Anything may overlap the cycle's end. */
+export const SteadyStateRequest = z
+  .strictObject({
+    parameters: Parameters,
+    /** Changes of elimination inside the cycle, repeated with it (a dialysis session every 48 h). */
+    eliminationChanges: z.array(EliminationChange).max(counts.eliminationChanges).default([]),
+    cycleH: quantity("intervalH"),
+    doses: z.array(Dose).min(1).max(counts.doses),
+    rangeMgPerL: RangeMgPerL.exactOptional(),
+    sampleEveryH: z.number().min(1 / 60).exactOptional(),
+  })
+  .superRefine((request, context) => {
+    const refuse = (path: (string | number)[], message: string) => context.addIssue({ code: "custom", path, message });
+    request.doses.forEach((dose, index) => {
+      if (dose.kind === "pump") {
+        if (dose.steps.at(-1)!.rateMgPerH !== 0 || dose.steps.at(-1)!.atH > request.cycleH)
+          refuse(["doses", index, "steps"], `must end with a rate of 0 mg/h by the end of the cycle (${request.cycleH} h)`);
+      } else if (dose.atH >= request.cycleH)
+        refuse(["doses", index, "atH"], `must be before the end of the cycle (${request.cycleH} h), got ${dose.atH} h`);
+    });
+    if (request.parameters.absorptionRatePerH === undefined && request.doses.some((dose) => dose.kind === "absorbed"))
+      refuse(["parameters", "absorptionRatePerH"], "is needed because a dose is absorbed");
+    if (request.sampleEveryH !== undefined && request.cycleH / request.sampleEveryH > counts.sampleTimes)
+      refuse(["sampleEveryH"], `gives more than ${counts.sampleTimes} points over ${request.cycleH} h`);
+  })
+  .meta({ id: "SteadyStateRequest" });
+export type SteadyStateRequest = z.infer<typeof SteadyStateRequest>;
+
+export const SteadyStateResponse = z
+  .strictObject({
+    cycleH: z.number(),
+    /** Exact metrics of one cycle at steady state. */
+    exposure: Exposure,
+    auc24MgHPerL: z.number(),
+    /** (peak - trough) / average. */
+    swing: z.number().exactOptional(),
+    /** Steady-state area of a cycle over the area of the first cycle from nothing. */
+    accumulationRatio: z.number(),
+    /** Level at the start of the cycle, just before anything given then. */
+    startMgPerL: z.number(),
+    timesH: z.array(z.number()).exactOptional(),
+    concentrationsMgPerL: z.array(z.number()).exactOptional(),
+    cautions: z.array(Caution).min(1),
+  })
+  .meta({ id: "SteadyStateResponse" });
+export type SteadyStateResponse = z.infer<typeof SteadyStateResponse>;

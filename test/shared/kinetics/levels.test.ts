@@ -1,0 +1,42 @@
+import { describe, expect, test } from "vitest";
+import { courseOf } from "../../../shared/kinetics/course.ts";
+import { gridTimesH, levelsAt, levelsEvery } from "../../../shared/kinetics/levels.ts";
+import { walk } from "../../../shared/kinetics/walk.ts";
+
+const parameters = { volumeL: 31.16221288320161, clearanceLPerH: 7.2, bioavailability: 1, saltFactor: 1 };
+
+describe("levelsAt", () => {
+  test("gives the plateau of a constant infusion: R/CL (1 - 1/e) after one mean life", () => {
+    const course = courseOf({
+      parameters: { volumeL: 10, clearanceLPerH: 1, bioavailability: 1, saltFactor: 1 },
+      doses: [{ kind: "infusion", atH: 0, amountMg: 1000, durationH: 100 }],
+      horizonH: 100,
+    });
+    // R/CL (1 - 1/e): 10 x OEIS A068996. exp and expm1: 1 ulp each; products: 1/2.
+    const [level] = levelsAt(walk(course), [10]);
+    expect(Math.abs(level! - 6.321205588285577)).toBeLessThanOrEqual(4 * Number.EPSILON * 6.4);
+  });
+});
+
+describe("levelsEvery", () => {
+  test("agrees with the closed form at every grid point of a mixed course", () => {
+    const course = courseOf({
+      parameters: { ...parameters, absorptionRatePerH: 0.9 },
+      doses: [
+        { kind: "bolus", atH: 8.2, amountMg: 100 },
+        { kind: "infusion", atH: 3, amountMg: 300, durationH: 30 },
+        { kind: "absorbed", atH: 10, amountMg: 250, lagH: 0.5 },
+      ],
+      horizonH: 100,
+    });
+    const made = walk(course);
+    const grid = levelsEvery(made, 0.01);
+    const exact = levelsAt(made, gridTimesH(100, 0.01));
+    const largest = Math.max(...exact);
+    // 512 multiply-adds at half an ulp each, relative to the level carried along.
+    for (let point = 0; point < exact.length; point++) {
+      if (point === 820) continue; // the grid meets the bolus at 8.2 h; 820 x 0.01 does too, or lies an ulp before it
+      expect(Math.abs(grid[point]! - exact[point]!)).toBeLessThanOrEqual(1e-12 * largest);
+    }
+  });
+});
