@@ -6,6 +6,7 @@ import { quantity } from "./quantity.ts";
 export const Instant = z.iso
   .datetime({ offset: true, error: "must be a date and time with offset, such as 2026-03-29T08:00:00+01:00" })
   .meta({ description: "ISO 8601 date and time with offset" });
+export type Instant = z.infer<typeof Instant>;
 
 /** Ids that the client makes for the parts of one document. */
 export const PartId = z.string().regex(/^[A-Za-z0-9-]{1,40}$/, { error: "must be 1 to 40 letters, digits or hyphens" });

@@ -40,8 +40,10 @@ export const SteadyStateResponse = z
     /** Exact metrics of one cycle at steady state. */
     exposure: Exposure,
     auc24MgHPerL: z.number(),
-    /** (peak - trough) / average. */
+    /** (peak - trough) / trough; absent where the trough is 0. */
     swing: z.number().exactOptional(),
+    /** (peak - trough) / average. */
+    fluctuation: z.number(),
     /** Steady-state area of a cycle over the area of the first cycle from nothing. */
     accumulationRatio: z.number(),
     /** Level at the start of the cycle, just before anything given then. */

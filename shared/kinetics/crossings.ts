@@ -1,0 +1,49 @@
+import { DomainError } from "../errors.ts";
+import { bracketedRoot } from "./bracketed-root.ts";
+import { type MonotonePiece, type TimeWindow, levelWithin, monotonePieces } from "./monotone-pieces.ts";
+import type { Walk } from "./walk.ts";
+
+export interface Crossing {
+  readonly atH: number;
+  readonly direction: "rising" | "falling";
+}
+
+/**
+ * Every time in the window at which the level passes a value, exactly: by closed form where nothing is
+ * being absorbed, by a bracketed root elsewhere. A bolus that jumps over the value is a rising crossing
+ * at its hour. Touching the value without passing it is no crossing.
+ *
+ * @returns in order of time
+ * @throws {DomainError} if mgPerL is not a number of 0 or more
+ */
+export function crossingsOf(made: Walk, mgPerL: number, window: TimeWindow): Crossing[] {
+  if (!(mgPerL >= 0)) throw new DomainError("mgPerL", mgPerL, "0 or more");
+  const found: Crossing[] = [];
+  let before: number | undefined;
+  for (const piece of monotonePieces(made, window)) {
+    if (before !== undefined && before <= mgPerL && piece.startMgPerL > mgPerL && before < piece.startMgPerL)
+      found.push({ atH: piece.fromH, direction: "rising" });
+    const hours = crossingHours(made, piece, mgPerL);
+    if (hours !== undefined)
+      found.push({ atH: piece.fromH + hours, direction: piece.endMgPerL > piece.startMgPerL ? "rising" : "falling" });
+    before = piece.endMgPerL;
+  }
+  return found.filter(({ atH, direction }, index) => index === 0 || atH !== found[index - 1]!.atH || direction !== found[index - 1]!.direction);
+}
+
+/**
+ * Hours into a monotone piece at which it passes the value; undefined where it does not.
+ *
+ *     C(u) = Css + (C0 - Css) e^(-k u)   =>   u = ln(1 + (C0 - y) / (y - Css)) / k,   Css = R / (k V)
+ */
+export function crossingHours(made: Walk, piece: MonotonePiece, mgPerL: number): number | undefined {
+  const { startMgPerL, endMgPerL, flow } = piece;
+  if (!((startMgPerL > mgPerL && endMgPerL < mgPerL) || (startMgPerL < mgPerL && endMgPerL > mgPerL))) return undefined;
+  const length = piece.untilH - piece.fromH;
+  if (piece.state.depotMg !== 0) return bracketedRoot((u) => levelWithin(made, piece, u) - mgPerL, 0, length);
+  const hours =
+    flow.k === 0
+      ? ((mgPerL - startMgPerL) * made.volumeL) / flow.rateMgPerH
+      : Math.log1p((startMgPerL - mgPerL) / (mgPerL - flow.rateMgPerH / (flow.k * made.volumeL))) / flow.k;
+  return Math.min(length, Math.max(0, hours));
+}
