@@ -1,0 +1,191 @@
+import type { RegimenContent } from "../contract/case.ts";
+import { exposureOf } from "../kinetics/exposure.ts";
+import { amountPerDay, highestAmount, highestRate, totalAmount } from "./amounts.ts";
+import { areaOver } from "./area-over.ts";
+import type { Figure, FigureUnit } from "./figure.ts";
+import { firstEntryH } from "./first-entry.ts";
+import { type Interval, firstInterval, lastInterval } from "./intervals.ts";
+import { momentAt } from "./moment.ts";
+import { type Prepared, type Which, prepare } from "./prepared.ts";
+import { settledFrom } from "./settling.ts";
+
+/**
+ * Everything that one alternative is judged by. Peaks and troughs of the first interval (first dose to
+ * the next), of the last complete interval of the plan and of a cycle at steady state. A trough is the
+ * lowest level after the peak of its interval, so that an empty start does not count as one.
+ */
+export interface Figures {
+  readonly firstPeak: Figure;
+  readonly firstTrough: Figure;
+  readonly lastPeak: Figure;
+  readonly lastTrough: Figure;
+  readonly steadyPeak: Figure;
+  readonly steadyTrough: Figure;
+  /** Over the whole plan. */
+  readonly average: Figure;
+  readonly steadyAverage: Figure;
+  /** Over 24 h from the chosen hour. */
+  readonly area24: Figure;
+  readonly steadyArea24: Figure;
+  readonly hoursAbove: Figure;
+  readonly hoursWithin: Figure;
+  readonly hoursBelow: Figure;
+  readonly percentAbove: Figure;
+  readonly percentWithin: Figure;
+  readonly percentBelow: Figure;
+  readonly steadyPercentWithin: Figure;
+  readonly firstInRange: Figure;
+  /** ln 10 / k: by then nine tenths of the steady-state level are there, whatever the dose, without a loading dose. */
+  readonly timeTo90Percent: Figure;
+  readonly settledFrom: Figure;
+  readonly accumulationRatio: Figure;
+  /** (peak - trough) / average at steady state, in percent. */
+  readonly swing: Figure;
+  readonly amountPerDay: Figure;
+  readonly totalAmount: Figure;
+  readonly highestAmount: Figure;
+  readonly highestRate: Figure;
+}
+
+export type FigureName = keyof Figures;
+
+export interface FigureOptions {
+  readonly which?: Which;
+  /** Where the chosen 24 h begin; 0 is the plan's start. */
+  readonly areaFromH?: number;
+}
+
+/** Figures of what was given with the plan going on, or, by `which`, of the plan alone. */
+export function figuresOf(content: RegimenContent, options: FigureOptions = {}): Figures {
+  return figuresOfPrepared(prepare(content, options.which), options);
+}
+
+/** As `figuresOf`, for an alternative that is already walked. Cost: a few passes over its stretches. */
+export function figuresOfPrepared(prepared: Prepared, { areaFromH = 0 }: Pick<FigureOptions, "areaFromH"> = {}): Figures {
+  const { content, made } = prepared;
+  const nothing = prepared.doses.length === 0 ? "no dose is given" : undefined;
+  const first = extremes(prepared, firstInterval(prepared), "no dose is given");
+  const last = extremes(prepared, lastInterval(prepared), nothing ?? "only one dose is given, so there is no later interval");
+  return {
+    firstPeak: first.peak,
+    firstTrough: first.trough,
+    lastPeak: last.peak,
+    lastTrough: last.trough,
+    average: { value: exposureOf(made, { fromH: 0, toH: made.horizonH }).averageMgPerL, unit: "mg/L" },
+    area24: areaOver(prepared, areaFromH),
+    ...rangeFigures(prepared),
+    ...steadyFigures(prepared),
+    totalAmount: totalAmount(prepared),
+    amountPerDay: amountPerDay(prepared),
+    highestAmount: highestAmount(prepared),
+    highestRate: highestRate(prepared),
+    firstInRange: firstInRange(content, prepared),
+  };
+}
+
+function extremes(prepared: Prepared, interval: Interval | undefined, absent: string): { peak: Figure; trough: Figure } {
+  if (interval === undefined) return { peak: { absent }, trough: { absent } };
+  const { content, made } = prepared;
+  const { fromH, note } = interval;
+  const toH = Math.min(interval.toH, made.horizonH);
+  if (!(toH > fromH)) return { peak: { absent: "the interval is empty" }, trough: { absent: "the interval is empty" } };
+  const { peak } = exposureOf(made, { fromH, toH });
+  const noted = note !== undefined && { note };
+  const peakFigure: Figure = { value: peak.mgPerL, unit: "mg/L", ...momentAt(content, peak.atH), ...noted };
+  if (!(toH > peak.atH))
+    return { peak: peakFigure, trough: { absent: "the level still rises when the interval ends" } };
+  const { trough } = exposureOf(made, { fromH: peak.atH, toH });
+  return { peak: peakFigure, trough: { value: trough.mgPerL, unit: "mg/L", ...momentAt(content, trough.atH), ...noted } };
+}
+
+type RangeFigures = Pick<Figures, "hoursAbove" | "hoursWithin" | "hoursBelow" | "percentAbove" | "percentWithin" | "percentBelow">;
+
+function rangeFigures({ content, made }: Prepared): RangeFigures {
+  const range = content.setting.rangeMgPerL;
+  const whole = { fromH: 0, toH: made.horizonH };
+  const exposure = range && exposureOf(made, whole, range);
+  const hours = (value: number | undefined): Figure =>
+    value === undefined ? { absent: "no desired range is given" } : { value, unit: "h" };
+  const percent = (value: number | undefined): Figure =>
+    value === undefined ? { absent: "no desired range is given" } : { value: (100 * value) / made.horizonH, unit: "percent" };
+  return {
+    hoursAbove: hours(exposure?.hoursAbove),
+    hoursWithin: hours(exposure?.hoursWithin),
+    hoursBelow: hours(exposure?.hoursBelow),
+    percentAbove: percent(exposure?.hoursAbove),
+    percentWithin: percent(exposure?.hoursWithin),
+    percentBelow: percent(exposure?.hoursBelow),
+  };
+}
+
+function firstInRange(content: RegimenContent, { made }: Prepared): Figure {
+  const range = content.setting.rangeMgPerL;
+  if (range === undefined) return { absent: "no desired range is given" };
+  const atH = firstEntryH(made, range);
+  return atH === undefined
+    ? { absent: "the level never enters the range within the plan" }
+    : { value: atH, unit: "h", ...momentAt(content, atH) };
+}
+
+type SteadyFigures = Pick<
+  Figures,
+  | "steadyPeak"
+  | "steadyTrough"
+  | "steadyAverage"
+  | "steadyArea24"
+  | "steadyPercentWithin"
+  | "timeTo90Percent"
+  | "settledFrom"
+  | "accumulationRatio"
+  | "swing"
+>;
+
+function steadyFigures(prepared: Prepared): SteadyFigures {
+  const { content, settled } = prepared;
+  if (settled.kind === "none") return allAbsent(settled.why);
+  const { steady, startsAtH, course } = settled;
+  const { exposure, cycleH } = steady;
+  const inCycle = (value: number, atH: number): Figure => ({
+    value,
+    unit: "mg/L",
+    ...momentAt(content, startsAtH + atH),
+    note: "time of the first cycle; later cycles repeat it",
+  });
+  const plain = (value: number | undefined, unit: FigureUnit, absent: string): Figure =>
+    value === undefined ? { absent } : { value, unit };
+  return {
+    steadyPeak: inCycle(exposure.peak.mgPerL, exposure.peak.atH),
+    steadyTrough: inCycle(exposure.trough.mgPerL, exposure.trough.atH),
+    steadyAverage: { value: exposure.averageMgPerL, unit: "mg/L" },
+    steadyArea24: { value: steady.auc24MgHPerL, unit: "mg·h/L" },
+    steadyPercentWithin: plain(
+      exposure.hoursWithin === undefined ? undefined : (100 * exposure.hoursWithin) / cycleH,
+      "percent",
+      "no desired range is given",
+    ),
+    timeTo90Percent: { value: Math.LN10 / course.elimination[0]!.ratePerH, unit: "h" },
+    settledFrom: settledFigure(prepared),
+    accumulationRatio: { value: steady.accumulationRatio, unit: "times" },
+    swing: plain(steady.swing === undefined ? undefined : 100 * steady.swing, "percent", "the average level is 0"),
+  };
+}
+
+function settledFigure(prepared: Prepared): Figure {
+  const found = settledFrom(prepared);
+  if (found === undefined) return { absent: "not reached within the plan" };
+  return { value: found.atH, unit: "h", ...momentAt(prepared.content, found.atH), note: `from cycle ${found.cycle} on` };
+}
+
+function allAbsent(absent: string): SteadyFigures {
+  return {
+    steadyPeak: { absent },
+    steadyTrough: { absent },
+    steadyAverage: { absent },
+    steadyArea24: { absent },
+    steadyPercentWithin: { absent },
+    timeTo90Percent: { absent },
+    settledFrom: { absent },
+    accumulationRatio: { absent },
+    swing: { absent },
+  };
+}

@@ -1,0 +1,52 @@
+import type { RegimenContent } from "../contract/case.ts";
+import type { Course } from "../kinetics/course.ts";
+import { type SteadyState, steadyState } from "../kinetics/steady-state.ts";
+import { type Walk, walk } from "../kinetics/walk.ts";
+import { courseOfContent } from "../schedule/course-of-content.ts";
+import { cycleOf } from "../schedule/cycle.ts";
+import type { ScheduledDose } from "../schedule/scheduled-dose.ts";
+
+/** What is planned, or what was given so far with the plan going on. */
+export type Which = "planned" | "given";
+
+/** The repeating part of a schedule and the cycle it settles into, or why there is none. */
+export type Settled =
+  | { readonly kind: "cycle"; readonly startsAtH: number; readonly course: Course; readonly steady: SteadyState }
+  | { readonly kind: "none"; readonly why: string };
+
+/** One alternative made ready to be read: its course, walked once, and its steady state. */
+export interface Prepared {
+  readonly content: RegimenContent;
+  readonly which: Which;
+  readonly course: Course;
+  readonly doses: readonly ScheduledDose[];
+  readonly made: Walk;
+  readonly settled: Settled;
+}
+
+/**
+ * Expands, walks and solves one alternative, so that every figure after it reads instead of computing again.
+ *
+ * @throws {DomainError} if the content's kinetics or schedule cannot be computed
+ */
+export function prepare(content: RegimenContent, which: Which = "given"): Prepared {
+  const { course, doses } = courseOfContent(content, which);
+  return { content, which, course, doses, made: walk(course), settled: settledOf(content, course) };
+}
+
+/** The elimination of the end of the plan is repeated: what added clearance or change holds last, holds for ever. */
+function settledOf(content: RegimenContent, course: Course): Settled {
+  const cycle = cycleOf(content);
+  if (cycle.kind === "none") return cycle;
+  const last = course.elimination.at(-1)!;
+  if (!(last.ratePerH > 0)) return { kind: "none", why: "elimination stops, so the level never settles" };
+  const cycleCourse: Course = {
+    ...course,
+    elimination: [{ ...last, fromH: 0 }],
+    startConcentrationMgPerL: 0,
+    doses: cycle.doses,
+    horizonH: cycle.cycleH,
+  };
+  const startsAtH = (Date.parse(cycle.startsAt) - Date.parse(content.setting.plan.start)) / 3_600_000;
+  return { kind: "cycle", startsAtH, course: cycleCourse, steady: steadyState(cycleCourse, content.setting.rangeMgPerL) };
+}
