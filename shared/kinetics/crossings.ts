@@ -19,16 +19,24 @@ export interface Crossing {
 export function crossingsOf(made: Walk, mgPerL: number, window: TimeWindow): Crossing[] {
   if (!(mgPerL >= 0)) throw new DomainError("mgPerL", mgPerL, "0 or more");
   const found: Crossing[] = [];
-  let before: number | undefined;
+  let side = 0;
+  let touchH: number | undefined;
+  const visit = (atH: number, difference: number) => {
+    const now = Math.sign(difference);
+    if (now === 0) touchH ??= atH;
+    if (now === 0) return;
+    if (side !== 0 && now !== side) found.push({ atH: touchH ?? atH, direction: now > 0 ? "rising" : "falling" });
+    side = now;
+    touchH = undefined;
+  };
   for (const piece of monotonePieces(made, window)) {
-    if (before !== undefined && before <= mgPerL && piece.startMgPerL > mgPerL && before < piece.startMgPerL)
-      found.push({ atH: piece.fromH, direction: "rising" });
+    visit(piece.fromH, piece.startMgPerL - mgPerL);
     const hours = crossingHours(made, piece, mgPerL);
-    if (hours !== undefined)
-      found.push({ atH: piece.fromH + hours, direction: piece.endMgPerL > piece.startMgPerL ? "rising" : "falling" });
-    before = piece.endMgPerL;
+    // From here on the level is on the far side, so the visit at the end only keeps the books.
+    if (hours !== undefined) visit(piece.fromH + hours, piece.endMgPerL - mgPerL);
+    visit(piece.untilH, piece.endMgPerL - mgPerL);
   }
-  return found.filter(({ atH, direction }, index) => index === 0 || atH !== found[index - 1]!.atH || direction !== found[index - 1]!.direction);
+  return found;
 }
 
 /**
