@@ -53,7 +53,8 @@ export const figureGroups: readonly FigureGroup[] = [
       { name: "timeTo90Percent", label: "Time to 90 percent of steady state", meaning: "ln 10 divided by k, for a constant rate without a loading dose" },
       { name: "settledFrom", label: "Settled from", meaning: "first cycle from which the level at cycle start stays within 10 percent of steady state" },
       { name: "accumulationRatio", label: "Accumulation ratio", meaning: "area of a settled cycle over that of the first cycle from nothing" },
-      { name: "swing", label: "Swing", meaning: "peak minus trough, divided by the average, at steady state" },
+      { name: "swing", label: "Swing", meaning: "peak minus trough, divided by the trough, at steady state" },
+      { name: "fluctuation", label: "Fluctuation", meaning: "peak minus trough, divided by the average, at steady state" },
     ],
   },
   {

@@ -39,8 +39,10 @@ export interface Figures {
   readonly timeTo90Percent: Figure;
   readonly settledFrom: Figure;
   readonly accumulationRatio: Figure;
-  /** (peak - trough) / average at steady state, in percent. */
+  /** (peak - trough) / trough at steady state, in percent. */
   readonly swing: Figure;
+  /** (peak - trough) / average at steady state, in percent. */
+  readonly fluctuation: Figure;
   readonly amountPerDay: Figure;
   readonly totalAmount: Figure;
   readonly highestAmount: Figure;
@@ -71,9 +73,8 @@ export function figuresOfPrepared(prepared: Prepared, { areaFromH = 0 }: Pick<Fi
     firstTrough: first.trough,
     lastPeak: last.peak,
     lastTrough: last.trough,
-    average: { value: exposureOf(made, { fromH: 0, toH: made.horizonH }).averageMgPerL, unit: "mg/L" },
     area24: areaOver(prepared, areaFromH),
-    ...rangeFigures(prepared),
+    ...wholeFigures(prepared),
     ...steadyFigures(prepared),
     totalAmount: totalAmount(prepared),
     amountPerDay: amountPerDay(prepared),
@@ -98,29 +99,36 @@ function extremes(prepared: Prepared, interval: Interval | undefined, absent: st
   return { peak: peakFigure, trough: { value: trough.mgPerL, unit: "mg/L", ...momentAt(content, trough.atH), ...noted } };
 }
 
-type RangeFigures = Pick<Figures, "hoursAbove" | "hoursWithin" | "hoursBelow" | "percentAbove" | "percentWithin" | "percentBelow">;
+type WholeFigures = Pick<
+  Figures,
+  "average" | "hoursAbove" | "hoursWithin" | "hoursBelow" | "percentAbove" | "percentWithin" | "percentBelow"
+>;
 
-function rangeFigures({ content, made }: Prepared): RangeFigures {
-  const range = content.setting.rangeMgPerL;
-  const whole = { fromH: 0, toH: made.horizonH };
-  const exposure = range && exposureOf(made, whole, range);
-  const hours = (value: number | undefined): Figure =>
-    value === undefined ? { absent: "no desired range is given" } : { value, unit: "h" };
+function wholeFigures({ content, made }: Prepared): WholeFigures {
+  const { averageMgPerL, hoursAbove, hoursWithin, hoursBelow } = exposureOf(
+    made,
+    { fromH: 0, toH: made.horizonH },
+    content.setting.rangeMgPerL,
+  );
+  const hours = (value: number | undefined): Figure => (value === undefined ? noRange : { value, unit: "h" });
   const percent = (value: number | undefined): Figure =>
-    value === undefined ? { absent: "no desired range is given" } : { value: (100 * value) / made.horizonH, unit: "percent" };
+    value === undefined ? noRange : { value: (100 * value) / made.horizonH, unit: "percent" };
   return {
-    hoursAbove: hours(exposure?.hoursAbove),
-    hoursWithin: hours(exposure?.hoursWithin),
-    hoursBelow: hours(exposure?.hoursBelow),
-    percentAbove: percent(exposure?.hoursAbove),
-    percentWithin: percent(exposure?.hoursWithin),
-    percentBelow: percent(exposure?.hoursBelow),
+    average: { value: averageMgPerL, unit: "mg/L" },
+    hoursAbove: hours(hoursAbove),
+    hoursWithin: hours(hoursWithin),
+    hoursBelow: hours(hoursBelow),
+    percentAbove: percent(hoursAbove),
+    percentWithin: percent(hoursWithin),
+    percentBelow: percent(hoursBelow),
   };
 }
 
+const noRange: Figure = { absent: "no desired range is given" };
+
 function firstInRange(content: RegimenContent, { made }: Prepared): Figure {
   const range = content.setting.rangeMgPerL;
-  if (range === undefined) return { absent: "no desired range is given" };
+  if (range === undefined) return noRange;
   const atH = firstEntryH(made, range);
   return atH === undefined
     ? { absent: "the level never enters the range within the plan" }
@@ -138,6 +146,7 @@ type SteadyFigures = Pick<
   | "settledFrom"
   | "accumulationRatio"
   | "swing"
+  | "fluctuation"
 >;
 
 function steadyFigures(prepared: Prepared): SteadyFigures {
@@ -166,7 +175,8 @@ function steadyFigures(prepared: Prepared): SteadyFigures {
     timeTo90Percent: { value: Math.LN10 / course.elimination[0]!.ratePerH, unit: "h" },
     settledFrom: settledFigure(prepared),
     accumulationRatio: { value: steady.accumulationRatio, unit: "times" },
-    swing: plain(steady.swing === undefined ? undefined : 100 * steady.swing, "percent", "the average level is 0"),
+    swing: plain(steady.swing === undefined ? undefined : 100 * steady.swing, "percent", "the trough is 0"),
+    fluctuation: { value: 100 * steady.fluctuation, unit: "percent" },
   };
 }
 
@@ -187,5 +197,6 @@ function allAbsent(absent: string): SteadyFigures {
     settledFrom: { absent },
     accumulationRatio: { absent },
     swing: { absent },
+    fluctuation: { absent },
   };
 }

@@ -1,5 +1,6 @@
 import type { RegimenContent } from "../contract/case.ts";
 import type { Course } from "../kinetics/course.ts";
+import { DomainError } from "../errors.ts";
 import { type SteadyState, steadyState } from "../kinetics/steady-state.ts";
 import { type Walk, walk } from "../kinetics/walk.ts";
 import { courseOfContent } from "../schedule/course-of-content.ts";
@@ -48,5 +49,20 @@ function settledOf(content: RegimenContent, course: Course): Settled {
     horizonH: cycle.cycleH,
   };
   const startsAtH = (Date.parse(cycle.startsAt) - Date.parse(content.setting.plan.start)) / 3_600_000;
-  return { kind: "cycle", startsAtH, course: cycleCourse, steady: steadyState(cycleCourse, content.setting.rangeMgPerL) };
+  return solved(() => ({
+    kind: "cycle",
+    startsAtH,
+    course: cycleCourse,
+    steady: steadyState(cycleCourse, content.setting.rangeMgPerL),
+  }));
+}
+
+/** A cycle that cannot be solved (a pump log longer than it) has no steady state; the rest still has figures. */
+function solved(solve: () => Settled): Settled {
+  try {
+    return solve();
+  } catch (error) {
+    if (error instanceof DomainError) return { kind: "none", why: error.message };
+    throw error;
+  }
 }
