@@ -33,6 +33,9 @@ export const limits = {
 
 export type LimitName = keyof typeof limits;
 
+/** F and S where nothing else is stated: all of the amount arrives, and all of it is drug. */
+export const wholeAmount = 1;
+
 /** How many of each thing one request or one case may hold. */
 export const counts = {
   doses: 10_000,

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { resolveKinetics } from "../kinetics/disposition.ts";
+import { wholeAmount } from "./limits.ts";
 import { quantity } from "./quantity.ts";
 
 const KineticValues = z.strictObject({
@@ -8,8 +9,8 @@ const KineticValues = z.strictObject({
   eliminationRatePerH: quantity("eliminationRatePerH").exactOptional(),
   halfLifeH: quantity("halfLifeH").exactOptional(),
   absorptionRatePerH: quantity("absorptionRatePerH").exactOptional(),
-  bioavailability: quantity("bioavailability").default(1),
-  saltFactor: quantity("saltFactor").default(1),
+  bioavailability: quantity("bioavailability").default(wholeAmount),
+  saltFactor: quantity("saltFactor").default(wholeAmount),
 });
 
 /**

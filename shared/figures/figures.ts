@@ -64,7 +64,7 @@ export function figuresOf(content: RegimenContent, options: FigureOptions = {}):
 
 /** As `figuresOf`, for an alternative that is already walked. Cost: a few passes over its stretches. */
 export function figuresOfPrepared(prepared: Prepared, { areaFromH = 0 }: Pick<FigureOptions, "areaFromH"> = {}): Figures {
-  const { content, made } = prepared;
+  const { content } = prepared;
   const nothing = prepared.doses.length === 0 ? "no dose is given" : undefined;
   const first = extremes(prepared, firstInterval(prepared), "no dose is given");
   const last = extremes(prepared, lastInterval(prepared), nothing ?? "only one dose is given, so there is no later interval");

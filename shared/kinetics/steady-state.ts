@@ -33,7 +33,7 @@ export interface SteadyState {
  * into it; elimination changes repeat with the cycle.
  *
  * @param course doses with atH in [0, horizonH); horizonH is the length of the cycle
- * @throws {DomainError} if nothing is eliminated over a cycle, or a pump log does not end within it
+ * @throws {DomainError} if nothing is eliminated over a cycle, or a pump never stops
  *
  * Source: Gibaldi and Perrier, Pharmacokinetics, 2nd ed. (1982), ch. 3, from memory, for single doses.
  */
@@ -86,20 +86,28 @@ function eliminationOver(made: Walk): number {
 
 /** One cycle of what a dose looks like when every cycle has it. */
 function fold(dose: Dose, index: number, cycleH: number): Dose[] {
-  if (dose.kind === "pump") {
-    const end = dose.steps.at(-1)!;
-    if (end.rateMgPerH !== 0 || end.atH > cycleH)
-      throw new DomainError(`doses/${index}/steps`, end.rateMgPerH, `0 mg/h at the last step, by the end of the cycle (${cycleH} h)`);
-    return [dose];
-  }
+  if (dose.kind === "pump") return foldPump(dose.steps, index, cycleH);
   if (!(dose.atH >= 0 && dose.atH < cycleH)) throw new DomainError(`doses/${index}/atH`, dose.atH, `from 0 to below ${cycleH}`);
   if (dose.kind === "bolus") return [dose];
   if (dose.kind === "absorbed") return [{ ...dose, atH: (dose.atH + dose.lagH) % cycleH, lagH: 0 }];
-  const rateMgPerH = dose.amountMg / dose.durationH;
-  const whole = Math.floor(dose.durationH / cycleH);
-  const restH = dose.durationH - whole * cycleH;
+  return foldRate({ atH: dose.atH, hours: dose.durationH, rateMgPerH: dose.amountMg / dose.durationH }, cycleH);
+}
+
+function foldPump(steps: Extract<Dose, { kind: "pump" }>["steps"], index: number, cycleH: number): Dose[] {
+  const { rateMgPerH: lastMgPerH } = steps.at(-1)!;
+  if (lastMgPerH !== 0) throw new DomainError(`doses/${index}/steps`, lastMgPerH, "0 mg/h at the last step, so that the pump stops");
+  return steps.slice(1).flatMap((next, step) => {
+    const { atH, rateMgPerH } = steps[step]!;
+    return rateMgPerH === 0 ? [] : foldRate({ atH: atH % cycleH, hours: next.atH - atH, rateMgPerH }, cycleH);
+  });
+}
+
+/** A rate that outlasts the cycle runs in several cycles at once: whole cycles as a constant, the rest as a box. */
+function foldRate({ atH, hours, rateMgPerH }: { atH: number; hours: number; rateMgPerH: number }, cycleH: number): Dose[] {
+  const whole = Math.floor(hours / cycleH);
+  const restH = hours - whole * cycleH;
   const constant: Dose[] = whole > 0 ? [{ kind: "pump", steps: [{ atH: 0, rateMgPerH: whole * rateMgPerH }] }] : [];
   const box = (fromH: number, toH: number): Dose[] =>
     toH > fromH ? [{ kind: "pump", steps: [{ atH: fromH, rateMgPerH }, { atH: toH, rateMgPerH: 0 }] }] : [];
-  return [...constant, ...box(dose.atH, Math.min(cycleH, dose.atH + restH)), ...box(0, dose.atH + restH - cycleH)];
+  return [...constant, ...box(atH, Math.min(cycleH, atH + restH)), ...box(0, atH + restH - cycleH)];
 }

@@ -1,0 +1,104 @@
+import { TZDate } from "@date-fns/tz";
+import { tzOffset } from "@date-fns/tz/tzOffset";
+import { format } from "date-fns/format";
+import { formatISO } from "date-fns/formatISO";
+import type { Instant } from "../contract/schedule.ts";
+import { DomainError } from "../errors.ts";
+
+export const msPerHour = 3_600_000;
+const msPerMinute = 60_000;
+const msPerDay = 86_400_000;
+
+/** How a wall-clock time was turned into an instant. */
+export type Resolution = "exact" | "skipped" | "repeated";
+
+export interface ResolvedTime {
+  readonly instant: Instant;
+  readonly resolution: Resolution;
+}
+
+/**
+ * The instant of a wall-clock time. The rule where the clock jumps: a time that does not exist that day
+ * is moved later by the length of the gap (01:30 becomes 02:30); of a time that comes twice, the first is meant.
+ *
+ * @param localText "2026-03-29T01:30" or "2026-03-29 01:30", seconds allowed
+ * @param zone      IANA name
+ * @throws {DomainError} if the text is no date and 24-hour time, or names a day that does not exist
+ */
+export function toInstant(localText: string, zone: string): ResolvedTime {
+  const localMs = localMsOf(localText);
+  const before = offsetMs(zone, localMs - msPerDay);
+  const after = offsetMs(zone, localMs + msPerDay);
+  const first = localMs - Math.max(before, after);
+  const second = localMs - Math.min(before, after);
+  const isTrue = (instantMs: number) => instantMs + offsetMs(zone, instantMs) === localMs;
+  if (isTrue(first)) return { instant: instantOf(first, zone), resolution: second !== first && isTrue(second) ? "repeated" : "exact" };
+  if (isTrue(second)) return { instant: instantOf(second, zone), resolution: "exact" };
+  return { instant: instantOf(localMs - before, zone), resolution: "skipped" };
+}
+
+/** The second instant of a wall-clock time that comes twice; undefined where it comes once or not at all. */
+export function secondInstant(localText: string, zone: string): Instant | undefined {
+  if (toInstant(localText, zone).resolution !== "repeated") return undefined;
+  const localMs = localMsOf(localText);
+  return instantOf(localMs - Math.min(offsetMs(zone, localMs - msPerDay), offsetMs(zone, localMs + msPerDay)), zone);
+}
+
+/** Wall-clock date and time of an instant: "2026-03-29T02:30". */
+export function toLocal(instant: Instant, zone: string): string {
+  return format(inZone(instant, zone), "yyyy-MM-dd'T'HH:mm");
+}
+
+/** Elapsed hours from one instant to another. */
+export function hoursBetween(start: Instant, instant: Instant): number {
+  return (Date.parse(instant) - Date.parse(start)) / msPerHour;
+}
+
+/** The instant some elapsed hours later, to the second, with the offset that holds in the zone then. */
+export function instantAt(start: Instant, hours: number, zone: string): Instant {
+  return instantOf(Math.round((Date.parse(start) + hours * msPerHour) / 1_000) * 1_000, zone);
+}
+
+/** Date and 24-hour time as they are read out: "Sun 29 Mar 2026 02:30". */
+export function sayClock(instant: Instant, zone: string): string {
+  return format(inZone(instant, zone), "EEE d MMM yyyy HH:mm");
+}
+
+/** Date alone: "Sun 29 Mar 2026". */
+export function sayDate(instant: Instant, zone: string): string {
+  return format(inZone(instant, zone), "EEE d MMM yyyy");
+}
+
+/** 24-hour time alone: "02:30". */
+export function sayTime(instant: Instant, zone: string): string {
+  return format(inZone(instant, zone), "HH:mm");
+}
+
+/** Minutes east of Greenwich at an instant. */
+export function offsetMinutes(instant: Instant, zone: string): number {
+  return tzOffset(zone, new Date(instant));
+}
+
+/** Local milliseconds, as if the wall clock were UTC. Only times that a calendar and a 24-hour clock have. */
+function localMsOf(localText: string): number {
+  const allowed = "a date and 24-hour time such as 2026-03-29 08:00, from the year 1975 to 2199";
+  const found = /^(\d{4})-(\d\d)-(\d\d)[T ](\d\d):(\d\d)(?::(\d\d))?$/.exec(localText.trim());
+  if (found === null) throw new DomainError("time", localText, allowed);
+  const [year, month, day, hour, minute, second] = found.slice(1).map((part) => Number(part ?? 0)) as [number, number, number, number, number, number];
+  const made = new Date(Date.UTC(year, month - 1, day, hour, minute, second));
+  const kept = made.getUTCMonth() === month - 1 && made.getUTCDate() === day && hour < 24 && minute < 60 && second < 60;
+  if (!kept || year < 1975 || year > 2199) throw new DomainError("time", localText, allowed);
+  return made.getTime();
+}
+
+function offsetMs(zone: string, instantMs: number): number {
+  return tzOffset(zone, new Date(instantMs)) * msPerMinute;
+}
+
+function instantOf(instantMs: number, zone: string): Instant {
+  return formatISO(new TZDate(instantMs, zone));
+}
+
+function inZone(instant: Instant, zone: string): TZDate {
+  return new TZDate(Date.parse(instant), zone);
+}
