@@ -1,0 +1,60 @@
+import { useSignal } from "@preact/signals";
+import { Field, type FieldWords, describedBy } from "./field.tsx";
+
+/** "typing": every key; "settled": the person left the field or pressed Enter. */
+export type TypingStage = "typing" | "settled";
+
+interface TextFieldProps extends FieldWords {
+  readonly text: string;
+  readonly onText: (text: string, stage: TypingStage) => void;
+  readonly unit?: string;
+  /** "decimal" brings up the digits on a touch keyboard; what is typed stays free text. */
+  readonly mode?: "text" | "decimal" | "numeric";
+  readonly lines?: number;
+  readonly suggestions?: string;
+  readonly longest?: number;
+  readonly required?: boolean;
+}
+
+/**
+ * A text input that always shows what was typed. While the person is typing, a problem that the typing
+ * has just made is held back; it is shown once the field is left.
+ */
+export function TextField(props: TextFieldProps) {
+  const typed = useSignal<string | undefined>(undefined);
+  const typing = typed.value !== undefined && typed.value !== props.text;
+  const words = typing ? { ...props, problem: undefined } : props;
+  const shared = {
+    id: props.id,
+    value: typed.value ?? props.text,
+    "aria-invalid": Boolean(words.problem),
+    "aria-describedby": describedBy(words),
+    "data-typing": typing ? "" : undefined,
+    required: props.required,
+    maxLength: props.longest,
+    autocomplete: "off",
+    onInput: (event: { currentTarget: { value: string } }) => {
+      typed.value = event.currentTarget.value;
+      props.onText(event.currentTarget.value, "typing");
+    },
+    onChange: (event: { currentTarget: { value: string } }) => {
+      props.onText(event.currentTarget.value, "settled");
+      typed.value = undefined;
+    },
+    onBlur: () => {
+      typed.value = undefined;
+    },
+  } as const;
+  return (
+    <Field words={words}>
+      {props.lines === undefined ? (
+        <span class="with-unit">
+          <input {...shared} type="text" inputMode={props.mode ?? "text"} list={props.suggestions} />
+          {props.unit && <span class="unit">{props.unit}</span>}
+        </span>
+      ) : (
+        <textarea {...shared} rows={props.lines} />
+      )}
+    </Field>
+  );
+}
