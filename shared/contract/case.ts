@@ -83,9 +83,17 @@ export const Schedule = z
   .meta({ id: "Schedule" });
 export type Schedule = z.infer<typeof Schedule>;
 
-/** Why somebody went on in spite of a caution that stops. */
+/**
+ * Why somebody went on in spite of a caution that stops. It holds the caution's text, so that a reason
+ * given for one value does not answer for the next.
+ */
 export const CautionReason = z
-  .strictObject({ code: z.string().min(1).max(80), about: z.string().max(200), reason: z.string().trim().min(3).max(counts.noteCharacters) })
+  .strictObject({
+    code: z.string().min(1).max(80),
+    about: z.string().max(200),
+    text: z.string().max(counts.noteCharacters),
+    reason: z.string().trim().min(3, { error: "must say why, in at least 3 characters" }).max(counts.noteCharacters),
+  })
   .meta({ id: "CautionReason" });
 export type CautionReason = z.infer<typeof CautionReason>;
 
