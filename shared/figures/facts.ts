@@ -1,0 +1,138 @@
+import type { RegimenContent } from "../contract/case.ts";
+import { limits } from "../contract/limits.ts";
+import type { DoseRecord, Order } from "../contract/schedule.ts";
+import type { DatedEliminationChange, Origin, StatedKinetics } from "../contract/setting.ts";
+import { hoursBetween, sayClock } from "../schedule/clock.ts";
+import { sayGive, sayWhen } from "../schedule/say-order.ts";
+import { formatDose, formatDuration, formatLevel, formatQuantity } from "../units/format.ts";
+
+/** One thing that an alternative states, in words with units; `path` stays the same while it is the same thing. */
+export interface Fact {
+  readonly path: string;
+  readonly label: string;
+  readonly words: string;
+  /** Where it came from, where that is kept. */
+  readonly origin?: string;
+}
+
+/** Digits with which an entered value is repeated: all that anybody types. */
+const enteredDigits = 12;
+
+/** Everything that one alternative states, in the order in which it is read. */
+export function factsOf(content: RegimenContent): Fact[] {
+  return [...settingFacts(content), ...scheduleFacts(content)];
+}
+
+/** Who and what drug: the plan, the kinetics, the start, the range and changes of elimination. */
+export function settingFacts(content: RegimenContent): Fact[] {
+  const { setting, timeZone } = content;
+  const { startConcentration, rangeMgPerL } = setting;
+  return [
+    { path: "timeZone", label: "Time zone", words: timeZone },
+    { path: "setting/plan/start", label: "Start of the plan", words: sayClock(setting.plan.start, timeZone) },
+    { path: "setting/plan/horizonH", label: "Length of the plan", words: entered(setting.plan.horizonH, "h") },
+    ...kineticFacts(setting.kinetics),
+    ...(startConcentration === undefined
+      ? []
+      : [
+          {
+            path: "setting/startConcentration",
+            label: "Level already present at the start",
+            words: entered(startConcentration.valueMgPerL, "mg/L"),
+            origin: sayOrigin(startConcentration.origin),
+          },
+        ]),
+    ...(rangeMgPerL === undefined
+      ? []
+      : [{ path: "setting/rangeMgPerL", label: "Desired range", words: `${formatLevel(rangeMgPerL.low)} to ${formatLevel(rangeMgPerL.high)}` }]),
+    ...setting.eliminationChanges.map((change) => ({
+      path: `setting/eliminationChanges/${change.id}`,
+      label: "Changed elimination",
+      words: sayEliminationChange(change, timeZone),
+      origin: sayOrigin(change.origin),
+    })),
+  ];
+}
+
+/** Orders, exceptions, records, extra doses and the reasons given for cautions. */
+export function scheduleFacts(content: RegimenContent): Fact[] {
+  const { schedule, timeZone } = content;
+  const numberOf = (orderId: string) => schedule.orders.findIndex(({ id }) => id === orderId) + 1;
+  return [
+    { path: "regimenLabel", label: "Name of the alternative", words: content.regimenLabel },
+    ...schedule.orders.flatMap((order, index) => orderFacts(order, index + 1, timeZone)),
+    ...schedule.records.map((record) => ({
+      path: `schedule/records/${record.orderId}#${record.occurrence}`,
+      label: `Given: order ${numberOf(record.orderId)}, dose ${record.occurrence + 1}`,
+      words: withNote(sayOutcome(record, timeZone), record.note),
+    })),
+    ...schedule.extras.map(({ id, at, give, note }) => ({
+      path: `schedule/extras/${id}`,
+      label: "Extra dose given",
+      words: withNote(`${sayGive(give)}, ${sayClock(at, timeZone)}`, note),
+    })),
+    ...content.cautionReasons.map(({ code, about, text, reason }) => ({
+      path: `cautionReasons/${code}/${about}`,
+      label: "Reason given for a caution",
+      words: `${reason} (caution: ${text})`,
+    })),
+  ];
+}
+
+/** A change of elimination in words. */
+export function sayEliminationChange(change: DatedEliminationChange, timeZone: string): string {
+  const from = `from ${sayClock(change.from, timeZone)}`;
+  if (change.kind === "rate") return `k becomes ${entered(change.eliminationRatePerH, "per h")} ${from}`;
+  if (change.kind === "clearance") return `CL becomes ${entered(change.clearanceLPerH, "L/h")} ${from}`;
+  const length = formatDuration(hoursBetween(change.from, change.until));
+  return `${entered(change.addedClearanceLPerH, "L/h")} added ${from} to ${sayClock(change.until, timeZone)} (${length})`;
+}
+
+export function sayOrigin(origin: Origin): string {
+  return origin.note.trim() === "" ? "typed, without a note" : `typed: ${origin.note.trim()}`;
+}
+
+function kineticFacts(kinetics: StatedKinetics): Fact[] {
+  return Object.entries(kinetics).map(([name, { value, origin }]) => {
+    const { label, unit } = limits[name as keyof StatedKinetics];
+    const printed = unit === "1/h" ? "per h" : unit;
+    return { path: `setting/kinetics/${name}`, label, words: entered(value, printed), origin: sayOrigin(origin) };
+  });
+}
+
+function orderFacts(order: Order, number: number, timeZone: string): Fact[] {
+  const path = `schedule/orders/${order.id}`;
+  const steps = order.give.kind === "pump" ? `: ${order.give.steps.map(({ afterH, rateMgPerH }) => `${entered(rateMgPerH, "mg per hour")} from ${entered(afterH, "h")}`).join(", ")}` : "";
+  return [
+    { path: `${path}/give`, label: `Order ${number}: what`, words: `${sayGive(order.give)}${steps}` },
+    { path: `${path}/when`, label: `Order ${number}: when`, words: sayWhen(order.when, timeZone) },
+    ...(order.note === "" ? [] : [{ path: `${path}/note`, label: `Order ${number}: note`, words: order.note }]),
+    ...order.exceptions.map((exception) => ({
+      path: `${path}/exceptions/${exception.occurrence}`,
+      label: `Order ${number}, dose ${exception.occurrence + 1}: planned otherwise`,
+      words: "skip" in exception ? "left out" : sayChange(exception, timeZone),
+    })),
+  ];
+}
+
+function sayOutcome({ outcome }: DoseRecord, timeZone: string): string {
+  if (outcome.kind === "as-planned") return "as planned";
+  return outcome.kind === "omitted" ? "omitted" : sayChange(outcome, timeZone);
+}
+
+function sayChange(change: { at?: string; amountMg?: number; durationH?: number }, timeZone: string): string {
+  const parts = [
+    change.amountMg !== undefined && formatDose(change.amountMg),
+    change.durationH !== undefined && `over ${formatDuration(change.durationH)}`,
+    change.at !== undefined && sayClock(change.at, timeZone),
+  ].filter(Boolean);
+  return parts.length === 0 ? "no change stated" : parts.join(", ");
+}
+
+function withNote(words: string, note: string): string {
+  return note.trim() === "" ? words : `${words} (${note.trim()})`;
+}
+
+function entered(value: number, unit: string): string {
+  return formatQuantity(value, unit, enteredDigits);
+}
