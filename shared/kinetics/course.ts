@@ -2,6 +2,7 @@ import type { Dose, EliminationChange } from "../contract/dose.ts";
 import type { Parameters } from "../contract/parameters.ts";
 import { DomainError } from "../errors.ts";
 import { type Kinetics, resolveKinetics } from "./disposition.ts";
+import { ExactSum } from "./exact-sum.ts";
 
 /** Elimination from one hour to the next piece. `ratePerH` = base k (if it still holds) or a set value, plus added. */
 export interface EliminationPiece {
@@ -62,23 +63,33 @@ export function courseOf(input: CourseInput): Course {
  * at the same hour); added clearances hold for their span and add up on whatever holds then.
  */
 export function eliminationPieces(kinetics: Kinetics, changes: readonly EliminationChange[]): EliminationPiece[] {
-  const edges = new Set([0]);
-  for (const change of changes) {
-    edges.add(change.fromH);
-    if ("toH" in change) edges.add(change.toH);
-  }
-  const lasting = changes.filter((change) => !("toH" in change)).sort((one, other) => one.fromH - other.fromH);
-  const added = changes.filter((change) => "toH" in change);
+  const lasting = changes.filter((change) => !("toH" in change)).sort(byHour);
+  const steps = changes.flatMap((change) => ("toH" in change ? addedSteps(change) : [])).sort(byHour);
+  const edges = new Set([0, ...[...lasting, ...steps].map(({ fromH }) => fromH)]);
+  const addedLPerH = new ExactSum();
   let next = 0;
+  let nextStep = 0;
   return [...edges]
     .sort((one, other) => one - other)
     .map((fromH) => {
       while (next < lasting.length && lasting[next]!.fromH <= fromH) next++;
-      const extra = added
-        .filter((span) => span.fromH <= fromH && fromH < span.toH)
-        .reduce((sum, span) => sum + span.addedClearanceLPerH, 0);
-      return piece(kinetics, fromH, lasting[next - 1], extra);
+      for (; nextStep < steps.length && steps[nextStep]!.fromH <= fromH; nextStep++) addedLPerH.add(steps[nextStep]!.byLPerH);
+      return piece(kinetics, fromH, lasting[next - 1], addedLPerH.value);
     });
+}
+
+type AddedClearance = Extract<EliminationChange, { readonly toH: number }>;
+
+/** A span of added clearance as a step up and a step down; their sum is exactly 0. */
+function addedSteps({ fromH, toH, addedClearanceLPerH }: AddedClearance): { fromH: number; byLPerH: number }[] {
+  return [
+    { fromH, byLPerH: addedClearanceLPerH },
+    { fromH: toH, byLPerH: -addedClearanceLPerH },
+  ];
+}
+
+function byHour(one: { readonly fromH: number }, other: { readonly fromH: number }): number {
+  return one.fromH - other.fromH;
 }
 
 function piece(kinetics: Kinetics, fromH: number, holds: EliminationChange | undefined, addedLPerH: number): EliminationPiece {

@@ -1,5 +1,4 @@
 import type { SecondOpinion } from "../contract/case.ts";
-import type { Dose } from "../contract/dose.ts";
 import type { Course } from "./course.ts";
 import { levelsAt } from "./levels.ts";
 import { integrate } from "./quadrature.ts";
@@ -8,27 +7,33 @@ import { walk } from "./walk.ts";
 /** A walk and its second opinion that differ by more than this, relative to the largest level, are refused. */
 export const secondOpinionTolerance = 1e-6;
 
-/** e^-45 is 3e-20: what is weaker than that cannot show in a double. */
-const faintest = 45;
-
 /**
  * Levels by another road: numerical convolution of the input train with the impulse response.
  *
  *     C(t) = (1/V) [ V C0 h(t, 0) + sum of m_i h(t, t_i) + integral of g(s) h(t, s) ds ],
  *     h(t, s) = e^-(K(t) - K(s)),   K(t) = integral of k from 0 to t
  *
- * The integral is done by adaptive quadrature, panel by panel. Nothing here is shared with the walk: it
- * reads the doses and the staircase of k anew, and knows no closed form of a level.
+ * The integral is done by quadrature, panel by panel between the hours where g or k jumps; a panel's
+ * integral is done once, up to its end, and carried to each t by h. Nothing here is shared with the walk:
+ * it reads the doses and the staircase of k anew, knows no closed form of a level, and never carries an
+ * amount in the body from one event to the next.
  *
- * @param timesH elapsed hours, in any order; at a bolus, the value just after it
+ * Cost: at most times x (doses + changes of elimination), of one exponential each.
+ *
+ * @param timesH elapsed hours within the course, in any order; at a bolus, the value just after it
  * @returns      mg/L, one per time
  */
 export function secondOpinionLevels(course: Course, timesH: ArrayLike<number>): Float64Array {
-  const clearing = cumulativeElimination(course);
+  const clearedBy = cumulativeElimination(course);
+  const parcels = parcelsOf(course, Array.from(timesH), clearedBy);
   return Float64Array.from(timesH, (timeH) => {
-    const survives = (fromH: number) => Math.exp(clearing.until(fromH) - clearing.until(timeH));
-    let amountMg = course.startConcentrationMgPerL * course.kinetics.volumeL * survives(0);
-    for (const dose of course.doses) amountMg += leftOf(course, dose, timeH, clearing, survives);
+    const cleared = clearedBy(timeH);
+    let amountMg = 0;
+    for (let index = countUntil(parcels, timeH) - 1; index >= 0; index--) {
+      const parcel = parcels[index]!;
+      if (cleared - parcel.cleared > faintest) break;
+      amountMg += parcel.amountMg * Math.exp(parcel.cleared - cleared);
+    }
     return amountMg / course.kinetics.volumeL;
   });
 }
@@ -55,83 +60,120 @@ export function compareWithSecondOpinion(course: Course): SecondOpinion {
   };
 }
 
-/** What one dose has left in the body at one hour. */
-function leftOf(course: Course, dose: Dose, timeH: number, clearing: Clearing, survives: (fromH: number) => number): number {
-  const { saltFactor, bioavailability } = course;
-  if (dose.kind === "bolus") return dose.atH <= timeH ? saltFactor * dose.amountMg * survives(dose.atH) : 0;
-  const convolve = (input: (atH: number) => number, fromH: number, untilH: number, cuts: readonly number[]) =>
-    convolved(input, fromH, Math.min(untilH, timeH), cuts, timeH, clearing, survives);
-  if (dose.kind === "infusion") {
-    const rateMgPerH = (saltFactor * dose.amountMg) / dose.durationH;
-    return convolve(() => rateMgPerH, dose.atH, dose.atH + dose.durationH, []);
-  }
-  if (dose.kind === "absorbed") {
-    const ka = course.absorptionRatePerH!;
-    const fromH = dose.atH + dose.lagH;
-    const availableMg = saltFactor * bioavailability * dose.amountMg;
-    const cuts = [1, 3, 7, 15, 30].map((lives) => fromH + lives / ka);
-    return convolve((atH) => availableMg * ka * Math.exp(-ka * (atH - fromH)), fromH, fromH + faintest / ka, cuts);
-  }
-  return dose.steps.reduce((amountMg, step, index) => {
-    const rateMgPerH = saltFactor * step.rateMgPerH;
-    return amountMg + (rateMgPerH === 0 ? 0 : convolve(() => rateMgPerH, step.atH, dose.steps[index + 1]?.atH ?? course.horizonH, []));
-  }, 0);
+/** Drug that is in the body at an hour, as if it had been given at once then. */
+interface Parcel {
+  readonly atH: number;
+  /** K(atH). */
+  readonly cleared: number;
+  readonly amountMg: number;
 }
 
-/** Integral of input x survival, cut where k changes and where the integrand bends, skipping what has faded away. */
-function convolved(
-  input: (atH: number) => number,
-  fromH: number,
-  untilH: number,
-  cuts: readonly number[],
-  timeH: number,
-  clearing: Clearing,
-  survives: (fromH: number) => number,
-): number {
-  const startH = Math.max(fromH, clearing.hourAt(clearing.until(timeH) - faintest));
-  if (!(untilH > startH)) return 0;
-  const bends = [1, 3, 7, 15, 30].map((lives) => clearing.hourAt(clearing.until(timeH) - lives));
-  const edges = [...cuts, ...bends, ...clearing.edgesH].filter((edgeH) => edgeH > startH && edgeH < untilH).sort((one, other) => one - other);
+/** e^-90 is 1e-39: no amount within the limits shows through that. */
+const faintest = 90;
+
+/** Start, boluses, and the continuous input of each panel, in order of time. */
+function parcelsOf(course: Course, timesH: readonly number[], clearedBy: (atH: number) => number): Parcel[] {
+  const given = [{ atH: 0, amountMg: course.startConcentrationMgPerL * course.kinetics.volumeL }];
+  for (const dose of course.doses)
+    if (dose.kind === "bolus") given.push({ atH: dose.atH, amountMg: course.saltFactor * dose.amountMg });
+  return [...given, ...panelsOf(course, timesH)]
+    .filter(({ amountMg }) => amountMg !== 0)
+    .map((parcel) => ({ ...parcel, cleared: clearedBy(parcel.atH) }))
+    .sort((one, other) => one.atH - other.atH);
+}
+
+/** What the continuous input of each panel leaves in the body at the panel's end. */
+function panelsOf(course: Course, timesH: readonly number[]): { atH: number; amountMg: number }[] {
+  const steps = stepsOf(course);
+  const lastH = timesH.reduce((latest, timeH) => Math.max(latest, timeH), 0);
+  const cuts = [...steps.map(({ atH }) => atH), ...timesH, ...course.elimination.map(({ fromH }) => fromH)];
+  const edgesH = [...new Set([0, ...cuts])].filter((edgeH) => edgeH <= lastH).sort((one, other) => one - other);
+  const ka = course.absorptionRatePerH ?? 0;
+  let rateMgPerH = 0;
+  let depotMg = 0;
+  let step = 0;
+  let change = 0;
+  return edgesH.slice(1).map((untilH, panel) => {
+    const fromH = edgesH[panel]!;
+    for (; step < steps.length && steps[step]!.atH <= fromH; step++) {
+      rateMgPerH += steps[step]!.rateMgPerH;
+      depotMg += steps[step]!.depotMg;
+    }
+    while (change + 1 < course.elimination.length && course.elimination[change + 1]!.fromH <= fromH) change++;
+    const amountMg = panelMg({ fromH, untilH, rateMgPerH, depotMg, ka, k: course.elimination[change]!.ratePerH });
+    depotMg *= Math.exp(-ka * (untilH - fromH));
+    return { atH: untilH, amountMg };
+  });
+}
+
+/** Jumps of the continuous input: the total rate, and what lies at absorption sites. */
+function stepsOf(course: Course): { atH: number; rateMgPerH: number; depotMg: number }[] {
+  const { saltFactor, bioavailability } = course;
+  const steps: { atH: number; rateMgPerH: number; depotMg: number }[] = [];
+  for (const dose of course.doses) {
+    if (dose.kind === "absorbed")
+      steps.push({ atH: dose.atH + dose.lagH, rateMgPerH: 0, depotMg: saltFactor * bioavailability * dose.amountMg });
+    if (dose.kind === "infusion") {
+      const rateMgPerH = (saltFactor * dose.amountMg) / dose.durationH;
+      steps.push({ atH: dose.atH, rateMgPerH, depotMg: 0 });
+      steps.push({ atH: dose.atH + dose.durationH, rateMgPerH: -rateMgPerH, depotMg: 0 });
+    }
+    if (dose.kind === "pump")
+      dose.steps.forEach((step, index) => {
+        const rateMgPerH = saltFactor * (step.rateMgPerH - (dose.steps[index - 1]?.rateMgPerH ?? 0));
+        steps.push({ atH: step.atH, rateMgPerH, depotMg: 0 });
+      });
+  }
+  return steps.sort((one, other) => one.atH - other.atH);
+}
+
+interface Panel {
+  readonly fromH: number;
+  readonly untilH: number;
+  readonly rateMgPerH: number;
+  readonly depotMg: number;
+  readonly ka: number;
+  readonly k: number;
+}
+
+/** Integral of (R + ka D e^(-ka (s - from))) e^(-k (until - s)) over a panel, cut where the integrand bends. */
+function panelMg({ fromH, untilH, rateMgPerH, depotMg, ka, k }: Panel): number {
+  if (rateMgPerH === 0 && depotMg === 0) return 0;
+  const input = (atH: number) => rateMgPerH + (depotMg === 0 ? 0 : ka * depotMg * Math.exp(-ka * (atH - fromH)));
+  const bends = [1, 3, 7, 15, 30].flatMap((lives) => [untilH - lives / k, depotMg === 0 ? fromH : fromH + lives / ka]);
+  const edges = bends.filter((edgeH) => edgeH > fromH && edgeH < untilH).sort((one, other) => one - other);
   let total = 0;
-  let beforeH = startH;
+  let beforeH = fromH;
   for (const edgeH of [...edges, untilH]) {
-    total += integrate((atH) => input(atH) * survives(atH), beforeH, edgeH);
+    total += integrate((atH) => input(atH) * Math.exp(-k * (untilH - atH)), beforeH, edgeH);
     beforeH = edgeH;
   }
   return total;
 }
 
-/** K(t), the integral of k from 0, and its inverse. */
-interface Clearing {
-  readonly edgesH: readonly number[];
-  until(atH: number): number;
-  /** The latest hour at which K has reached a value; 0 for values below 0. */
-  hourAt(value: number): number;
+/** K(t), the integral of k from 0. */
+function cumulativeElimination(course: Course): (atH: number) => number {
+  const pieces = course.elimination;
+  const atEdge = [0];
+  for (let edge = 1; edge < pieces.length; edge++)
+    atEdge.push(atEdge[edge - 1]! + pieces[edge - 1]!.ratePerH * (pieces[edge]!.fromH - pieces[edge - 1]!.fromH));
+  const edges = pieces.map(({ fromH }) => ({ atH: fromH }));
+  return (atH) => {
+    const edge = Math.max(0, countUntil(edges, atH) - 1);
+    return atEdge[edge]! + pieces[edge]!.ratePerH * (atH - pieces[edge]!.fromH);
+  };
 }
 
-function cumulativeElimination(course: Course): Clearing {
-  const edgesH = course.elimination.map(({ fromH }) => fromH);
-  const rates = course.elimination.map(({ ratePerH }) => ratePerH);
-  const atEdge = [0];
-  for (let edge = 1; edge < edgesH.length; edge++)
-    atEdge.push(atEdge[edge - 1]! + rates[edge - 1]! * (edgesH[edge]! - edgesH[edge - 1]!));
-  const lastAtMost = (values: readonly number[], value: number) => {
-    let edge = values.length - 1;
-    while (edge > 0 && values[edge]! > value) edge--;
-    return edge;
-  };
-  return {
-    edgesH,
-    until(atH) {
-      const edge = lastAtMost(edgesH, atH);
-      return atEdge[edge]! + rates[edge]! * (atH - edgesH[edge]!);
-    },
-    hourAt(value) {
-      if (value <= 0) return 0;
-      const edge = lastAtMost(atEdge, value);
-      return rates[edge]! > 0 ? edgesH[edge]! + (value - atEdge[edge]!) / rates[edge]! : edgesH[edge]!;
-    },
-  };
+/** How many of some things in order of time are at or before an hour. */
+function countUntil(ordered: readonly { readonly atH: number }[], atH: number): number {
+  let low = 0;
+  let high = ordered.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (ordered[middle]!.atH <= atH) low = middle + 1;
+    else high = middle;
+  }
+  return low;
 }
 
 function checkTimesH(course: Course): number[] {

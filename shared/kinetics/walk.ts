@@ -1,4 +1,5 @@
 import { type Course, effectiveMg } from "./course.ts";
+import { ExactSum } from "./exact-sum.ts";
 import { expDifference, phi } from "./exp-differences.ts";
 
 /**
@@ -70,14 +71,15 @@ export function walkFrom(course: Course, start: BodyState): Walk {
       k = event.eliminationRatePerH ?? k;
     }
     const untilH = events[index]?.atH ?? horizonH;
+    const rateMgPerH = rates.totalMgPerH;
     made.fromH[count] = atH;
     made.untilH[count] = untilH;
     made.eliminationRatePerH[count] = k;
-    made.inputMgPerH[count] = rates.totalMgPerH;
+    made.inputMgPerH[count] = rateMgPerH;
     made.amountMg[count] = amountMg;
     made.depotMg[count] = depotMg;
     count++;
-    const after = advance({ amountMg, depotMg }, { k, ka: absorptionRatePerH, rateMgPerH: rates.totalMgPerH }, untilH - atH);
+    const after = advance({ amountMg, depotMg }, { k, ka: absorptionRatePerH, rateMgPerH }, untilH - atH);
     amountMg = after.amountMg;
     depotMg = after.depotMg;
     atH = untilH;
@@ -124,16 +126,20 @@ function eventsOf(course: Course): Event[] {
   return events.sort((one, other) => one.atH - other.atH);
 }
 
-/** Sum of the rates that run now. A running difference would leave a residue; few run at once, so it is summed anew. */
+/** Sum of the rates that run now, exact, so that nothing runs on when all of them have ended. */
 class RunningRates {
   readonly #rates = new Map<number, number>();
-  totalMgPerH = 0;
+  readonly #sum = new ExactSum();
 
   set(source: number, rateMgPerH: number): void {
+    this.#sum.add(-(this.#rates.get(source) ?? 0));
+    this.#sum.add(rateMgPerH);
     if (rateMgPerH === 0) this.#rates.delete(source);
     else this.#rates.set(source, rateMgPerH);
-    this.totalMgPerH = 0;
-    for (const rate of this.#rates.values()) this.totalMgPerH += rate;
+  }
+
+  get totalMgPerH(): number {
+    return this.#sum.value;
   }
 }
 
