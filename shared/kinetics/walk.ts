@@ -41,7 +41,8 @@ interface Event {
  *
  *     A(u) = A e^(-k u) + R u phi(k u) + ka D u exp[-k u, -ka u],   D(u) = D e^(-ka u)
  *
- * Cost: events x log(events), for sorting them. Doses that start at or after the horizon do not appear.
+ * Cost: events x log(events), for sorting them. Doses that start after the horizon do not appear; a bolus
+ * at the horizon does, as a last stretch of no length, so that the level there is the one just after it.
  *
  * @returns stretches that tile [0, horizonH] without gap or overlap
  *
@@ -56,13 +57,13 @@ export function walk(course: Course): Walk {
 export function walkFrom(course: Course, start: BodyState): Walk {
   const { horizonH } = course;
   const absorptionRatePerH = course.absorptionRatePerH ?? 0;
-  const events = eventsOf(course).filter(({ atH }) => atH < horizonH);
+  const events = eventsOf(course).filter(({ atH, bolusMg }) => atH < horizonH || (atH === horizonH && bolusMg !== undefined));
   const made = emptyWalk(course, events.length + 1);
   const rates = new RunningRates();
   let { amountMg, depotMg } = start;
   let k = course.elimination[0]!.ratePerH;
   let count = 0;
-  for (let index = 0, atH = 0; atH < horizonH; ) {
+  for (let index = 0, atH = 0; atH < horizonH || index < events.length; ) {
     for (; index < events.length && events[index]!.atH <= atH; index++) {
       const event = events[index]!;
       amountMg += event.bolusMg ?? 0;
