@@ -1,0 +1,68 @@
+import express, { type Express, Router } from "express";
+import type { Logger } from "pino";
+import type { Stores } from "../db/stores.ts";
+import type { Revision } from "../shared/contract/case.ts";
+import type { Instant } from "../shared/contract/schedule.ts";
+import { clientFiles } from "./client-files.ts";
+import { noSuchAddress, problemHandler } from "./problems.ts";
+import { requestIds } from "./request-id.ts";
+import { requestLimit } from "./request-limit.ts";
+import { requestLog } from "./request-log.ts";
+import type { SecondOpinionOf } from "./revisions/judge-content.ts";
+import { caseFileRoutes } from "./routes/case-file-routes.ts";
+import { caseRoutes } from "./routes/case-routes.ts";
+import { healthRoutes } from "./routes/health-routes.ts";
+import { predictionRoutes } from "./routes/prediction-routes.ts";
+import { regimenRoutes } from "./routes/regimen-routes.ts";
+import { revisionRoutes } from "./routes/revision-routes.ts";
+import { securityHeaders } from "./security/headers.ts";
+import { hostCheck } from "./security/host-check.ts";
+import { readablePath } from "./security/readable-path.ts";
+import { sameOriginWrites } from "./security/same-origin.ts";
+import type { Settings } from "./settings.ts";
+
+export type Clock = () => Instant;
+/** Makes a new UUID each time. */
+export type Ids = () => string;
+export type WriteSheet = (revision: Revision, options: { readonly paper: "A4" | "Letter" }) => Promise<Uint8Array>;
+
+export interface AppNeeds {
+  readonly stores: Stores;
+  readonly clock: Clock;
+  readonly ids: Ids;
+  readonly logger: Logger;
+  readonly writeSheet: WriteSheet;
+  readonly secondOpinionOf: SecondOpinionOf;
+  readonly settings: Pick<Settings, "host" | "publicNames" | "transport" | "requestsPerMinute">;
+  /** Where the built page is; without it only the API answers. */
+  readonly clientFolder?: string;
+}
+
+/** The whole server, not listening yet. Who may ask comes before what is asked. */
+export function createApp(needs: AppNeeds): Express {
+  const { settings, logger, clientFolder } = needs;
+  const app = express();
+  app.disable("x-powered-by");
+  app.disable("etag");
+  app.set("query parser", "simple");
+  app.set("trust proxy", false);
+  app.use(requestIds(needs.ids), requestLog(logger), ...securityHeaders(settings.transport));
+  app.use(hostCheck([settings.host, ...settings.publicNames]), readablePath);
+  app.use("/api", requestLimit(settings.requestsPerMinute), sameOriginWrites, ...apiRouters(needs));
+  if (clientFolder !== undefined) app.use(clientFiles(clientFolder));
+  app.use(noSuchAddress);
+  app.use(problemHandler(logger));
+  return app;
+}
+
+/** One router a noun. */
+export function apiRouters(needs: AppNeeds): Router[] {
+  return [
+    predictionRoutes(),
+    caseRoutes(needs),
+    caseFileRoutes(needs),
+    regimenRoutes(needs),
+    revisionRoutes(needs),
+    healthRoutes({ stores: needs.stores, nowMs: () => Date.parse(needs.clock()) }),
+  ];
+}

@@ -1,0 +1,65 @@
+import { randomUUID } from "node:crypto";
+import { existsSync } from "node:fs";
+import { join } from "node:path";
+import { closeDatabase, openDatabase } from "../db/open-database.ts";
+import { projectFolder } from "../db/project-folder.ts";
+import { sqliteStores } from "../db/stores.ts";
+import { createApp } from "./app.ts";
+import { insertDemoCase } from "./demo/demo-case.ts";
+import { makeLogger } from "./logger.ts";
+import { secondOpinionOfContent } from "./revisions/second-opinion-of.ts";
+import { serve } from "./serve.ts";
+import { readSettings } from "./settings.ts";
+import { writeSheet } from "./sheet/sheet.ts";
+import { sayWhyNotStarted } from "./start-failure.ts";
+import { silentDescription } from "./silent-description.ts";
+
+/** A retry comes within minutes, or after a night in a sleeping laptop; after this long it is a new wish. */
+const rememberAnswersMs = 30 * 24 * 3_600_000;
+
+try {
+  await start();
+} catch (error) {
+  process.stderr.write(`${sayWhyNotStarted(error)}\n`);
+  process.exitCode = 1;
+}
+
+async function start(): Promise<void> {
+  const settings = readSettings(process.env, process.platform);
+  const logger = makeLogger(settings.logLevel);
+  const clock = () => new Date().toISOString();
+  const db = openDatabase(settings.database);
+  const stores = sqliteStores(db);
+  const secondOpinionOf = async (content: Parameters<typeof secondOpinionOfContent>[0]) => secondOpinionOfContent(content);
+  await insertDemoCase(stores, secondOpinionOf);
+  await stores.answers.forgetBefore(new Date(Date.now() - rememberAnswersMs).toISOString());
+  const built = join(projectFolder(), ".build", "client");
+  const app = createApp({
+    stores,
+    clock,
+    ids: randomUUID,
+    logger,
+    writeSheet,
+    secondOpinionOf,
+    settings,
+    ...(existsSync(join(built, "index.html")) && { clientFolder: built }),
+  });
+  const serving = await serve(app, settings);
+
+  let stopping = false;
+  const stop = async (why: string, exitCode: number) => {
+    if (stopping) return;
+    stopping = true;
+    logger.info({ why }, "stopping");
+    await serving.stop();
+    closeDatabase(db);
+    process.exitCode = exitCode;
+  };
+  process.on("SIGTERM", () => void stop("SIGTERM", 0));
+  process.on("SIGINT", () => void stop("SIGINT", 0));
+  process.on("unhandledRejection", (error) => {
+    logger.fatal({ error: silentDescription(error) }, "an error that nobody handled");
+    void stop("unhandled rejection", 1);
+  });
+  process.stdout.write(`Ebbline is ready at ${serving.address}\n`);
+}

@@ -1,0 +1,119 @@
+import type { ErrorRequestHandler, Request, RequestHandler } from "express";
+import type { Logger } from "pino";
+import type { AlteredRowError, KeyReusedError, NotFoundError, StaleError, TooManyAlternativesError } from "../db/store-errors.ts";
+import type { Problem } from "../shared/contract/problem.ts";
+import type { DomainError } from "../shared/errors.ts";
+import { drain } from "./drain.ts";
+import { requestIdOf } from "./request-id.ts";
+import { RequestError, type RequestErrorCode } from "./request-errors.ts";
+import { silentDescription } from "./silent-description.ts";
+
+type StoreErrorCode = (NotFoundError | StaleError | TooManyAlternativesError | KeyReusedError | AlteredRowError)["code"];
+export type ErrorCode = RequestErrorCode | StoreErrorCode | DomainError["code"] | "internal";
+
+/** Every way a request can fail: a new error code does not compile until it has its place here. */
+export const problemTable: Readonly<Record<ErrorCode, { readonly status: number; readonly title: string }>> = {
+  "malformed-json": { status: 400, title: "The body is not JSON" },
+  "malformed-path": { status: 400, title: "The address cannot be read" },
+  "too-deep": { status: 400, title: "The body is nested too deeply" },
+  "key-missing": { status: 400, title: "The Idempotency-Key header is missing or is no UUID" },
+  "cross-site": { status: 403, title: "Another site may not write here" },
+  "not-found": { status: 404, title: "Not here" },
+  "no-route": { status: 404, title: "There is nothing at this address" },
+  "wrong-method": { status: 405, title: "This cannot be done at this address" },
+  stale: { status: 409, title: "Somebody saved in between" },
+  "too-large": { status: 413, title: "The body is too large" },
+  "not-json": { status: 415, title: "The body must be JSON" },
+  "wrong-host": { status: 421, title: "The request was meant for another server" },
+  validation: { status: 422, title: "Some values are not usable" },
+  domain: { status: 422, title: "Some values are not usable" },
+  "missing-body": { status: 422, title: "The body is missing" },
+  "case-file": { status: 422, title: "The file is not a case file this program can read" },
+  "unanswered-cautions": { status: 422, title: "Some cautions need a reason before this can be saved" },
+  "second-opinion": { status: 422, title: "Two independent calculations do not agree" },
+  "too-many-alternatives": { status: 422, title: "The case has no room for another alternative" },
+  "key-reused": { status: 422, title: "The Idempotency-Key was used for another request" },
+  "too-many-requests": { status: 429, title: "Too many requests" },
+  altered: { status: 500, title: "A stored record is not as it was stored" },
+  "not-ready": { status: 503, title: "The server cannot answer now" },
+  internal: { status: 500, title: "Something went wrong in the server" },
+};
+
+/** Nothing else answered: there is no such address. */
+export const noSuchAddress: RequestHandler = () => {
+  throw new RequestError("no-route", "check the address; the routes are listed at /api/docs");
+};
+
+/** Turns every error into a problem document (RFC 9457). What is not known is a 500 without detail. */
+export function problemHandler(logger: Logger): ErrorRequestHandler {
+  return async (error: unknown, request, response, next) => {
+    const { code, detail, errors, headers } = described(error);
+    const { status, title } = problemTable[code];
+    if (status >= 500) logger.error({ requestId: requestIdOf(request), code, error: silentDescription(error) }, "request failed");
+    if (response.headersSent) return next(error);
+    // Answering before the body was read resets connections that are kept alive.
+    await drain(request, response);
+    const problem: Problem = {
+      type: `/problems/${code}`,
+      title,
+      status,
+      ...(detail !== undefined && { detail }),
+      requestId: requestIdOf(request),
+      ...(errors.length > 0 && { errors: [...errors] }),
+    };
+    response.status(status).set(headers).type("application/problem+json").send(JSON.stringify(problem));
+  };
+}
+
+interface Described {
+  readonly code: ErrorCode;
+  readonly detail?: string;
+  readonly errors: RequestError["errors"];
+  readonly headers: RequestError["headers"];
+}
+
+function described(error: unknown): Described {
+  const code = codeOf(error);
+  if (code === "internal") return { code, errors: [], headers: {} };
+  const { errors, headers } = error instanceof RequestError ? error : { errors: [], headers: {} };
+  return { code, detail: detailOf(code, error), errors, headers };
+}
+
+function codeOf(error: unknown): ErrorCode {
+  if (!(error instanceof Error)) return "internal";
+  const own = "code" in error ? String(error.code) : "";
+  if (Object.hasOwn(problemTable, own)) return own as ErrorCode;
+  return "type" in error || "status" in error ? parserCode(error) : "internal";
+}
+
+/** The body parser and the router of Express throw errors of their own, told apart by type and status. */
+function parserCode(error: Error & { type?: unknown; status?: unknown }): ErrorCode {
+  switch (error.type) {
+    case "entity.parse.failed":
+    case "request.aborted":
+    case "request.size.invalid":
+      return "malformed-json";
+    case "entity.too.large":
+      return "too-large";
+    case "encoding.unsupported":
+    case "charset.unsupported":
+      return "not-json";
+  }
+  return error instanceof URIError || error.status === 400 ? "malformed-path" : "internal";
+}
+
+/** Our own words only: the parser's messages quote the body. */
+function detailOf(code: ErrorCode, error: unknown): string {
+  const own = error instanceof Error && "code" in error && String(error.code) === code;
+  if (own) return (error as Error).message;
+  if (code === "malformed-json") return "the body ends early or has a character that JSON does not allow there";
+  if (code === "too-large") return "send less at once; the limits are listed at /api/docs";
+  if (code === "not-json") return "send UTF-8 without compression";
+  return "the address has an escape that is not complete or not UTF-8";
+}
+
+/** For tests and logs: the template of the route that took a request, never the address itself. */
+export function routeOf(request: Request): string {
+  const route = request.route as { path?: unknown } | undefined;
+  return typeof route?.path === "string" ? route.path : "none";
+}

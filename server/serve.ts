@@ -1,0 +1,34 @@
+import { createServer, type Server } from "node:http";
+import type { AddressInfo } from "node:net";
+import type { Express } from "express";
+
+/** The server listens and can be stopped. */
+export interface Serving {
+  readonly address: string;
+  /** Stops accepting, lets what is running finish, then resolves. */
+  stop(): Promise<void>;
+}
+
+/**
+ * Listens, or rejects with the error of listening: Express's own callback is also called with an error,
+ * which is easily taken for success.
+ */
+export async function serve(app: Express, { port, host }: { readonly port: number; readonly host: string }): Promise<Serving> {
+  const server = createServer({ requestTimeout: 60_000, headersTimeout: 20_000 }, app);
+  await new Promise<void>((resolve, reject) => {
+    server.once("error", reject);
+    server.listen(port, host, resolve);
+  });
+  const { address, port: taken } = server.address() as AddressInfo;
+  return { address: `http://${address.includes(":") ? `[${address}]` : address}:${taken}`, stop: () => stopped(server) };
+}
+
+function stopped(server: Server): Promise<void> {
+  return new Promise((resolve) => {
+    server.close(() => resolve());
+    // Connections kept alive would hold the server open; those with a request running are not idle.
+    server.closeIdleConnections();
+    const sweep = setInterval(() => server.closeIdleConnections(), 100).unref();
+    server.once("close", () => clearInterval(sweep));
+  });
+}
