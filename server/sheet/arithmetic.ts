@@ -21,7 +21,11 @@ function writeSection(paper: Paper, section: ArithmeticSection): void {
   doc.moveDown(0.5);
   root.add(
     doc.struct("H3", {}, () => {
-      doc.font(face.bold).fontSize(9.8).fillColor(ink.text).text(`${section.title} `, marginPt, doc.y, { width: paper.widthPt });
+      doc
+        .font(face.bold)
+        .fontSize(9.8)
+        .fillColor(ink.text)
+        .text(`${section.title} `, marginPt, doc.y, { width: paper.widthPt });
     }),
   );
   doc.moveDown(0.15);
@@ -39,7 +43,10 @@ function writeStep(paper: Paper, step: ArithmeticStep): void {
     { text: `= ${step.result}${program}`, font: "bold", indentPt: 12 },
   ];
   doc.fontSize(8.2);
-  const height = lines.reduce((sum, { text, indentPt }) => sum + doc.heightOfString(text, { width: paper.widthPt - indentPt }) + 1, 4);
+  const height = lines.reduce(
+    (sum, { text, indentPt }) => sum + doc.heightOfString(text, { width: paper.widthPt - indentPt }) + 1,
+    4,
+  );
   needRoom(paper, height);
   doc.moveDown(0.25);
   root.add(

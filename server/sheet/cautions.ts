@@ -1,7 +1,7 @@
-import type { RegimenContent } from "../../shared/contract/case.ts";
-import type { Caution } from "../../shared/contract/caution.ts";
 import { cautionsForContent } from "../../shared/cautions/gather.ts";
 import { standingCaution } from "../../shared/cautions/standing.ts";
+import type { RegimenContent } from "../../shared/contract/case.ts";
+import type { Caution } from "../../shared/contract/caution.ts";
 import type { Paper } from "./paper.ts";
 import { barred, heading, paragraph } from "./writing.ts";
 
@@ -17,10 +17,13 @@ export function writeCautionList(paper: Paper, content: RegimenContent): void {
   const cautions = cautionsForContent(content).filter(({ code }) => code !== standingCaution.code);
   heading(paper, "Cautions that apply");
   if (cautions.length === 0) paragraph(paper, "No caution applies besides the one at the top of this sheet.");
-  for (const caution of cautions) paragraph(paper, `${severityWords[caution.severity]}: ${caution.text}${answerTo(caution, content)}`);
+  for (const caution of cautions)
+    paragraph(paper, `${severityWords[caution.severity]}: ${caution.text}${answerTo(caution, content)}`);
 }
 
 function answerTo(caution: Caution, { cautionReasons }: RegimenContent): string {
-  const answer = cautionReasons.find(({ code, about, text }) => code === caution.code && about === caution.about && text === caution.text);
+  const answer = cautionReasons.find(
+    ({ code, about, text }) => code === caution.code && about === caution.about && text === caution.text,
+  );
   return answer === undefined ? "" : ` Reason given: ${answer.reason}`;
 }

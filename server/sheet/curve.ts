@@ -40,7 +40,9 @@ function draw(paper: Paper, given: Prepared, planned: Prepared | undefined, top:
   const { doc } = paper;
   const { horizonH } = given.course;
   const range = given.content.setting.rangeMgPerL;
-  const curves = [given, ...(planned === undefined ? [] : [planned])].map(({ made }) => curvePoints(made, { fromH: 0, toH: horizonH }, 600));
+  const curves = [given, ...(planned === undefined ? [] : [planned])].map(({ made }) =>
+    curvePoints(made, { fromH: 0, toH: horizonH }, 600),
+  );
   const highest = Math.max(...curves.flatMap(({ mgPerL }) => mgPerL), range?.high ?? 0);
   const ticks = niceTicks(highest > 0 ? highest * 1.06 : 1);
   const left = marginPt + leftPt;
@@ -75,8 +77,19 @@ function drawRange(doc: PDFKit.PDFDocument, { left, right, y }: Frame, range: { 
 function drawLevels(doc: PDFKit.PDFDocument, { left, y }: Frame, ticks: readonly number[]): void {
   doc.font(face.plain).fontSize(7.2);
   for (const tick of ticks) {
-    doc.lineWidth(0.5).strokeColor(ink.line).moveTo(left - 3, y(tick)).lineTo(left, y(tick)).stroke();
-    doc.fillColor(ink.text).text(`${formatQuantity(tick, "mg/L")} `, marginPt - 14, y(tick) - 4, { width: leftPt + 9, align: "right", lineBreak: false });
+    doc
+      .lineWidth(0.5)
+      .strokeColor(ink.line)
+      .moveTo(left - 3, y(tick))
+      .lineTo(left, y(tick))
+      .stroke();
+    doc
+      .fillColor(ink.text)
+      .text(`${formatQuantity(tick, "mg/L")} `, marginPt - 14, y(tick) - 4, {
+        width: leftPt + 9,
+        align: "right",
+        lineBreak: false,
+      });
   }
 }
 
@@ -85,15 +98,33 @@ function drawTimes(doc: PDFKit.PDFDocument, { left, right, bottom, x }: Frame, {
   doc.font(face.plain).fontSize(7.2);
   for (const atH of timeTicksH(course.horizonH, 8)) {
     const instant = instantAt(start, atH, content.timeZone);
-    doc.lineWidth(0.5).strokeColor(ink.line).moveTo(x(atH), bottom).lineTo(x(atH), bottom + 3).stroke();
+    doc
+      .lineWidth(0.5)
+      .strokeColor(ink.line)
+      .moveTo(x(atH), bottom)
+      .lineTo(x(atH), bottom + 3)
+      .stroke();
     const centre = Math.min(Math.max(x(atH), left + 12), right - 22);
     doc.fillColor(ink.text);
-    doc.text(`${sayTime(instant, content.timeZone)} `, centre - 30, bottom + 12, { width: 60, align: "center", lineBreak: false });
-    doc.text(`${sayClock(instant, content.timeZone).split(" ").slice(1, 3).join(" ")} `, centre - 30, bottom + 21, { width: 60, align: "center", lineBreak: false });
+    doc.text(`${sayTime(instant, content.timeZone)} `, centre - 30, bottom + 12, {
+      width: 60,
+      align: "center",
+      lineBreak: false,
+    });
+    doc.text(`${sayClock(instant, content.timeZone).split(" ").slice(1, 3).join(" ")} `, centre - 30, bottom + 21, {
+      width: 60,
+      align: "center",
+      lineBreak: false,
+    });
   }
 }
 
-function drawCurve(doc: PDFKit.PDFDocument, { x, y }: Frame, { timesH, mgPerL }: ReturnType<typeof curvePoints>, line: "full" | "dashed"): void {
+function drawCurve(
+  doc: PDFKit.PDFDocument,
+  { x, y }: Frame,
+  { timesH, mgPerL }: ReturnType<typeof curvePoints>,
+  line: "full" | "dashed",
+): void {
   doc.lineWidth(line === "full" ? 1.3 : 0.9).strokeColor(line === "full" ? ink.text : ink.soft);
   if (line === "dashed") doc.dash(4, { space: 3 });
   timesH.forEach((timeH, index) => {
@@ -114,8 +145,12 @@ function drawDoses(doc: PDFKit.PDFDocument, { x, bottom }: Frame, { doses, cours
 
 function captionOf({ content }: Prepared, planned: Prepared | undefined): string {
   const range = content.setting.rangeMgPerL;
-  const shaded = range === undefined ? "" : ` The shaded band is the desired range, ${formatLevel(range.low)} to ${formatLevel(range.high)}.`;
-  const dashed = planned === undefined ? "" : " The dashed line is the plan as if everything had been given as planned.";
+  const shaded =
+    range === undefined
+      ? ""
+      : ` The shaded band is the desired range, ${formatLevel(range.low)} to ${formatLevel(range.high)}.`;
+  const dashed =
+    planned === undefined ? "" : " The dashed line is the plan as if everything had been given as planned.";
   return `Full line: predicted level in mg/L. Wedges under the axis: doses.${shaded}${dashed}`;
 }
 

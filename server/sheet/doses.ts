@@ -1,9 +1,9 @@
+import type { Prepared } from "../../shared/figures/prepared.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
 import { givenDoses } from "../../shared/schedule/doses-given.ts";
 import { sayGive } from "../../shared/schedule/say-order.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { formatHours } from "../../shared/units/format.ts";
-import type { Prepared } from "../../shared/figures/prepared.ts";
 import type { Paper } from "./paper.ts";
 import { heading, paragraph, table } from "./writing.ts";
 
@@ -28,9 +28,18 @@ export function writeDoses(paper: Paper, { content }: Prepared): void {
       { title: "DOSE", share: 3.9, font: "bold" },
       { title: "What became of it", share: 3 },
     ],
-    doses.slice(0, mostRows).map((dose, index) => [`${index + 1}`, sayClock(dose.at, zone), formatHours(dose.atH), sayGive(dose.give), sayStatus(dose, zone)]),
+    doses
+      .slice(0, mostRows)
+      .map((dose, index) => [
+        `${index + 1}`,
+        sayClock(dose.at, zone),
+        formatHours(dose.atH),
+        sayGive(dose.give),
+        sayStatus(dose, zone),
+      ]),
   );
-  if (doses.length > mostRows) paragraph(paper, `The first ${mostRows} of ${doses.length} doses are listed; the rest follow the orders above.`);
+  if (doses.length > mostRows)
+    paragraph(paper, `The first ${mostRows} of ${doses.length} doses are listed; the rest follow the orders above.`);
 }
 
 function sayStatus(dose: ScheduledDose, zone: string): string {

@@ -12,7 +12,10 @@ export function writeFigures(paper: Paper, prepared: Prepared): void {
   const figures = figuresOfPrepared(prepared);
   const [marks] = judge([figures], content.setting.rangeMgPerL);
   heading(paper, "Predicted figures");
-  paragraph(paper, "Predicted from what was given so far and what is planned. The 24 hours of the chosen area begin with the plan.");
+  paragraph(
+    paper,
+    "Predicted from what was given so far and what is planned. The 24 hours of the chosen area begin with the plan.",
+  );
   table(
     paper,
     [
@@ -25,7 +28,11 @@ export function writeFigures(paper: Paper, prepared: Prepared): void {
         const figure = figures[name];
         const words = (marks?.[name] ?? []).map((mark) => mark.words.toUpperCase());
         const note = "note" in figure && figure.note !== undefined ? [figure.note] : [];
-        return [label, sayFigure(figure), [...words, sayMoment(figure, content.timeZone) ?? "", ...note].filter(Boolean).join("; ")];
+        return [
+          label,
+          sayFigure(figure),
+          [...words, sayMoment(figure, content.timeZone) ?? "", ...note].filter(Boolean).join("; "),
+        ];
       }),
     ),
   );

@@ -12,7 +12,11 @@ export function writeIdentity(paper: Paper, revision: Revision): void {
   doc.moveDown(0.6);
   root.add(
     doc.struct("H1", {}, () => {
-      doc.font(face.bold).fontSize(17).fillColor(ink.text).text("Dosing plan for an independent check ", marginPt, doc.y, { width: paper.widthPt });
+      doc
+        .font(face.bold)
+        .fontSize(17)
+        .fillColor(ink.text)
+        .text("Dosing plan for an independent check ", marginPt, doc.y, { width: paper.widthPt });
     }),
   );
   doc.moveDown(0.3);

@@ -1,6 +1,6 @@
+import { limits } from "../../shared/contract/limits.ts";
 import { scheduleFacts, settingFacts } from "../../shared/figures/facts.ts";
 import type { Prepared } from "../../shared/figures/prepared.ts";
-import { limits } from "../../shared/contract/limits.ts";
 import { formatQuantity } from "../../shared/units/format.ts";
 import type { Paper } from "./paper.ts";
 import { heading, paragraph, table } from "./writing.ts";

@@ -7,7 +7,11 @@ export function heading(paper: Paper, text: string): void {
   doc.moveDown(0.9);
   root.add(
     doc.struct("H2", {}, () => {
-      doc.font(face.bold).fontSize(11.5).fillColor(ink.accent).text(`${text} `, marginPt, doc.y, { width: paper.widthPt });
+      doc
+        .font(face.bold)
+        .fontSize(11.5)
+        .fillColor(ink.accent)
+        .text(`${text} `, marginPt, doc.y, { width: paper.widthPt });
     }),
   );
   doc.moveDown(0.25);
@@ -15,7 +19,11 @@ export function heading(paper: Paper, text: string): void {
 }
 
 /** A paragraph. */
-export function paragraph(paper: Paper, text: string, look: { readonly font?: Face; readonly sizePt?: number; readonly indentPt?: number } = {}): void {
+export function paragraph(
+  paper: Paper,
+  text: string,
+  look: { readonly font?: Face; readonly sizePt?: number; readonly indentPt?: number } = {},
+): void {
   const { doc, root } = paper;
   const indentPt = look.indentPt ?? 0;
   root.add(
@@ -24,7 +32,10 @@ export function paragraph(paper: Paper, text: string, look: { readonly font?: Fa
         .font(face[look.font ?? "plain"])
         .fontSize(look.sizePt ?? bodyPt)
         .fillColor(ink.text)
-        .text(`${printable(paper, text)} `, marginPt + indentPt, doc.y, { width: paper.widthPt - indentPt, lineGap: 1.5 });
+        .text(`${printable(paper, text)} `, marginPt + indentPt, doc.y, {
+          width: paper.widthPt - indentPt,
+          lineGap: 1.5,
+        });
     }),
   );
   body(doc);
@@ -38,7 +49,12 @@ export function barred(paper: Paper, text: string, font: Face = "plain"): void {
   const top = doc.y;
   paragraph(paper, text, { font, indentPt: 12 });
   artifact(doc, () => {
-    doc.lineWidth(2.5).strokeColor(ink.accent).moveTo(marginPt + 3, top).lineTo(marginPt + 3, doc.y - 2).stroke();
+    doc
+      .lineWidth(2.5)
+      .strokeColor(ink.accent)
+      .moveTo(marginPt + 3, top)
+      .lineTo(marginPt + 3, doc.y - 2)
+      .stroke();
   });
   doc.moveDown(0.35);
 }
@@ -55,13 +71,25 @@ export interface Column {
  *
  * @param rows one text per column
  */
-export function table(paper: Paper, columns: readonly Column[], rows: readonly (readonly string[])[], sizePt = 8.2, rowHeightPt = 0): void {
+export function table(
+  paper: Paper,
+  columns: readonly Column[],
+  rows: readonly (readonly string[])[],
+  sizePt = 8.2,
+  rowHeightPt = 0,
+): void {
   const { doc } = paper;
   doc.fontSize(sizePt);
   const total = columns.reduce((sum, { share }) => sum + share, 0);
   const widths = columns.map(({ share }) => (share / total) * paper.widthPt);
   const heights = rows.map((row) => Math.max(rowHeightPt, rowHeight(paper, row, widths, columns, sizePt)));
-  const headPt = rowHeight(paper, columns.map(({ title }) => title), widths, columns.map((column) => ({ ...column, font: "bold" as const })), sizePt);
+  const headPt = rowHeight(
+    paper,
+    columns.map(({ title }) => title),
+    widths,
+    columns.map((column) => ({ ...column, font: "bold" as const })),
+    sizePt,
+  );
   let begin = 0;
   while (begin < rows.length) {
     if (roomPt(paper) < headPt + heights[begin]! + 2) doc.addPage();
@@ -78,13 +106,29 @@ export function table(paper: Paper, columns: readonly Column[], rows: readonly (
 
 const paddingPt = 2.6;
 
-function tablePart(paper: Paper, columns: readonly Column[], widths: readonly number[], rows: readonly (readonly string[])[], sizePt: number, rowHeightPt: number): void {
+function tablePart(
+  paper: Paper,
+  columns: readonly Column[],
+  widths: readonly number[],
+  rows: readonly (readonly string[])[],
+  sizePt: number,
+  rowHeightPt: number,
+): void {
   const { doc, root } = paper;
   const section = doc.struct("Sect");
   root.add(section);
-  const head = columns.map(({ title }) => ({ type: "TH" as const, scope: "Column", text: `${title} `, font: { src: face.bold, size: sizePt }, backgroundColor: "#eef1ef" }));
+  const head = columns.map(({ title }) => ({
+    type: "TH" as const,
+    scope: "Column",
+    text: `${title} `,
+    font: { src: face.bold, size: sizePt },
+    backgroundColor: "#eef1ef",
+  }));
   const cells = rows.map((row) =>
-    row.map((text, index) => ({ text: `${printable(paper, text)} `, font: { src: face[columns[index]!.font ?? "plain"], size: sizePt } })),
+    row.map((text, index) => ({
+      text: `${printable(paper, text)} `,
+      font: { src: face[columns[index]!.font ?? "plain"], size: sizePt },
+    })),
   );
   doc.fontSize(sizePt).fillColor(ink.text);
   const options = {
@@ -100,7 +144,13 @@ function tablePart(paper: Paper, columns: readonly Column[], widths: readonly nu
 }
 
 /** What pdfkit will make of a row, so that a page is never begun in the middle of one. */
-function rowHeight(paper: Paper, row: readonly string[], widths: readonly number[], columns: readonly Column[], sizePt: number): number {
+function rowHeight(
+  paper: Paper,
+  row: readonly string[],
+  widths: readonly number[],
+  columns: readonly Column[],
+  sizePt: number,
+): number {
   const { doc } = paper;
   const heights = row.map((text, index) => {
     doc.font(face[columns[index]!.font ?? "plain"]).fontSize(sizePt);

@@ -1,5 +1,5 @@
-import type { Caution } from "../contract/caution.ts";
 import type { RegimenContent } from "../contract/case.ts";
+import type { Caution } from "../contract/caution.ts";
 import { instantAt, offsetMinutes, sayClock, sayDate } from "../schedule/clock.ts";
 import { spanOf } from "../schedule/expand-orders.ts";
 import { type DueTime, dueTimes } from "../schedule/order-times.ts";
@@ -13,7 +13,9 @@ export const unclearClockTimes: Rule<ContentSubject> = ({ content }) =>
     const about = `/schedule/orders/${index}/when`;
     return due.flatMap((time): Caution[] => {
       if (time.resolution === "exact") return [];
-      return [{ code: `clock-time-${time.resolution}`, severity: "warn", text: sayResolution(time, content.timeZone), about }];
+      return [
+        { code: `clock-time-${time.resolution}`, severity: "warn", text: sayResolution(time, content.timeZone), about },
+      ];
     });
   });
 
@@ -26,8 +28,12 @@ export const clockChanges: Rule<ContentSubject> = ({ content }) => {
     const size = formatDuration(Math.abs(minutes) / 60);
     const direction = minutes > 0 ? "forward" : "back";
     const kinds = new Set(repeating.map(({ when }) => when.kind));
-    const clock = kinds.has("clock-times") ? ` Doses at clock times lie ${size} ${minutes > 0 ? "closer together" : "further apart"} then.` : "";
-    const every = kinds.has("every") ? ` Doses at intervals keep their hours and come ${size} ${minutes > 0 ? "later" : "earlier"} by the clock afterwards.` : "";
+    const clock = kinds.has("clock-times")
+      ? ` Doses at clock times lie ${size} ${minutes > 0 ? "closer together" : "further apart"} then.`
+      : "";
+    const every = kinds.has("every")
+      ? ` Doses at intervals keep their hours and come ${size} ${minutes > 0 ? "later" : "earlier"} by the clock afterwards.`
+      : "";
     const text = `The clock goes ${direction} by ${size} on ${sayDate(instantAt(start, atH, content.timeZone), content.timeZone)}.${clock}${every}`;
     return { code: "clock-changes", severity: "note", text, about: "/schedule" };
   });

@@ -17,7 +17,12 @@ import { tenfoldDoses } from "./tenfold-doses.ts";
 import { unusualDoses, unusualOrders } from "./unusual-doses.ts";
 import { unusualKinetics, unusualSetting } from "./unusual-kinetics.ts";
 
-const courseRules: readonly Rule<CourseSubject>[] = [unusualKinetics, eliminationStops, outsideRange, assumedElimination];
+const courseRules: readonly Rule<CourseSubject>[] = [
+  unusualKinetics,
+  eliminationStops,
+  outsideRange,
+  assumedElimination,
+];
 
 const contentRules: readonly Rule<ContentSubject>[] = [
   unusualSetting,

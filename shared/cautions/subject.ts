@@ -1,6 +1,6 @@
 import type { RegimenContent } from "../contract/case.ts";
-import type { RangeMgPerL } from "../contract/dose.ts";
 import type { Caution } from "../contract/caution.ts";
+import type { RangeMgPerL } from "../contract/dose.ts";
 import type { Course } from "../kinetics/course.ts";
 import { type Walk, walk } from "../kinetics/walk.ts";
 import { courseOfContent } from "../schedule/course-of-content.ts";

@@ -1,5 +1,5 @@
-import { formatDose } from "../units/format.ts";
 import type { Give } from "../contract/schedule.ts";
+import { formatDose } from "../units/format.ts";
 import type { ContentSubject, Rule } from "./subject.ts";
 
 const slip = 10;

@@ -8,11 +8,16 @@ export const unusualOrders: Rule<ContentSubject> = ({ content: { schedule } }) =
   ...schedule.orders.flatMap((order, index) => {
     const about = `/schedule/orders/${index}`;
     const interval = order.when.kind === "every" ? unusualValue("intervalH", order.when.intervalH, about) : [];
-    const times = order.when.kind === "clock-times" ? order.when.times.flatMap((time) => unusualAmounts(time, about)) : [];
-    const exceptions = order.exceptions.flatMap((exception, at) => ("skip" in exception ? [] : unusualAmounts(exception, `${about}/exceptions/${at}`)));
+    const times =
+      order.when.kind === "clock-times" ? order.when.times.flatMap((time) => unusualAmounts(time, about)) : [];
+    const exceptions = order.exceptions.flatMap((exception, at) =>
+      "skip" in exception ? [] : unusualAmounts(exception, `${about}/exceptions/${at}`),
+    );
     return [...unusualGive(order.give, about), ...interval, ...times, ...exceptions];
   }),
-  ...schedule.records.flatMap(({ outcome }, index) => (outcome.kind === "changed" ? unusualAmounts(outcome, `/schedule/records/${index}`) : [])),
+  ...schedule.records.flatMap(({ outcome }, index) =>
+    outcome.kind === "changed" ? unusualAmounts(outcome, `/schedule/records/${index}`) : [],
+  ),
   ...schedule.extras.flatMap(({ give }, index) => unusualGive(give, `/schedule/extras/${index}`)),
 ];
 
@@ -37,5 +42,9 @@ function unusualAmounts(given: { readonly amountMg?: number; readonly durationH?
 
 /** Only the highest: a thousand steps of one pump deserve one caution. */
 function unusualRate(steps: readonly { readonly rateMgPerH: number }[], about: string): Caution[] {
-  return unusualValue("rateMgPerH", steps.reduce((highest, { rateMgPerH }) => Math.max(highest, rateMgPerH), 0), about);
+  return unusualValue(
+    "rateMgPerH",
+    steps.reduce((highest, { rateMgPerH }) => Math.max(highest, rateMgPerH), 0),
+    about,
+  );
 }

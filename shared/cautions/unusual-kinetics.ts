@@ -6,8 +6,15 @@ import { unusualValue } from "./unusual-value.ts";
 export const unusualKinetics: Rule<CourseSubject> = ({ course }) => {
   const { given: _, ...kinetics } = course.kinetics;
   const { absorptionRatePerH, bioavailability, saltFactor } = course;
-  const values = { ...kinetics, bioavailability, saltFactor, ...(absorptionRatePerH !== undefined && { absorptionRatePerH }) };
-  return Object.entries(values).flatMap(([name, value]) => unusualValue(name as LimitName, value, `/setting/kinetics/${name}`));
+  const values = {
+    ...kinetics,
+    bioavailability,
+    saltFactor,
+    ...(absorptionRatePerH !== undefined && { absorptionRatePerH }),
+  };
+  return Object.entries(values).flatMap(([name, value]) =>
+    unusualValue(name as LimitName, value, `/setting/kinetics/${name}`),
+  );
 };
 
 /** Values that only a dated case states. */

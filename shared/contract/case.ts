@@ -163,7 +163,9 @@ export const CaseFile = z
         z.strictObject({
           label,
           retired: z.boolean(),
-          revisions: z.array(Revision.omit({ id: true, caseId: true, regimenId: true, secondOpinion: true })).max(1_000),
+          revisions: z
+            .array(Revision.omit({ id: true, caseId: true, regimenId: true, secondOpinion: true }))
+            .max(1_000),
         }),
       )
       .max(100),

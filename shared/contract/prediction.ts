@@ -17,7 +17,10 @@ export const PredictionRequest = z
     startConcentrationMgPerL: quantity("concentrationMgPerL").default(0),
     doses: z.array(Dose).max(counts.doses, { error: `must hold at most ${counts.doses} doses` }),
     horizonH: quantity("horizonH"),
-    sampleEveryH: z.number().min(1 / 60, { error: "must be at least 1 minute (0.0166667 h)" }).exactOptional(),
+    sampleEveryH: z
+      .number()
+      .min(1 / 60, { error: "must be at least 1 minute (0.0166667 h)" })
+      .exactOptional(),
     sampleTimesH: z.array(AtH).min(1).max(counts.sampleTimes).exactOptional(),
     window: Window.exactOptional(),
     rangeMgPerL: RangeMgPerL.exactOptional(),
@@ -32,7 +35,8 @@ export const PredictionRequest = z
       refuse(["sampleEveryH"], `gives more than ${counts.sampleTimes} points over ${horizonH} h`);
     const outside = request.sampleTimesH?.findIndex((timeH) => timeH > horizonH) ?? -1;
     if (outside >= 0) refuse(["sampleTimesH", outside], `must be at most horizonH (${horizonH} h)`);
-    const backwards = request.sampleTimesH?.findIndex((timeH, index, all) => index > 0 && timeH < all[index - 1]!) ?? -1;
+    const backwards =
+      request.sampleTimesH?.findIndex((timeH, index, all) => index > 0 && timeH < all[index - 1]!) ?? -1;
     if (backwards >= 0) refuse(["sampleTimesH", backwards], "must not be before the time in front of it");
     if (request.window !== undefined && request.window.toH > horizonH)
       refuse(["window", "toH"], `must be at most horizonH (${horizonH} h)`);

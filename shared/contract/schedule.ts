@@ -22,9 +22,14 @@ const GivePump = z.strictObject({
     .max(counts.pumpSteps)
     .superRefine((steps, context) => {
       const late = steps.findIndex((step, index) => index > 0 && !(step.afterH > steps[index - 1]!.afterH));
-      if (late > 0) context.addIssue({ code: "custom", path: [late, "afterH"], message: "must be later than the step before it" });
+      if (late > 0)
+        context.addIssue({ code: "custom", path: [late, "afterH"], message: "must be later than the step before it" });
       if (steps.at(-1)!.rateMgPerH !== 0)
-        context.addIssue({ code: "custom", path: [steps.length - 1, "rateMgPerH"], message: "must be 0 mg/h: the log must say when the pump stopped" });
+        context.addIssue({
+          code: "custom",
+          path: [steps.length - 1, "rateMgPerH"],
+          message: "must be 0 mg/h: the log must say when the pump stopped",
+        });
     }),
 });
 
@@ -67,7 +72,9 @@ export const When = z
         .array(ClockTime)
         .min(1)
         .max(counts.clockTimesPerOrder)
-        .refine((times) => new Set(times.map(({ time }) => time)).size === times.length, { error: "must not name a time twice" }),
+        .refine((times) => new Set(times.map(({ time }) => time)).size === times.length, {
+          error: "must not name a time twice",
+        }),
       end: End,
     }),
   ])
@@ -98,7 +105,11 @@ export const Order = z
         const seen = new Set<number>();
         exceptions.forEach(({ occurrence }, index) => {
           if (seen.has(occurrence))
-            context.addIssue({ code: "custom", path: [index, "occurrence"], message: `dose ${occurrence + 1} of this order is edited twice` });
+            context.addIssue({
+              code: "custom",
+              path: [index, "occurrence"],
+              message: `dose ${occurrence + 1} of this order is edited twice`,
+            });
           seen.add(occurrence);
         });
       }),

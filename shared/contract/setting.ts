@@ -1,13 +1,15 @@
 import { z } from "zod";
 import { resolveKinetics } from "../kinetics/disposition.ts";
 import { RangeMgPerL } from "./dose.ts";
-import { type LimitName, counts } from "./limits.ts";
+import { counts, type LimitName } from "./limits.ts";
 import { quantity } from "./quantity.ts";
 import { Instant, PartId } from "./schedule.ts";
 
 /** Where a number came from. Later kinds: a formula, a drug model, measured levels. */
 export const Origin = z
-  .discriminatedUnion("kind", [z.strictObject({ kind: z.literal("typed"), note: z.string().max(counts.noteCharacters).default("") })])
+  .discriminatedUnion("kind", [
+    z.strictObject({ kind: z.literal("typed"), note: z.string().max(counts.noteCharacters).default("") }),
+  ])
   .meta({ id: "Origin" });
 export type Origin = z.infer<typeof Origin>;
 
@@ -39,7 +41,11 @@ const changeCommon = { id: PartId, from: Instant, origin: Origin };
 export const DatedEliminationChange = z
   .discriminatedUnion("kind", [
     z.strictObject({ kind: z.literal("rate"), ...changeCommon, eliminationRatePerH: quantity("changedRatePerH") }),
-    z.strictObject({ kind: z.literal("clearance"), ...changeCommon, clearanceLPerH: quantity("changedClearanceLPerH") }),
+    z.strictObject({
+      kind: z.literal("clearance"),
+      ...changeCommon,
+      clearanceLPerH: quantity("changedClearanceLPerH"),
+    }),
     z.strictObject({
       kind: z.literal("added-clearance"),
       ...changeCommon,
@@ -56,7 +62,9 @@ export const CaseSetting = z
     plan: z.strictObject({ start: Instant, horizonH: quantity("horizonH") }),
     kinetics: StatedKinetics,
     eliminationChanges: z.array(DatedEliminationChange).max(counts.eliminationChanges).default([]),
-    startConcentration: z.strictObject({ valueMgPerL: quantity("concentrationMgPerL"), origin: Origin }).exactOptional(),
+    startConcentration: z
+      .strictObject({ valueMgPerL: quantity("concentrationMgPerL"), origin: Origin })
+      .exactOptional(),
     rangeMgPerL: RangeMgPerL.exactOptional(),
   })
   .meta({ id: "CaseSetting" });

@@ -15,14 +15,20 @@ export const SteadyStateRequest = z
     cycleH: quantity("intervalH"),
     doses: z.array(Dose).min(1).max(counts.doses),
     rangeMgPerL: RangeMgPerL.exactOptional(),
-    sampleEveryH: z.number().min(1 / 60).exactOptional(),
+    sampleEveryH: z
+      .number()
+      .min(1 / 60)
+      .exactOptional(),
   })
   .superRefine((request, context) => {
     const refuse = (path: (string | number)[], message: string) => context.addIssue({ code: "custom", path, message });
     request.doses.forEach((dose, index) => {
       if (dose.kind === "pump") {
         if (dose.steps.at(-1)!.rateMgPerH !== 0 || dose.steps.at(-1)!.atH > request.cycleH)
-          refuse(["doses", index, "steps"], `must end with a rate of 0 mg/h by the end of the cycle (${request.cycleH} h)`);
+          refuse(
+            ["doses", index, "steps"],
+            `must end with a rate of 0 mg/h by the end of the cycle (${request.cycleH} h)`,
+          );
       } else if (dose.atH >= request.cycleH)
         refuse(["doses", index, "atH"], `must be before the end of the cycle (${request.cycleH} h), got ${dose.atH} h`);
     });

@@ -18,12 +18,22 @@ export function readCsv(source: string): CsvTable {
     return { ok: false, line: 1, detail: "is not UTF-8 text: save the file as UTF-8, or paste the table" };
   const text = source.replace(/^\ufeff/, "");
   try {
-    const records = parse(text, { delimiter: delimiterOf(text), info: true, relax_column_count: true, skip_empty_lines: true, trim: true });
+    const records = parse(text, {
+      delimiter: delimiterOf(text),
+      info: true,
+      relax_column_count: true,
+      skip_empty_lines: true,
+      trim: true,
+    });
     const read = records as unknown as { info: { lines: number }; record: string[] }[];
     return { ok: true, rows: read.map(({ info, record }) => ({ line: info.lines, cells: record.map(withoutGuard) })) };
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
-    return { ok: false, line: Number(error["lines"] ?? 1), detail: "has a quote that is not closed, or one in the middle of a field" };
+    return {
+      ok: false,
+      line: Number(error["lines"] ?? 1),
+      detail: "has a quote that is not closed, or one in the middle of a field",
+    };
   }
 }
 

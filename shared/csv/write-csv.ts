@@ -8,5 +8,8 @@ import { stringify } from "csv-stringify/browser/esm/sync";
  * @param rows    one cell per column
  */
 export function writeCsv(columns: readonly string[], rows: readonly (readonly (string | number)[])[]): string {
-  return stringify([[...columns], ...rows.map((row) => [...row])], { escape_formulas: true, record_delimiter: "windows" });
+  return stringify([[...columns], ...rows.map((row) => [...row])], {
+    escape_formulas: true,
+    record_delimiter: "windows",
+  });
 }

@@ -1,5 +1,5 @@
-import type { Give } from "../contract/schedule.ts";
 import type { Dose } from "../contract/dose.ts";
+import type { Give } from "../contract/schedule.ts";
 import { type Figure, isValue } from "./figure.ts";
 import { momentAt } from "./moment.ts";
 import type { Prepared } from "./prepared.ts";

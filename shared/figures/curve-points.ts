@@ -14,7 +14,11 @@ export interface CurvePoints {
  *
  * @param points how many evenly spread points, at least 2
  */
-export function curvePoints(made: Walk, window: { readonly fromH: number; readonly toH: number }, points: number): CurvePoints {
+export function curvePoints(
+  made: Walk,
+  window: { readonly fromH: number; readonly toH: number },
+  points: number,
+): CurvePoints {
   const { fromH, toH } = window;
   const even = Array.from({ length: points }, (_, index) => fromH + ((toH - fromH) * index) / (points - 1));
   const events = new Set(Array.from(made.fromH).filter((atH) => atH > fromH && atH < toH));

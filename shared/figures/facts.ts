@@ -44,7 +44,13 @@ export function settingFacts(content: RegimenContent): Fact[] {
         ]),
     ...(rangeMgPerL === undefined
       ? []
-      : [{ path: "setting/rangeMgPerL", label: "Desired range", words: `${formatLevel(rangeMgPerL.low)} to ${formatLevel(rangeMgPerL.high)}` }]),
+      : [
+          {
+            path: "setting/rangeMgPerL",
+            label: "Desired range",
+            words: `${formatLevel(rangeMgPerL.low)} to ${formatLevel(rangeMgPerL.high)}`,
+          },
+        ]),
     ...setting.eliminationChanges.map((change) => ({
       path: `setting/eliminationChanges/${change.id}`,
       label: "Changed elimination",
@@ -102,7 +108,10 @@ function kineticFacts(kinetics: StatedKinetics): Fact[] {
 
 function orderFacts(order: Order, number: number, timeZone: string): Fact[] {
   const path = `schedule/orders/${order.id}`;
-  const steps = order.give.kind === "pump" ? `: ${order.give.steps.map(({ afterH, rateMgPerH }) => `${entered(rateMgPerH, "mg per hour")} from ${entered(afterH, "h")}`).join(", ")}` : "";
+  const steps =
+    order.give.kind === "pump"
+      ? `: ${order.give.steps.map(({ afterH, rateMgPerH }) => `${entered(rateMgPerH, "mg per hour")} from ${entered(afterH, "h")}`).join(", ")}`
+      : "";
   return [
     { path: `${path}/give`, label: `Order ${number}: what`, words: `${sayGive(order.give)}${steps}` },
     { path: `${path}/when`, label: `Order ${number}: when`, words: sayWhen(order.when, timeZone) },

@@ -21,7 +21,11 @@ export const figureGroups: readonly FigureGroup[] = [
       { name: "firstTrough", label: "First trough", meaning: "lowest level after that peak, before the next dose" },
       { name: "lastPeak", label: "Last peak", meaning: "highest level of the last complete interval in the plan" },
       { name: "lastTrough", label: "Last trough", meaning: "lowest level after that peak in the same interval" },
-      { name: "steadyPeak", label: "Peak at steady state", meaning: "highest level of a cycle once the repeating orders have settled" },
+      {
+        name: "steadyPeak",
+        label: "Peak at steady state",
+        meaning: "highest level of a cycle once the repeating orders have settled",
+      },
       { name: "steadyTrough", label: "Trough at steady state", meaning: "lowest level of that cycle" },
     ],
   },
@@ -29,32 +33,76 @@ export const figureGroups: readonly FigureGroup[] = [
     title: "Averages and areas",
     rows: [
       { name: "average", label: "Average over the plan", meaning: "area over the whole plan divided by its length" },
-      { name: "steadyAverage", label: "Average at steady state", meaning: "area of a settled cycle divided by its length" },
-      { name: "area24", label: "Area over the chosen 24 hours", meaning: "area under the level over 24 hours from the stated time" },
-      { name: "steadyArea24", label: "Area over 24 hours at steady state", meaning: "24 hours times the average at steady state" },
+      {
+        name: "steadyAverage",
+        label: "Average at steady state",
+        meaning: "area of a settled cycle divided by its length",
+      },
+      {
+        name: "area24",
+        label: "Area over the chosen 24 hours",
+        meaning: "area under the level over 24 hours from the stated time",
+      },
+      {
+        name: "steadyArea24",
+        label: "Area over 24 hours at steady state",
+        meaning: "24 hours times the average at steady state",
+      },
     ],
   },
   {
     title: "Desired range",
     rows: [
       { name: "hoursAbove", label: "Hours above the range", meaning: "within the plan" },
-      { name: "percentAbove", label: "Share of the plan above", meaning: "hours above divided by the length of the plan" },
+      {
+        name: "percentAbove",
+        label: "Share of the plan above",
+        meaning: "hours above divided by the length of the plan",
+      },
       { name: "hoursWithin", label: "Hours within the range", meaning: "within the plan" },
-      { name: "percentWithin", label: "Share of the plan within", meaning: "hours within divided by the length of the plan" },
+      {
+        name: "percentWithin",
+        label: "Share of the plan within",
+        meaning: "hours within divided by the length of the plan",
+      },
       { name: "hoursBelow", label: "Hours below the range", meaning: "within the plan" },
-      { name: "percentBelow", label: "Share of the plan below", meaning: "hours below divided by the length of the plan" },
+      {
+        name: "percentBelow",
+        label: "Share of the plan below",
+        meaning: "hours below divided by the length of the plan",
+      },
       { name: "steadyPercentWithin", label: "Share of a settled cycle within", meaning: "at steady state" },
-      { name: "firstInRange", label: "First within the range", meaning: "first time at which the level is within the range" },
+      {
+        name: "firstInRange",
+        label: "First within the range",
+        meaning: "first time at which the level is within the range",
+      },
     ],
   },
   {
     title: "Settling",
     rows: [
-      { name: "timeTo90Percent", label: "Time to 90 percent of steady state", meaning: "ln 10 divided by k, for a constant rate without a loading dose" },
-      { name: "settledFrom", label: "Settled from", meaning: "first cycle from which the level at cycle start stays within 10 percent of steady state" },
-      { name: "accumulationRatio", label: "Accumulation ratio", meaning: "area of a settled cycle over that of the first cycle from nothing" },
+      {
+        name: "timeTo90Percent",
+        label: "Time to 90 percent of steady state",
+        meaning: "ln 10 divided by k, for a constant rate without a loading dose",
+      },
+      {
+        name: "settledFrom",
+        label: "Settled from",
+        meaning: "first cycle from which the level at cycle start stays within 10 percent of steady state",
+      },
+      {
+        name: "accumulationRatio",
+        label: "Accumulation ratio",
+        meaning: "area of a settled cycle over that of the first cycle from nothing",
+      },
       { name: "swing", label: "Swing", meaning: "peak minus trough, divided by the trough, at steady state" },
-      { name: "fluctuation", label: "Fluctuation", meaning: "peak minus trough, divided by the average, at steady state" },
+      {
+        name: "fluctuation",
+        label: "Fluctuation",
+        meaning: "peak minus trough, divided by the average, at steady state",
+      },
     ],
   },
   {

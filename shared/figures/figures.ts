@@ -4,9 +4,9 @@ import { amountPerDay, highestAmount, highestRate, totalAmount } from "./amounts
 import { areaOver } from "./area-over.ts";
 import type { Figure, FigureUnit } from "./figure.ts";
 import { firstEntryH } from "./first-entry.ts";
-import { type Interval, firstInterval, lastInterval } from "./intervals.ts";
+import { firstInterval, type Interval, lastInterval } from "./intervals.ts";
 import { momentAt } from "./moment.ts";
-import { type Prepared, type Which, prepare } from "./prepared.ts";
+import { type Prepared, prepare, type Which } from "./prepared.ts";
 import { settledFrom } from "./settling.ts";
 
 /**
@@ -63,11 +63,18 @@ export function figuresOf(content: RegimenContent, options: FigureOptions = {}):
 }
 
 /** As `figuresOf`, for an alternative that is already walked. Cost: a few passes over its stretches. */
-export function figuresOfPrepared(prepared: Prepared, { areaFromH = 0 }: Pick<FigureOptions, "areaFromH"> = {}): Figures {
+export function figuresOfPrepared(
+  prepared: Prepared,
+  { areaFromH = 0 }: Pick<FigureOptions, "areaFromH"> = {},
+): Figures {
   const { content } = prepared;
   const nothing = prepared.doses.length === 0 ? "no dose is given" : undefined;
   const first = extremes(prepared, firstInterval(prepared), "no dose is given");
-  const last = extremes(prepared, lastInterval(prepared), nothing ?? "only one dose is given, so there is no later interval");
+  const last = extremes(
+    prepared,
+    lastInterval(prepared),
+    nothing ?? "only one dose is given, so there is no later interval",
+  );
   return {
     firstPeak: first.peak,
     firstTrough: first.trough,
@@ -84,7 +91,11 @@ export function figuresOfPrepared(prepared: Prepared, { areaFromH = 0 }: Pick<Fi
   };
 }
 
-function extremes(prepared: Prepared, interval: Interval | undefined, absent: string): { peak: Figure; trough: Figure } {
+function extremes(
+  prepared: Prepared,
+  interval: Interval | undefined,
+  absent: string,
+): { peak: Figure; trough: Figure } {
   if (interval === undefined) return { peak: { absent }, trough: { absent } };
   const { content, made } = prepared;
   const { fromH, note } = interval;
@@ -96,7 +107,10 @@ function extremes(prepared: Prepared, interval: Interval | undefined, absent: st
   if (!(toH > peak.atH))
     return { peak: peakFigure, trough: { absent: "the level still rises when the interval ends" } };
   const { trough } = exposureOf(made, { fromH: peak.atH, toH });
-  return { peak: peakFigure, trough: { value: trough.mgPerL, unit: "mg/L", ...momentAt(content, trough.atH), ...noted } };
+  return {
+    peak: peakFigure,
+    trough: { value: trough.mgPerL, unit: "mg/L", ...momentAt(content, trough.atH), ...noted },
+  };
 }
 
 type WholeFigures = Pick<
@@ -183,7 +197,12 @@ function steadyFigures(prepared: Prepared): SteadyFigures {
 function settledFigure(prepared: Prepared): Figure {
   const found = settledFrom(prepared);
   if (found === undefined) return { absent: "not reached within the plan" };
-  return { value: found.atH, unit: "h", ...momentAt(prepared.content, found.atH), note: `from cycle ${found.cycle} on` };
+  return {
+    value: found.atH,
+    unit: "h",
+    ...momentAt(prepared.content, found.atH),
+    note: `from cycle ${found.cycle} on`,
+  };
 }
 
 function allAbsent(absent: string): SteadyFigures {

@@ -14,7 +14,10 @@ export function firstEntryH(made: Walk, range: RangeMgPerL): number | undefined 
   if (atStart >= range.low && atStart <= range.high) return 0;
   const window = { fromH: 0, toH: made.horizonH };
   const rising = crossingsOf(made, range.low, window).filter(({ direction }) => direction === "rising");
-  const after = levelsAt(made, rising.map(({ atH }) => atH));
+  const after = levelsAt(
+    made,
+    rising.map(({ atH }) => atH),
+  );
   const upward = rising.find((_, index) => after[index]! <= range.high);
   const downward = crossingsOf(made, range.high, window).find(({ direction }) => direction === "falling");
   const hours = [upward, downward].flatMap((crossing) => (crossing === undefined ? [] : [crossing.atH]));

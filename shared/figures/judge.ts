@@ -48,7 +48,7 @@ const sameWithin = 1e-9;
 export function judge(alternatives: readonly Figures[], range?: RangeMgPerL): Marks[] {
   const best = new Map<FigureName, { value: number; word: string }>();
   for (const [name, word] of Object.entries(better) as [FigureName, "most" | "fewest" | "earliest"][]) {
-    const values = alternatives.map((figures) => valueOf(figures[name])).filter((value) => value !== undefined);
+    const values = alternatives.map((figures) => numberIn(figures[name])).filter((value) => value !== undefined);
     const low = Math.min(...values);
     const high = Math.max(...values);
     if (values.length < 2 || same(low, high)) continue;
@@ -60,7 +60,7 @@ export function judge(alternatives: readonly Figures[], range?: RangeMgPerL): Ma
 function bestMarks(figures: Figures, best: ReadonlyMap<FigureName, { value: number; word: string }>): Marks {
   const marks: [FigureName, Mark[]][] = [];
   for (const [name, { value, word }] of best) {
-    const own = valueOf(figures[name]);
+    const own = numberIn(figures[name]);
     if (own !== undefined && same(own, value)) marks.push([name, [{ kind: "best", words: `best: ${word}` }]]);
   }
   return Object.fromEntries(marks);
@@ -70,7 +70,7 @@ function rangeMarks(figures: Figures, range: RangeMgPerL | undefined): Marks {
   if (range === undefined) return {};
   const marks: [FigureName, Mark[]][] = [];
   for (const name of levels) {
-    const value = valueOf(figures[name]);
+    const value = numberIn(figures[name]);
     if (value === undefined) continue;
     if (value > range.high * (1 + sameWithin)) marks.push([name, [{ kind: "out-of-range", words: "above the range" }]]);
     if (value < range.low * (1 - sameWithin)) marks.push([name, [{ kind: "out-of-range", words: "below the range" }]]);
@@ -78,7 +78,7 @@ function rangeMarks(figures: Figures, range: RangeMgPerL | undefined): Marks {
   return Object.fromEntries(marks);
 }
 
-function valueOf(figure: Figure): number | undefined {
+function numberIn(figure: Figure): number | undefined {
   return isValue(figure) ? figure.value : undefined;
 }
 

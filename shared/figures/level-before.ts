@@ -1,4 +1,4 @@
-import { type Walk, advance, stretchAt } from "../kinetics/walk.ts";
+import { advance, stretchAt, type Walk } from "../kinetics/walk.ts";
 
 /** Level in mg/L just before anything that happens at this hour; at hour 0, the level after it. */
 export function levelBefore(made: Walk, atH: number): number {

@@ -1,6 +1,6 @@
 import type { RegimenContent } from "../contract/case.ts";
-import type { Course } from "../kinetics/course.ts";
 import { DomainError } from "../errors.ts";
+import type { Course } from "../kinetics/course.ts";
 import { type SteadyState, steadyState } from "../kinetics/steady-state.ts";
 import { type Walk, walk } from "../kinetics/walk.ts";
 import { courseOfContent } from "../schedule/course-of-content.ts";

@@ -1,5 +1,5 @@
-import { formatDose, formatQuantity } from "../units/format.ts";
 import { sayClock } from "../schedule/clock.ts";
+import { formatDose, formatQuantity } from "../units/format.ts";
 import { type Figure, isValue } from "./figure.ts";
 
 /** A figure as text: the number with its unit, or why there is none. */

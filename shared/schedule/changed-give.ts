@@ -16,7 +16,11 @@ export function changedGive(
   if (amountMg !== undefined && give.kind === "pump")
     throw new DomainError(`${field}/amountMg`, amountMg, "left out: the amount of a pump log is changed in its steps");
   if (durationH !== undefined && give.kind !== "infusion")
-    throw new DomainError(`${field}/durationH`, durationH, `left out: only an infusion has a duration, and this is ${nameOf(give)}`);
+    throw new DomainError(
+      `${field}/durationH`,
+      durationH,
+      `left out: only an infusion has a duration, and this is ${nameOf(give)}`,
+    );
   return {
     ...give,
     ...(amountMg !== undefined && { amountMg }),

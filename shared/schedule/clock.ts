@@ -32,7 +32,8 @@ export function toInstant(localText: string, zone: string): ResolvedTime {
   const first = localMs - Math.max(before, after);
   const second = localMs - Math.min(before, after);
   const isTrue = (instantMs: number) => instantMs + offsetMs(zone, instantMs) === localMs;
-  if (isTrue(first)) return { instant: instantOf(first, zone), resolution: second !== first && isTrue(second) ? "repeated" : "exact" };
+  if (isTrue(first))
+    return { instant: instantOf(first, zone), resolution: second !== first && isTrue(second) ? "repeated" : "exact" };
   if (isTrue(second)) return { instant: instantOf(second, zone), resolution: "exact" };
   return { instant: instantOf(localMs - before, zone), resolution: "skipped" };
 }
@@ -84,7 +85,14 @@ function localMsOf(localText: string): number {
   const allowed = "a date and 24-hour time such as 2026-03-29 08:00, from the year 1975 to 2199";
   const found = /^(\d{4})-(\d\d)-(\d\d)[T ](\d\d):(\d\d)(?::(\d\d))?$/.exec(localText.trim());
   if (found === null) throw new DomainError("time", localText, allowed);
-  const [year, month, day, hour, minute, second] = found.slice(1).map((part) => Number(part ?? 0)) as [number, number, number, number, number, number];
+  const [year, month, day, hour, minute, second] = found.slice(1).map((part) => Number(part ?? 0)) as [
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+  ];
   const made = new Date(Date.UTC(year, month - 1, day, hour, minute, second));
   const kept = made.getUTCMonth() === month - 1 && made.getUTCDate() === day && hour < 24 && minute < 60 && second < 60;
   if (!kept || year < 1975 || year > 2199) throw new DomainError("time", localText, allowed);

@@ -1,7 +1,7 @@
 import type { RegimenContent } from "../contract/case.ts";
 import { wholeAmount } from "../contract/limits.ts";
 import type { StatedKinetics } from "../contract/setting.ts";
-import { type Course, courseOf, type CourseInput } from "../kinetics/course.ts";
+import { type Course, type CourseInput, courseOf } from "../kinetics/course.ts";
 import { givenDoses } from "./doses-given.ts";
 import { elapsedDose } from "./elapsed-dose.ts";
 import { elapsedElimination } from "./elapsed-elimination.ts";

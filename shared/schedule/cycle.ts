@@ -40,8 +40,13 @@ export function cycleOf(content: RegimenContent): Cycle {
   if (running.length === 0) return { kind: "none", why: "no order repeats" };
   const cycleH = running.map(({ periodS }) => periodS).reduce(leastCommonMultiple) / 3_600;
   if (cycleH > longestCycleH)
-    return { kind: "none", why: `the repeating orders meet again only after ${cycleH} h, longer than ${longestCycleH} h` };
-  const startsAt = running.map(({ due }) => due[0]!.at).reduce((latest, at) => (hoursBetween(latest, at) > 0 ? at : latest));
+    return {
+      kind: "none",
+      why: `the repeating orders meet again only after ${cycleH} h, longer than ${longestCycleH} h`,
+    };
+  const startsAt = running
+    .map(({ due }) => due[0]!.at)
+    .reduce((latest, at) => (hoursBetween(latest, at) > 0 ? at : latest));
   const lagH = content.setting.kinetics.lagH?.value ?? 0;
   const doses = running.flatMap((repeating) => cycleDoses(repeating, startsAt, cycleH, content.timeZone, lagH));
   return { kind: "cycle", cycleH, doses, startsAt, orderIds: running.map(({ order }) => order.id) };
@@ -69,11 +74,20 @@ function stillRunning(repeating: readonly Repeating[]): Repeating[] {
   });
 }
 
-function cycleDoses({ order, when, due }: Repeating, startsAt: Instant, cycleH: number, zone: string, lagH: number): Dose[] {
+function cycleDoses(
+  { order, when, due }: Repeating,
+  startsAt: Instant,
+  cycleH: number,
+  zone: string,
+  lagH: number,
+): Dose[] {
   const { give } = order;
   if (when.kind === "every") {
     const phaseH = positiveRest(hoursBetween(startsAt, due[0]!.at), when.intervalH);
-    const times = Array.from({ length: Math.round(cycleH / when.intervalH) }, (_, index) => phaseH + index * when.intervalH);
+    const times = Array.from(
+      { length: Math.round(cycleH / when.intervalH) },
+      (_, index) => phaseH + index * when.intervalH,
+    );
     return times.map((atH) => elapsedDose(give, atH, lagH));
   }
   const startMinutes = minutesOfDay(toLocal(startsAt, zone).slice(11));

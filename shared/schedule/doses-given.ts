@@ -18,7 +18,8 @@ export function givenDoses(content: RegimenContent): ScheduledDose[] {
   content.schedule.records.forEach((record, index) => {
     const key = `${record.orderId}#${record.occurrence}`;
     const field = `schedule/records/${index}`;
-    if (records.has(key)) throw new DomainError(field, `dose ${record.occurrence + 1}`, "the only record of its dose: this one has two");
+    if (records.has(key))
+      throw new DomainError(field, `dose ${record.occurrence + 1}`, "the only record of its dose: this one has two");
     records.set(key, { record, field });
   });
   const scheduled = plannedDoses(content).map((dose) => {

@@ -17,7 +17,11 @@ export function elapsedElimination(content: RegimenContent): EliminationChange[]
     const field = `setting/eliminationChanges/${index}`;
     const fromH = hoursFromStart(change.from, span, `${field}/from`);
     if (change.kind !== "added-clearance" && set.has(fromH))
-      throw new DomainError(`${field}/from`, change.from, "another time: two changes of elimination are set for this one");
+      throw new DomainError(
+        `${field}/from`,
+        change.from,
+        "another time: two changes of elimination are set for this one",
+      );
     if (change.kind !== "added-clearance") set.add(fromH);
     const elapsed = elapsedChange(change, fromH, field);
     return fromH < span.horizonH ? [elapsed] : [];
@@ -28,6 +32,7 @@ function elapsedChange(change: DatedEliminationChange, fromH: number, field: str
   if (change.kind === "rate") return { fromH, eliminationRatePerH: change.eliminationRatePerH };
   if (change.kind === "clearance") return { fromH, clearanceLPerH: change.clearanceLPerH };
   const lengthH = hoursBetween(change.from, change.until);
-  if (!(lengthH > 0)) throw new DomainError(`${field}/until`, change.until, `later than the beginning of the span (${change.from})`);
+  if (!(lengthH > 0))
+    throw new DomainError(`${field}/until`, change.until, `later than the beginning of the span (${change.from})`);
   return { fromH, toH: fromH + lengthH, addedClearanceLPerH: change.addedClearanceLPerH };
 }

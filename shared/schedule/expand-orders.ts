@@ -35,7 +35,13 @@ function dosesOf(order: Order, span: PlanSpan, field: string): ScheduledDose[] {
   });
 }
 
-function exceptional(order: Order, due: DueTime, span: PlanSpan, exception: Order["exceptions"][number], field: string): ScheduledDose[] {
+function exceptional(
+  order: Order,
+  due: DueTime,
+  span: PlanSpan,
+  exception: Order["exceptions"][number],
+  field: string,
+): ScheduledDose[] {
   if ("skip" in exception) return [];
   const usual = doseAt(order, due, span);
   const give = changedGive(usual.give, exception, field);

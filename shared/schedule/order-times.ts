@@ -1,7 +1,7 @@
 import { addDays } from "date-fns/addDays";
 import { formatISO } from "date-fns/formatISO";
-import type { End, Order } from "../contract/schedule.ts";
 import { counts } from "../contract/limits.ts";
+import type { End, Order } from "../contract/schedule.ts";
 import { DomainError } from "../errors.ts";
 import { hoursBetween, instantAt, type Resolution, toInstant, toLocal } from "./clock.ts";
 
@@ -30,7 +30,11 @@ export interface PlanSpan {
 export function dueTimes({ when }: Order, span: PlanSpan, field: string): DueTime[] {
   const from = when.kind === "once" ? when.at : when.from;
   if (!(hoursBetween(span.start, from) >= 0))
-    throw new DomainError(`${field}/when/${when.kind === "once" ? "at" : "from"}`, from, `at or after the start of the plan (${span.start})`);
+    throw new DomainError(
+      `${field}/when/${when.kind === "once" ? "at" : "from"}`,
+      from,
+      `at or after the start of the plan (${span.start})`,
+    );
   if (when.kind === "once") return [{ occurrence: 0, at: when.at, resolution: "exact" }];
   const due = when.kind === "every" ? everyInterval(when.from, when.intervalH, span) : clockTimes(when, span);
   return taken(due, when.end, span, field);
@@ -42,7 +46,10 @@ function* everyInterval(from: string, intervalH: number, span: PlanSpan): Genera
 }
 
 /** Wall-clock times, day after day, from the order's beginning on. */
-function* clockTimes(when: Extract<Order["when"], { kind: "clock-times" }>, span: PlanSpan): Generator<Omit<DueTime, "occurrence">> {
+function* clockTimes(
+  when: Extract<Order["when"], { kind: "clock-times" }>,
+  span: PlanSpan,
+): Generator<Omit<DueTime, "occurrence">> {
   const times = [...when.times].sort((one, other) => one.time.localeCompare(other.time));
   const firstDay = new Date(`${toLocal(when.from, span.timeZone).slice(0, 10)}T12:00:00Z`);
   for (let day = 0; ; day++) {
@@ -62,7 +69,11 @@ function taken(due: Iterable<Omit<DueTime, "occurrence">>, end: End, span: PlanS
     const counted = end.kind === "count" && made.length >= end.doses;
     if (over || counted || hoursBetween(span.start, time.at) >= span.horizonH) return made;
     if (made.length >= counts.doses)
-      throw new DomainError(`${field}/when`, `more than ${made.length} doses`, `at most ${counts.doses} doses within the plan`);
+      throw new DomainError(
+        `${field}/when`,
+        `more than ${made.length} doses`,
+        `at most ${counts.doses} doses within the plan`,
+      );
     made.push({ ...time, occurrence: made.length });
   }
   return made;

@@ -38,11 +38,17 @@ export function readPumpLog(source: string, setting: PumpLogSetting): PumpLog {
   const table = readCsv(source);
   if (!table.ok) return { ok: false, problems: [{ line: table.line, detail: `the log ${table.detail}` }] };
   const [head] = table.rows;
-  if (head === undefined) return { ok: false, problems: [{ line: 1, detail: "the log is empty: give lines of time and rate" }] };
+  if (head === undefined)
+    return { ok: false, problems: [{ line: 1, detail: "the log is empty: give lines of time and rate" }] };
   const headed = !/\d/.test(head.cells[0] ?? "");
   const heading = headed ? head.cells.join(" ").toLowerCase() : "";
   if (/ml|microg|µg|mcg/.test(heading))
-    return { ok: false, problems: [{ line: head.line, detail: `the heading names another unit (${head.cells.join(", ")}): rates must be in mg/h` }] };
+    return {
+      ok: false,
+      problems: [
+        { line: head.line, detail: `the heading names another unit (${head.cells.join(", ")}): rates must be in mg/h` },
+      ],
+    };
   return readRows(headed ? table.rows.slice(1) : table.rows, setting);
 }
 
@@ -62,9 +68,21 @@ function readRows(rows: readonly { line: number; cells: readonly string[] }[], s
   }
   if (problems.length > 0) return { ok: false, problems };
   const lastLine = rows.at(-1)?.line ?? 1;
-  if (steps.length < 2) return { ok: false, problems: [{ line: lastLine, detail: "the log must hold at least two lines: a rate and a stop" }] };
+  if (steps.length < 2)
+    return {
+      ok: false,
+      problems: [{ line: lastLine, detail: "the log must hold at least two lines: a rate and a stop" }],
+    };
   if (steps.at(-1)!.rateMgPerH !== 0)
-    return { ok: false, problems: [{ line: lastLine, detail: `the last rate must be 0 mg/h, so that the log says when the pump stopped, got ${steps.at(-1)!.rateMgPerH}` }] };
+    return {
+      ok: false,
+      problems: [
+        {
+          line: lastLine,
+          detail: `the last rate must be 0 mg/h, so that the log says when the pump stopped, got ${steps.at(-1)!.rateMgPerH}`,
+        },
+      ],
+    };
   return { ok: true, steps, notes };
 }
 
@@ -78,14 +96,22 @@ function rowOf(line: number, cells: readonly string[]): Row | string {
   return { line, time, rate };
 }
 
-function stepOf(row: Row, byClock: boolean, setting: PumpLogSetting, beforeH: number | undefined, notes: string[]): PumpLogStep | string {
+function stepOf(
+  row: Row,
+  byClock: boolean,
+  setting: PumpLogSetting,
+  beforeH: number | undefined,
+  notes: string[],
+): PumpLogStep | string {
   const afterH = byClock ? clockHours(row, setting, notes) : plainHours(row);
   if (typeof afterH === "string") return afterH;
   if (!(afterH >= 0)) return `the time ${row.time} is before the order's time`;
-  if (beforeH !== undefined && !(afterH > beforeH)) return `the time ${row.time} is not later than the line before it: the log is out of order`;
+  if (beforeH !== undefined && !(afterH > beforeH))
+    return `the time ${row.time} is not later than the line before it: the log is out of order`;
   const rate = readNumber(row.rate);
   if (!rate.ok) return `the rate ${rate.problem}`;
-  if (!(rate.value >= 0 && rate.value <= highestRate)) return `the rate must be from 0 to ${highestRate} mg/h, got ${row.rate}`;
+  if (!(rate.value >= 0 && rate.value <= highestRate))
+    return `the rate must be from 0 to ${highestRate} mg/h, got ${row.rate}`;
   return { afterH, rateMgPerH: rate.value };
 }
 
@@ -96,11 +122,13 @@ function plainHours({ time }: Row): number | string {
 }
 
 function clockHours({ line, time }: Row, { timeZone, startsAt }: PumpLogSetting, notes: string[]): number | string {
-  if (!clockPattern.test(time)) return `the time must be a date and 24-hour time such as 2026-03-29 08:00 like the first line's, got ${time}`;
+  if (!clockPattern.test(time))
+    return `the time must be a date and 24-hour time such as 2026-03-29 08:00 like the first line's, got ${time}`;
   try {
     const { instant, resolution } = toInstant(time, timeZone);
     if (resolution === "repeated") notes.push(`line ${line}: ${time} comes twice that day; the first is taken`);
-    if (resolution === "skipped") notes.push(`line ${line}: ${time} does not exist that day; it is moved later by the gap`);
+    if (resolution === "skipped")
+      notes.push(`line ${line}: ${time} does not exist that day; it is moved later by the gap`);
     return hoursBetween(startsAt, instant);
   } catch (error) {
     if (error instanceof DomainError) return error.message;

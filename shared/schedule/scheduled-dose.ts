@@ -1,5 +1,5 @@
-import type { Give, Instant, PartId } from "../contract/schedule.ts";
 import type { z } from "zod";
+import type { Give, Instant, PartId } from "../contract/schedule.ts";
 
 type Id = z.infer<typeof PartId>;
 

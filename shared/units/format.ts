@@ -20,7 +20,8 @@ const smallestPlain = 1e-7;
  * Interface guidance MEDi-014, -041, -044 (unit change, space, thousands).
  */
 export function formatDose(amountMg: number): string {
-  if (!(Number.isFinite(amountMg) && amountMg >= 0)) throw new DomainError("amountMg", amountMg, "a finite number, 0 or more");
+  if (!(Number.isFinite(amountMg) && amountMg >= 0))
+    throw new DomainError("amountMg", amountMg, "a finite number, 0 or more");
   const typedMg = Number(amountMg.toPrecision(trustedDigits));
   if (typedMg >= 1 || typedMg === 0) return join(plain(typedMg, trustedDigits), "mg");
   const micrograms = Number((typedMg * 1_000).toPrecision(trustedDigits));
@@ -65,7 +66,10 @@ export function formatDuration(hours: number): string {
   if (!(Math.abs(minutes / 60 - hours) < 1e-9)) return formatQuantity(hours, "h");
   const wholeH = Math.floor(minutes / 60);
   const restMin = minutes - 60 * wholeH;
-  const parts = [wholeH > 0 && formatQuantity(wholeH, "h"), (restMin > 0 || wholeH === 0) && formatQuantity(restMin, "min")];
+  const parts = [
+    wholeH > 0 && formatQuantity(wholeH, "h"),
+    (restMin > 0 || wholeH === 0) && formatQuantity(restMin, "min"),
+  ];
   return parts.filter(Boolean).join(" ");
 }
 
@@ -91,6 +95,8 @@ function thousands(whole: string): string {
 
 function powerOfTen(value: number, digits: number): string {
   const [mantissa, exponent] = value.toExponential(digits - 1).split("e");
-  const raised = [...exponent!.replace("+", "")].map((sign) => (sign === "-" ? "⁻" : "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(sign)])).join("");
+  const raised = [...exponent!.replace("+", "")]
+    .map((sign) => (sign === "-" ? "⁻" : "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(sign)]))
+    .join("");
   return `${Number(mantissa)}${noBreak}×${noBreak}10${raised}`;
 }

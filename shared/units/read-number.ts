@@ -1,5 +1,7 @@
 /** What a field says, or why it says nothing that can be used. */
-export type ReadNumber = { readonly ok: true; readonly value: number } | { readonly ok: false; readonly problem: string };
+export type ReadNumber =
+  | { readonly ok: true; readonly value: number }
+  | { readonly ok: false; readonly problem: string };
 
 /**
  * A number as typed, read strictly. A comma could be a decimal or a thousands sign and a bare point is
@@ -11,7 +13,8 @@ export function readNumber(text: string): ReadNumber {
   const typed = text.trim();
   if (typed === "") return refused("is empty");
   if (typed.includes(",")) return refused(`must be written without a comma, such as 0.5 or 1000, got ${typed}`);
-  if (/^[+-]?\.\d+$/.test(typed)) return refused(`must have a zero before the point, such as 0${typed.replace(/^[+-]/, "")}, got ${typed}`);
+  if (/^[+-]?\.\d+$/.test(typed))
+    return refused(`must have a zero before the point, such as 0${typed.replace(/^[+-]/, "")}, got ${typed}`);
   if (!/^[+-]?\d+(\.\d+)?$/.test(typed)) return refused(`must be a plain number, such as 0.5 or 12, got ${typed}`);
   const value = Number(typed);
   return Number.isFinite(value) ? { ok: true, value } : refused(`must be a smaller number, got ${typed.slice(0, 20)}…`);

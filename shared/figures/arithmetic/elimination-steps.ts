@@ -9,6 +9,7 @@ export interface HandKinetics {
   readonly section: ArithmeticSection;
 }
 
+// biome-ignore lint/suspicious/noApproximativeNumericConstant: the lines are worked with the digits they print.
 const ln2 = 0.693147;
 
 /** k, CL, V and half-life from the two values that were given. */
@@ -24,23 +25,43 @@ export function handKinetics({ kinetics }: Course): HandKinetics {
   if (!given.has("clearanceLPerH")) {
     const substituted = `${put(eliminationRatePerH, "per h")} × ${put(volumeL, "L")}`;
     const value = eliminationRatePerH * volumeL;
-    clearanceLPerH = line(step({ title: "Clearance", formula: "CL = k × V", substituted, value, unit: "L/h", program: clearanceLPerH }));
+    clearanceLPerH = line(
+      step({ title: "Clearance", formula: "CL = k × V", substituted, value, unit: "L/h", program: clearanceLPerH }),
+    );
   } else if (!given.has("volumeL")) {
     const substituted = `${put(clearanceLPerH, "L/h")} ÷ ${put(eliminationRatePerH, "per h")}`;
     const value = clearanceLPerH / eliminationRatePerH;
-    volumeL = line(step({ title: "Volume of distribution", formula: "V = CL ÷ k", substituted, value, unit: "L", program: volumeL }));
+    volumeL = line(
+      step({ title: "Volume of distribution", formula: "V = CL ÷ k", substituted, value, unit: "L", program: volumeL }),
+    );
   } else {
     const substituted = `${put(clearanceLPerH, "L/h")} ÷ ${put(volumeL, "L")}`;
     const title = "Elimination rate constant";
     const value = clearanceLPerH / volumeL;
-    eliminationRatePerH = line(step({ title, formula: "k = CL ÷ V", substituted, value, unit: "per h", program: eliminationRatePerH }));
+    eliminationRatePerH = line(
+      step({ title, formula: "k = CL ÷ V", substituted, value, unit: "per h", program: eliminationRatePerH }),
+    );
   }
   if (!given.has("halfLifeH")) {
     const substituted = `${ln2} ÷ ${put(eliminationRatePerH, "per h")}`;
     const value = ln2 / eliminationRatePerH;
-    line(step({ title: "Half-life", formula: "half-life = ln 2 ÷ k", substituted, value, unit: "h", program: kinetics.halfLifeH }));
+    line(
+      step({
+        title: "Half-life",
+        formula: "half-life = ln 2 ÷ k",
+        substituted,
+        value,
+        unit: "h",
+        program: kinetics.halfLifeH,
+      }),
+    );
   }
-  return { volumeL, clearanceLPerH, eliminationRatePerH, section: { title: "Elimination", note: "ln 2 is 0.693147.", steps } };
+  return {
+    volumeL,
+    clearanceLPerH,
+    eliminationRatePerH,
+    section: { title: "Elimination", note: "ln 2 is 0.693147.", steps },
+  };
 }
 
 function rateFromHalfLife(halfLifeH: number, program: number): ArithmeticStep {
@@ -66,7 +87,8 @@ export function handRate(hand: HandKinetics, piece: EliminationPiece): { k: numb
     return { k: made.value, step: made };
   }
   // A stated k carries its clearance within ratePerH; taking it out again may leave a tail of digits.
-  const before = piece.base === "base" ? hand.eliminationRatePerH : tidy(piece.ratePerH - piece.clearanceLPerH / hand.volumeL);
+  const before =
+    piece.base === "base" ? hand.eliminationRatePerH : tidy(piece.ratePerH - piece.clearanceLPerH / hand.volumeL);
   if (!(piece.clearanceLPerH > 0)) return { k: before };
   const substituted = `${put(before, "per h")} + ${clearance} ÷ ${volume}`;
   const value = before + piece.clearanceLPerH / hand.volumeL;

@@ -7,7 +7,13 @@ import type { Course } from "../../kinetics/course.ts";
  */
 export type Part =
   | { readonly kind: "bolus"; readonly dose: number; readonly atH: number; readonly amountMg: number }
-  | { readonly kind: "rate"; readonly dose: number; readonly atH: number; readonly hours: number; readonly rateMgPerH: number }
+  | {
+      readonly kind: "rate";
+      readonly dose: number;
+      readonly atH: number;
+      readonly hours: number;
+      readonly rateMgPerH: number;
+    }
   | { readonly kind: "absorbed"; readonly dose: number; readonly atH: number; readonly amountMg: number };
 
 /** Parts of a course in the order of its doses; `dose` is the index in it. Amounts are as ordered. */
@@ -17,9 +23,12 @@ export function partsOf(course: Course): Part[] {
 
 function partsOfDose(given: Dose, dose: number, horizonH: number): Part[] {
   if (given.kind === "bolus") return [{ kind: "bolus", dose, atH: given.atH, amountMg: given.amountMg }];
-  if (given.kind === "absorbed") return [{ kind: "absorbed", dose, atH: given.atH + given.lagH, amountMg: given.amountMg }];
+  if (given.kind === "absorbed")
+    return [{ kind: "absorbed", dose, atH: given.atH + given.lagH, amountMg: given.amountMg }];
   if (given.kind === "infusion")
-    return [{ kind: "rate", dose, atH: given.atH, hours: given.durationH, rateMgPerH: given.amountMg / given.durationH }];
+    return [
+      { kind: "rate", dose, atH: given.atH, hours: given.durationH, rateMgPerH: given.amountMg / given.durationH },
+    ];
   return given.steps.flatMap((step, index): Part[] => {
     const untilH = given.steps[index + 1]?.atH ?? horizonH;
     if (step.rateMgPerH === 0 || !(untilH > step.atH)) return [];

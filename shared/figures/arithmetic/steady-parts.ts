@@ -1,6 +1,6 @@
 import type { Course } from "../../kinetics/course.ts";
 import { partsOf } from "./parts.ts";
-import { carried, put, step, type ArithmeticStep } from "./step.ts";
+import { type ArithmeticStep, carried, put, step } from "./step.ts";
 
 /** What one cycle's lines are worked out with: the values as printed. */
 export interface HandCycle {
@@ -133,7 +133,9 @@ function absorbedShare(cycle: HandCycle, reading: Reading, { atH, amountMg }: Do
     title: `absorbed dose, ${title}`,
     formula: `${F === 1 ? "" : "F × "}${salted(course)}D × ka ÷ [V × (ka − k)] × [e^(−k × u) × A − e^(−ka × u) ÷ (1 − e^(−ka × P))]`,
     substituted: `${head} × [e^(−${put(k, "per h")} × ${put(u, "h")}) × ${put(A, "")} − ${fast}]`,
-    value: ((F * S * amountMg * ka) / (volumeL * (ka - k))) * (Math.exp(-k * u) * A - Math.exp(-ka * u) / (1 - Math.exp(-ka * P))),
+    value:
+      ((F * S * amountMg * ka) / (volumeL * (ka - k))) *
+      (Math.exp(-k * u) * A - Math.exp(-ka * u) / (1 - Math.exp(-ka * P))),
   };
 }
 

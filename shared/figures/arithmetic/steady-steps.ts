@@ -1,8 +1,8 @@
 import type { Settled } from "../prepared.ts";
 import { type HandKinetics, handRate } from "./elimination-steps.ts";
 import { partsOf } from "./parts.ts";
-import { type ArithmeticSection, type ArithmeticStep, carried, put, step } from "./step.ts";
 import { type HandCycle, levelSteps, sharesAt } from "./steady-parts.ts";
+import { type ArithmeticSection, type ArithmeticStep, carried, put, step } from "./step.ts";
 
 /** More parts than this nobody adds up by hand. */
 const mostParts = 8;
@@ -41,26 +41,41 @@ export function steadySection(hand: HandKinetics, settled: Settled): ArithmeticS
 
 function clearanceThen(k: number, volumeL: number): ArithmeticStep {
   const substituted = `${put(k, "per h")} × ${put(volumeL, "L")}`;
-  return step({ title: "Clearance at the end of the plan", formula: "CL = k × V", substituted, value: k * volumeL, unit: "L/h" });
+  return step({
+    title: "Clearance at the end of the plan",
+    formula: "CL = k × V",
+    substituted,
+    value: k * volumeL,
+    unit: "L/h",
+  });
 }
 
 function accumulationStep(k: number, cycleH: number): ArithmeticStep {
   const substituted = `1 ÷ (1 − e^(−${put(k, "per h")} × ${put(cycleH, "h")}))`;
-  return step({ title: "Accumulation factor", formula: "A = 1 ÷ (1 − e^(−k × P))", substituted, value: 1 / (1 - Math.exp(-k * cycleH)), unit: "" });
+  return step({
+    title: "Accumulation factor",
+    formula: "A = 1 ÷ (1 − e^(−k × P))",
+    substituted,
+    value: 1 / (1 - Math.exp(-k * cycleH)),
+    unit: "",
+  });
 }
 
 /** Area of 24 hours at steady state: what reaches the body in a day, over clearance. */
 function areaStep({ course, cycleH, clearanceLPerH }: HandCycle, program: number): ArithmeticStep {
   const amounts = partsOf(course).map((part) => {
     const amountMg = carried(part.kind === "rate" ? part.rateMgPerH * part.hours : part.amountMg);
-    const factors = [course.saltFactor, part.kind === "absorbed" ? course.bioavailability : 1].filter((factor) => factor !== 1);
+    const factors = [course.saltFactor, part.kind === "absorbed" ? course.bioavailability : 1].filter(
+      (factor) => factor !== 1,
+    );
     return {
       words: [...factors.map((factor) => put(factor, "")), put(amountMg, "mg")].join(" × "),
       effectiveMg: factors.reduce((product, factor) => product * factor, amountMg),
     };
   });
   const sumMg = amounts.reduce((sum, { effectiveMg }) => sum + effectiveMg, 0);
-  const gathered = amounts.length > mostParts ? put(carried(sumMg), "mg") : amounts.map(({ words }) => words).join(" + ");
+  const gathered =
+    amounts.length > mostParts ? put(carried(sumMg), "mg") : amounts.map(({ words }) => words).join(" + ");
   return step({
     title: "Area over 24 h at steady state",
     formula: "AUC24 = amount reaching the body in a cycle × 24 h ÷ (P × CL)",
@@ -73,25 +88,51 @@ function areaStep({ course, cycleH, clearanceLPerH }: HandCycle, program: number
 
 function averageStep(area: number, program: number): ArithmeticStep {
   const substituted = `${put(area, "mg·h/L")} ÷ 24 h`;
-  return step({ title: "Average at steady state", formula: "C average = AUC24 ÷ 24 h", substituted, value: area / 24, unit: "mg/L", program });
+  return step({
+    title: "Average at steady state",
+    formula: "C average = AUC24 ÷ 24 h",
+    substituted,
+    value: area / 24,
+    unit: "mg/L",
+    program,
+  });
 }
 
 function extremeSteps(cycle: HandCycle, settled: Extract<Settled, { kind: "cycle" }>) {
   const { peak, trough } = settled.steady.exposure;
   const parts = partsOf(cycle.course).length;
-  if (parts > mostParts) return { steps: [], note: `Peak and trough are not shown line by line: the cycle has ${parts} parts.` };
+  if (parts > mostParts)
+    return { steps: [], note: `Peak and trough are not shown line by line: the cycle has ${parts} parts.` };
   const peakShares = sharesAt(cycle, { atH: peak.atH, side: "after" });
   const troughShares = sharesAt(cycle, { atH: trough.atH, side: "before" });
   if (peakShares === undefined || troughShares === undefined)
-    return { steps: [], note: "Peak and trough are not shown line by line: ka and k are so close that the textbook formula loses its digits." };
-  const peakSteps = levelSteps(`Peak at steady state, ${put(carried(peak.atH), "h")} into the cycle`, peakShares, peak.mgPerL);
-  const troughSteps = levelSteps(`Trough at steady state, ${put(carried(trough.atH), "h")} into the cycle`, troughShares, trough.mgPerL);
+    return {
+      steps: [],
+      note: "Peak and trough are not shown line by line: ka and k are so close that the textbook formula loses its digits.",
+    };
+  const peakSteps = levelSteps(
+    `Peak at steady state, ${put(carried(peak.atH), "h")} into the cycle`,
+    peakShares,
+    peak.mgPerL,
+  );
+  const troughSteps = levelSteps(
+    `Trough at steady state, ${put(carried(trough.atH), "h")} into the cycle`,
+    troughShares,
+    trough.mgPerL,
+  );
   return { steps: [...peakSteps, ...troughSteps], peak: peakSteps.at(-1)!.value, trough: troughSteps.at(-1)!.value };
 }
 
 function swingStep(peak: number, trough: number, program: number): ArithmeticStep {
   const substituted = `100 × (${put(peak, "mg/L")} − ${put(trough, "mg/L")}) ÷ ${put(trough, "mg/L")}`;
-  return step({ title: "Swing at steady state", formula: "100 × (peak − trough) ÷ trough", substituted, value: (100 * (peak - trough)) / trough, unit: "percent", program });
+  return step({
+    title: "Swing at steady state",
+    formula: "100 × (peak − trough) ÷ trough",
+    substituted,
+    value: (100 * (peak - trough)) / trough,
+    unit: "percent",
+    program,
+  });
 }
 
 function loadingForAverage({ volumeL, course }: HandCycle, average: number): ArithmeticStep {

@@ -1,9 +1,9 @@
 import { effectiveMg } from "../../kinetics/course.ts";
 import { advance, stretchAt, type Walk } from "../../kinetics/walk.ts";
-import { momentAt } from "../moment.ts";
-import type { Prepared } from "../prepared.ts";
 import { sayClock } from "../../schedule/clock.ts";
 import { formatDose } from "../../units/format.ts";
+import { momentAt } from "../moment.ts";
+import type { Prepared } from "../prepared.ts";
 import { type HandKinetics, handRate } from "./elimination-steps.ts";
 import { type ArithmeticSection, type ArithmeticStep, carried, carriedHours, put, step } from "./step.ts";
 
@@ -23,8 +23,16 @@ const howToRead =
 export function walkSection(hand: HandKinetics, prepared: Prepared): ArithmeticSection {
   const { made, course } = prepared;
   const title = "Levels from event to event";
-  if (course.elimination.some(({ ratePerH }) => Math.abs((course.absorptionRatePerH ?? Number.NaN) - ratePerH) < 0.001 * ratePerH))
-    return { title, note: "Not shown line by line: ka and k are so close that the textbook formula loses its digits.", steps: [] };
+  if (
+    course.elimination.some(
+      ({ ratePerH }) => Math.abs((course.absorptionRatePerH ?? Number.NaN) - ratePerH) < 0.001 * ratePerH,
+    )
+  )
+    return {
+      title,
+      note: "Not shown line by line: ka and k are so close that the textbook formula loses its digits.",
+      steps: [],
+    };
   const shown = Math.min(made.count, mostStretches);
   const steps: ArithmeticStep[] = [];
   let state = { level: course.startConcentrationMgPerL, waitingMg: 0 };
@@ -65,7 +73,15 @@ function stretchLine(hand: HandKinetics, prepared: Prepared, made: Walk, index: 
     level = made.value;
   }
   const waitingMg = carried(before.waitingMg + given.depotMg);
-  const after = decay({ level, waitingMg, k, ka: flow.ka, hours, rateMgPerH: carried(flow.rateMgPerH), volumeL: hand.volumeL });
+  const after = decay({
+    level,
+    waitingMg,
+    k,
+    ka: flow.ka,
+    hours,
+    rateMgPerH: carried(flow.rateMgPerH),
+    volumeL: hand.volumeL,
+  });
   const untilH = made.untilH[index]!;
   const end = momentAt(prepared.content, untilH).at;
   steps.push(
@@ -84,10 +100,22 @@ function stretchLine(hand: HandKinetics, prepared: Prepared, made: Walk, index: 
 }
 
 /** The textbook terms that apply on one stretch, in words and numbers. */
-function decay(stretch: { level: number; waitingMg: number; k: number; ka: number; hours: number; rateMgPerH: number; volumeL: number }) {
+function decay(stretch: {
+  level: number;
+  waitingMg: number;
+  k: number;
+  ka: number;
+  hours: number;
+  rateMgPerH: number;
+  volumeL: number;
+}) {
   const { level, waitingMg, k, ka, hours, rateMgPerH, volumeL } = stretch;
   const survives = `e^(−${put(k, "per h")} × ${put(hours, "h")})`;
-  const falling = { formula: "C × e^(−k × t)", words: `${put(level, "mg/L")} × ${survives}`, value: level * Math.exp(-k * hours) };
+  const falling = {
+    formula: "C × e^(−k × t)",
+    words: `${put(level, "mg/L")} × ${survives}`,
+    value: level * Math.exp(-k * hours),
+  };
   const enters = rateMgPerH > 0 || waitingMg > 0;
   const terms = level === 0 && enters ? [] : [falling];
   if (rateMgPerH > 0 && k > 0)

@@ -20,5 +20,10 @@ export function workedArithmetic(content: RegimenContent): ArithmeticSection[] {
 export function workedArithmeticOf(prepared: Prepared): ArithmeticSection[] {
   const hand = handKinetics(prepared.course);
   const changes = changesSection(hand, prepared.course);
-  return [hand.section, ...(changes ? [changes] : []), steadySection(hand, prepared.settled), walkSection(hand, prepared)];
+  return [
+    hand.section,
+    ...(changes ? [changes] : []),
+    steadySection(hand, prepared.settled),
+    walkSection(hand, prepared),
+  ];
 }
