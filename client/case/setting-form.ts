@@ -1,18 +1,10 @@
 import type { DatedEliminationChange, StatedKinetics } from "../../shared/contract/setting.ts";
+import type { MomentText } from "../controls/moment.ts";
 
 /** A number as it stands in its field, valid or not, and where it came from. */
 export interface StatedText {
   readonly text: string;
   readonly note: string;
-}
-
-/**
- * A clock time as it stands in its field. `instant` is kept beside the text because the text alone
- * cannot tell the two 01:30 of an autumn night apart, nor hold seconds.
- */
-export interface MomentText {
-  readonly text: string;
-  readonly instant?: string;
 }
 
 export type StatedName = keyof StatedKinetics;

@@ -4,32 +4,32 @@ import { Field, type FieldWords, describedBy } from "./field.tsx";
 /** "typing": every key; "settled": the person left the field or pressed Enter. */
 export type TypingStage = "typing" | "settled";
 
-interface TextFieldProps extends FieldWords {
+export interface TextFieldProps extends FieldWords {
   readonly text: string;
   readonly onText: (text: string, stage: TypingStage) => void;
-  readonly unit?: string;
+  readonly unit?: string | undefined;
   /** "decimal" brings up the digits on a touch keyboard; what is typed stays free text. */
   readonly mode?: "text" | "decimal" | "numeric";
   readonly lines?: number;
+  /** Id of a datalist. */
   readonly suggestions?: string;
   readonly longest?: number;
   readonly required?: boolean;
 }
 
 /**
- * A text input that always shows what was typed. While the person is typing, a problem that the typing
- * has just made is held back; it is shown once the field is left.
+ * A text input that always shows what was typed. While the person is typing, a problem is held back, since
+ * half a number is not yet a wrong one; it is shown once the field is left or Enter is pressed.
  */
 export function TextField(props: TextFieldProps) {
   const typed = useSignal<string | undefined>(undefined);
-  const typing = typed.value !== undefined && typed.value !== props.text;
+  const typing = typed.value !== undefined;
   const words = typing ? { ...props, problem: undefined } : props;
   const shared = {
     id: props.id,
     value: typed.value ?? props.text,
     "aria-invalid": Boolean(words.problem),
     "aria-describedby": describedBy(words),
-    "data-typing": typing ? "" : undefined,
     required: props.required,
     maxLength: props.longest,
     autocomplete: "off",
