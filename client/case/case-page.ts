@@ -1,0 +1,110 @@
+import { type ReadonlySignal, type Signal, computed, signal } from "@preact/signals";
+import { cautionsForContent } from "../../shared/cautions/gather.ts";
+import { standingCaution } from "../../shared/cautions/standing.ts";
+import type { RegimenContent } from "../../shared/contract/case.ts";
+import type { Caution } from "../../shared/contract/caution.ts";
+import { DomainError } from "../../shared/errors.ts";
+import type { WholeCase } from "../http/cases-api.ts";
+import { type Alternative, type CaseDocument, contentOf } from "./case-document.ts";
+import { type CaseModel, createCaseModel } from "./case-model.ts";
+import { documentOfCase } from "./document-of-case.ts";
+import { type Drafts, type DraftsByName, createDrafts } from "./drafts.ts";
+import { readSetting, readSettingForm, type SettingReading } from "./read-setting.ts";
+import { same } from "./same.ts";
+
+/** Cautions of one alternative, or why it cannot be computed. */
+export interface Judged {
+  readonly cautions: readonly Caution[];
+  /** Path within the content and what is wrong there. */
+  readonly problem?: { readonly field: string; readonly detail: string };
+}
+
+export type SavedState = "never" | "saved" | "changed";
+
+/** Everything one case page knows: what is typed, what the server has, and what follows from both. */
+export interface CasePage {
+  readonly model: CaseModel;
+  readonly drafts: Drafts;
+  /** What the server last told about the case. */
+  readonly stored: Signal<WholeCase>;
+  /** Version of the case that the details on the page started from. */
+  readonly baseVersion: Signal<number>;
+  /** What the server did not accept, by JSON Pointer of what was sent. */
+  readonly refused: Signal<readonly { readonly pointer: string; readonly detail: string }[]>;
+  readonly reading: ReadonlySignal<SettingReading>;
+  readonly selected: ReadonlySignal<Alternative | undefined>;
+  readonly selectedContent: ReadonlySignal<RegimenContent | undefined>;
+  readonly judged: ReadonlySignal<Judged>;
+  /** Label, notes, time zone or setting differ from what the server has. */
+  readonly detailsChanged: ReadonlySignal<boolean>;
+  readonly unsaved: ReadonlySignal<boolean>;
+}
+
+/** What an earlier visit left unsaved. */
+export interface UnsavedWork {
+  readonly document: CaseDocument;
+  readonly drafts: DraftsByName;
+  readonly baseVersion: number;
+}
+
+/** @param unsaved work taken up again; without it the page opens as the server has the case */
+export function createCasePage(whole: WholeCase, unsaved?: UnsavedWork): CasePage {
+  const model = createCaseModel(unsaved?.document ?? documentOfCase(whole), readSetting);
+  const drafts = createDrafts(unsaved?.drafts);
+  const stored = signal(whole);
+  const opened = computed(() => documentOfCase(stored.value));
+  const selected = computed(() => selectedIn(model.document.value, model.selectedKey.value));
+  const selectedContent = computed(() => model.contents.value.get(selected.value?.key ?? ""));
+  const form = computed(() => model.document.value.form);
+  const timeZone = computed(() => model.document.value.timeZone);
+  const detailsChanged = computed(() => !sameDetails(model.document.value, opened.value));
+  return {
+    model,
+    drafts,
+    stored,
+    baseVersion: signal(unsaved?.baseVersion ?? whole.case.version),
+    refused: signal([]),
+    reading: computed(() => readSettingForm(form.value, timeZone.value)),
+    selected,
+    selectedContent,
+    judged: computed(() => judge(selectedContent.value)),
+    detailsChanged,
+    unsaved: computed(
+      () =>
+        detailsChanged.value ||
+        Object.keys(drafts.all.value).length > 0 ||
+        !same(model.document.value.alternatives, opened.value.alternatives),
+    ),
+  };
+}
+
+/** How an alternative on the page stands to its newest revision. */
+export function savedStateOf(page: CasePage, alternative: Alternative): SavedState {
+  const latest = page.stored.value.regimens.find(({ id }) => id === alternative.regimenId)?.latest;
+  if (latest === undefined) return "never";
+  return same(contentOf(page.model.document.value, alternative), latest.content) ? "saved" : "changed";
+}
+
+/** Cautions of a content; where it cannot be computed, the standing one and the reason. */
+export function judge(content: RegimenContent | undefined): Judged {
+  if (content === undefined) return { cautions: [standingCaution] };
+  try {
+    return { cautions: cautionsForContent(content) };
+  } catch (error) {
+    if (!(error instanceof DomainError)) throw error;
+    const detail = `must be ${error.allowed}, got ${String(error.value)}`;
+    return { cautions: [standingCaution], problem: { field: error.field, detail } };
+  }
+}
+
+function selectedIn({ alternatives }: CaseDocument, key: string | undefined): Alternative | undefined {
+  return alternatives.find((each) => each.key === key) ?? alternatives[0];
+}
+
+/** The form is compared by what it says once it says something; until then by its texts. */
+function sameDetails(now: CaseDocument, opened: CaseDocument): boolean {
+  if (now.label !== opened.label || now.notes !== opened.notes || now.timeZone !== opened.timeZone) return false;
+  return now.setting === undefined || opened.setting === undefined
+    ? same(now.form, opened.form)
+    : same(now.setting, opened.setting);
+}

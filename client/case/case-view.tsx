@@ -1,0 +1,50 @@
+import { useSignal } from "@preact/signals";
+import { useEffect } from "preact/hooks";
+import { AlternativesPart } from "../alternatives/alternatives-part.tsx";
+import { DosesPart } from "../doses/doses-part.tsx";
+import { keepWhileOpen } from "../keeping/keep-while-open.ts";
+import { OrdersPart } from "../orders/orders-part.tsx";
+import { ArithmeticSection } from "../reading/arithmetic-section.tsx";
+import { CurveSection } from "../reading/curve-section.tsx";
+import { FiguresSection } from "../reading/figures-section.tsx";
+import { RemainsSection } from "../reading/remains-section.tsx";
+import { WaitSection } from "../reading/wait-section.tsx";
+import { SavePart } from "../saving/save-part.tsx";
+import { ChangesPart } from "../setting/changes-part.tsx";
+import { CaseDetails } from "../setting/case-details.tsx";
+import { SettingPart } from "../setting/setting-part.tsx";
+import { announce } from "../shell/announce.ts";
+import { PageFrame } from "../shell/page-frame.tsx";
+import type { CasePage } from "./case-page.ts";
+import { CaseTools } from "./case-tools.tsx";
+import { useUndoKeys } from "./undo-keys.ts";
+import "./case-view.css";
+
+/** One case, read from top to bottom as the question is asked. */
+export function CaseView({ page }: { page: CasePage }) {
+  const { model } = page;
+  const kept = useSignal(true);
+  useEffect(() => keepWhileOpen(page, kept), [page]);
+  useEffect(() => model.lastChange.subscribe(announce), [page]);
+  useUndoKeys(model);
+  const { label } = model.document.value;
+  useEffect(() => {
+    document.title = `${label} - Ebbline`;
+  }, [label]);
+  return (
+    <PageFrame cautions={page.judged.value.cautions} tools={<CaseTools page={page} kept={kept.value} />}>
+      <CaseDetails page={page} />
+      <SettingPart page={page} />
+      <ChangesPart page={page} />
+      <AlternativesPart page={page} />
+      <OrdersPart page={page} />
+      <DosesPart page={page} />
+      <CurveSection model={model} />
+      <RemainsSection model={model} />
+      <FiguresSection model={model} />
+      <WaitSection model={model} />
+      <ArithmeticSection model={model} />
+      <SavePart page={page} />
+    </PageFrame>
+  );
+}

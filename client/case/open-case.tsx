@@ -1,0 +1,67 @@
+import { useSignal } from "@preact/signals";
+import { useEffect } from "preact/hooks";
+import { standingCaution } from "../../shared/cautions/standing.ts";
+import type { Failure } from "../http/answer.ts";
+import type { WholeCase } from "../http/cases-api.ts";
+import { dropKept, keptName, readKept } from "../keeping/kept-text.ts";
+import type { KeptWork } from "../keeping/unsaved-form.ts";
+import { UnsavedOffer } from "../keeping/unsaved-offer.tsx";
+import { FailureNote } from "../shell/failure-note.tsx";
+import { PageFrame } from "../shell/page-frame.tsx";
+import { type CasePage, createCasePage } from "./case-page.ts";
+import { CaseView } from "./case-view.tsx";
+
+type Opening =
+  | { readonly step: "loading" }
+  | { readonly step: "failed"; readonly failure: Failure }
+  | { readonly step: "offer"; readonly whole: WholeCase; readonly text: string; readonly kept: KeptWork | undefined }
+  | { readonly step: "open"; readonly page: CasePage };
+
+/** Loads a case, asks about unsaved work of an earlier visit, then shows the case. */
+export function OpenCase({ id }: { id: string }) {
+  const opening = useSignal<Opening>({ step: "loading" });
+  const load = async () => {
+    opening.value = { step: "loading" };
+    opening.value = await openedCase(id);
+  };
+  useEffect(() => void load(), [id]);
+  const now = opening.value;
+  if (now.step === "open") return <CaseView page={now.page} />;
+  const open = (page: CasePage) => {
+    opening.value = { step: "open", page };
+  };
+  return (
+    <PageFrame cautions={[standingCaution]}>
+      {now.step === "loading" && <p role="status">Loading the case …</p>}
+      {now.step === "failed" && <FailureNote failure={now.failure} onRetry={load} />}
+      {now.step === "offer" && (
+        <UnsavedOffer
+          whole={now.whole}
+          text={now.text}
+          kept={now.kept}
+          onTakeUp={(kept) => open(createCasePage(now.whole, kept))}
+          onDiscard={() => {
+            dropKept(keptName(id));
+            open(createCasePage(now.whole));
+          }}
+        />
+      )}
+    </PageFrame>
+  );
+}
+
+/** The schemas come with the first request, so that the page itself is there sooner. */
+async function openedCase(id: string): Promise<Opening> {
+  const [{ loadCase }, { readUnsaved }] = await Promise.all([
+    import("../http/cases-api.ts"),
+    import("../keeping/unsaved-form.ts"),
+  ]);
+  const answer = await loadCase(id);
+  if (!answer.ok) return { step: "failed", failure: answer.failure };
+  const whole = answer.value;
+  const text = readKept(keptName(id));
+  if (text === undefined) return { step: "open", page: createCasePage(whole) };
+  const kept = readUnsaved(text);
+  if (kept !== undefined && !createCasePage(whole, kept).unsaved.value) return { step: "open", page: createCasePage(whole) };
+  return { step: "offer", whole, text, kept };
+}

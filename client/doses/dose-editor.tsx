@@ -1,0 +1,133 @@
+import { useSignal } from "@preact/signals";
+import { counts } from "../../shared/contract/limits.ts";
+import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
+import { ChoiceField } from "../controls/choice-field.tsx";
+import { MomentField } from "../controls/moment-field.tsx";
+import { TextField } from "../controls/text-field.tsx";
+import { AmountField, DurationField } from "../orders/give-fields.tsx";
+import { plainText } from "../case/form-of-setting.ts";
+import { focusOn } from "../shell/focus.ts";
+import { ProblemSummary } from "../shell/problem-summary.tsx";
+import { type DoseEdit, type OrderedDose, givenChoiceOf, planChoiceOf, readDoseDraft } from "./dose-draft.ts";
+
+interface DoseEditorProps {
+  readonly dose: OrderedDose;
+  readonly title: string;
+  readonly draft: Draft;
+  readonly timeZone: string;
+  readonly onDraft: (fields: Draft) => void;
+  readonly onApply: (edit: DoseEdit) => void;
+  readonly onCancel: () => void;
+}
+
+/** One scheduled dose: planned otherwise than the rest of its order, and what was given of it. */
+export function DoseEditor({ dose, title, draft, timeZone, onDraft, onApply, onCancel }: DoseEditorProps) {
+  const checked = useSignal(false);
+  const read = readDoseDraft(draft, dose, timeZone);
+  const problems = checked.value && !read.ok ? read.problems : {};
+  const name = (field: string) => `dose-${dose.orderId}-${dose.occurrence}-${field}`;
+  const parts = { dose, draft, timeZone, problems, onDraft, name };
+  const apply = (event: Event) => {
+    event.preventDefault();
+    checked.value = true;
+    if (read.ok) onApply(read.edit);
+    else focusOn(name("problems"));
+  };
+  return (
+    <form class="editor" noValidate onSubmit={apply} aria-label={title}>
+      <h3>{title}</h3>
+      <ProblemSummary id={name("problems")} problems={problems} fieldId={name} />
+      <ChoiceField
+        id={name("given")}
+        legend="What was given"
+        value={givenChoiceOf(draft)}
+        choices={[
+          { value: "none", label: "nothing recorded" },
+          { value: "as-planned", label: "given as planned" },
+          { value: "changed", label: "given otherwise" },
+          { value: "omitted", label: "omitted" },
+        ]}
+        onChoice={(given) => onDraft({ given })}
+      />
+      {givenChoiceOf(draft) === "changed" && <Parts {...parts} prefix="given" />}
+      <ChoiceField
+        id={name("plan")}
+        legend="What is planned"
+        value={planChoiceOf(draft)}
+        choices={[
+          { value: "as-rest", label: "as the rest of its order" },
+          { value: "changed", label: "otherwise" },
+          { value: "left-out", label: "left out" },
+        ]}
+        onChoice={(plan) => onDraft({ plan })}
+      />
+      {planChoiceOf(draft) === "changed" && <Parts {...parts} prefix="plan" />}
+      <TextField
+        id={name("note")}
+        label="Note on what was given"
+        text={textIn(draft, "note")}
+        onText={(note) => onDraft({ note })}
+        longest={counts.noteCharacters}
+      />
+      <div class="button-row">
+        <button type="submit" class="button button-main">
+          Apply
+        </button>
+        <button type="button" class="button" onClick={onCancel}>
+          Cancel
+        </button>
+      </div>
+    </form>
+  );
+}
+
+interface PartsProps {
+  readonly dose: OrderedDose;
+  readonly draft: Draft;
+  readonly timeZone: string;
+  readonly problems: Readonly<Record<string, string>>;
+  readonly prefix: "given" | "plan";
+  readonly name: (field: string) => string;
+  readonly onDraft: (fields: Draft) => void;
+}
+
+function Parts({ dose, draft, timeZone, problems, prefix, name, onDraft }: PartsProps) {
+  const { give } = dose;
+  const field = (part: string) => `${prefix}-${part}`;
+  const amountText = textIn(draft, field("amount"));
+  return (
+    <div class="fields">
+      <MomentField
+        id={name(field("at"))}
+        label="Time"
+        moment={momentIn(draft, field("at"))}
+        timeZone={timeZone}
+        onMoment={(moment) => onDraft(momentFields(field("at"), moment))}
+        problem={problems[field("at")]}
+        hint="24-hour, such as 2026-03-29 08:00; empty: the time stays"
+        emptiness="allowed"
+      />
+      {give.kind !== "pump" && (
+        <AmountField
+          id={name(field("amount"))}
+          label="Amount"
+          text={amountText}
+          hint="empty: the amount stays"
+          problem={problems[field("amount")]}
+          onText={(text) => onDraft({ [field("amount")]: text })}
+        />
+      )}
+      {give.kind === "infusion" && (
+        <DurationField
+          id={name(field("duration"))}
+          label="Infusion duration"
+          text={textIn(draft, field("duration"))}
+          amountText={amountText || plainText(give.amountMg)}
+          hint="empty: the duration stays"
+          problem={problems[field("duration")]}
+          onText={(text) => onDraft({ [field("duration")]: text })}
+        />
+      )}
+    </div>
+  );
+}

@@ -1,0 +1,64 @@
+import { useSignal } from "@preact/signals";
+import type { CasePage } from "../case/case-page.ts";
+import { TimeZoneField, timeZoneProblem } from "../cases/time-zone-field.tsx";
+import { momentText, readMoment } from "../controls/moment.ts";
+import { TextField } from "../controls/text-field.tsx";
+import { counts } from "../../shared/contract/limits.ts";
+import type { CaseDocument } from "../case/case-document.ts";
+import { refusedAt } from "../saving/refused.ts";
+import { SaveDetails } from "../saving/save-details-button.tsx";
+
+/** The case's label, time zone and notes. */
+export function CaseDetails({ page }: { page: CasePage }) {
+  const { model } = page;
+  const { label, notes, timeZone } = model.document.value;
+  const zone = useSignal<string | undefined>(undefined);
+  const zoneText = zone.value ?? timeZone;
+  return (
+    <section class="case-title" aria-label="Case">
+      <h1>{label || "Case without a label"}</h1>
+      <div class="fields">
+        <TextField
+          id="case-label"
+          label="Label"
+          text={label}
+          onText={(text) => model.change("label of the case", (document) => ({ ...document, label: text }), "label")}
+          hint="enter no names and nothing else that identifies a person"
+          problem={label.trim() === "" ? "Label is empty; give the case a label without names" : refusedAt(page, "case-label")}
+          longest={counts.labelCharacters}
+        />
+        <TimeZoneField
+          id="case-zone"
+          text={zoneText}
+          problem={zone.value === undefined ? refusedAt(page, "case-zone") : timeZoneProblem(zoneText)}
+          onText={(text, stage) => {
+            zone.value = text;
+            if (stage !== "settled" || timeZoneProblem(text) !== undefined) return;
+            zone.value = undefined;
+            model.change("time zone", (document) => inZone(document, text.trim()));
+          }}
+        />
+        <div class="whole">
+          <TextField
+            id="case-notes"
+            label="Notes"
+            text={notes}
+            onText={(text) => model.change("notes of the case", (document) => ({ ...document, notes: text }), "notes")}
+            lines={2}
+            longest={counts.noteCharacters}
+            problem={refusedAt(page, "case-notes")}
+          />
+        </div>
+      </div>
+      <SaveDetails page={page} />
+    </section>
+  );
+}
+
+/** Another zone shows the same instants by another clock; nothing that is dated moves. */
+function inZone(document: CaseDocument, timeZone: string): CaseDocument {
+  if (timeZone === document.timeZone) return document;
+  const start = readMoment(document.form.start, document.timeZone, "");
+  const form = start.ok ? { ...document.form, start: momentText(start.instant, timeZone) } : document.form;
+  return { ...document, timeZone, form };
+}
