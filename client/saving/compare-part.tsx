@@ -1,0 +1,105 @@
+import { useSignal } from "@preact/signals";
+import type { RegimenContent } from "../../shared/contract/case.ts";
+import { letterOf } from "../case/case-document.ts";
+import type { CasePage } from "../case/case-page.ts";
+import { SelectField } from "../controls/select-field.tsx";
+import type { Failure } from "../http/answer.ts";
+import { CurveComparison } from "../reading/curve-comparison.tsx";
+import { FailureNote } from "../shell/failure-note.tsx";
+import { DifferencesTable } from "./differences-table.tsx";
+
+interface Side {
+  readonly value: string;
+  readonly label: string;
+  readonly content: RegimenContent;
+}
+
+/** Any two revisions of the case, or what is on the page, set side by side: field by field and as curves. */
+export function ComparePart({ page }: { page: CasePage }) {
+  const saved = useSignal<readonly Side[] | undefined>(undefined);
+  const failure = useSignal<Failure | undefined>(undefined);
+  const chosen = useSignal({ before: "", after: "" });
+  const gather = async () => {
+    const gathered = await savedSides(page);
+    failure.value = "failure" in gathered ? gathered.failure : undefined;
+    if ("failure" in gathered) return;
+    saved.value = gathered.sides;
+    const sides = [...gathered.sides, ...pageSides(page)];
+    const own = pageSides(page).find(({ value }) => value === `page ${page.selected.peek()?.key}`);
+    chosen.value = { before: sides[0]?.value ?? "", after: own?.value ?? sides.at(-1)?.value ?? "" };
+  };
+  if (saved.value === undefined)
+    return (
+      <div class="compare">
+        <button type="button" class="button" onClick={gather}>
+          Compare any two revisions
+        </button>
+        {failure.value && <FailureNote failure={failure.value} />}
+      </div>
+    );
+  const sides = [...saved.value, ...pageSides(page)];
+  const find = (value: string) => sides.find((side) => side.value === value);
+  const before = find(chosen.value.before);
+  const after = find(chosen.value.after);
+  return (
+    <section class="compare" aria-labelledby="compare-title">
+      <h3 id="compare-title">Two revisions compared</h3>
+      <div class="fields">
+        <SelectField
+          id="compare-before"
+          label="From"
+          value={chosen.value.before}
+          choices={sides}
+          onChoice={(value) => {
+            chosen.value = { ...chosen.value, before: value };
+          }}
+        />
+        <SelectField
+          id="compare-after"
+          label="To"
+          value={chosen.value.after}
+          choices={sides}
+          onChoice={(value) => {
+            chosen.value = { ...chosen.value, after: value };
+          }}
+        />
+      </div>
+      <div class="button-row save-row">
+        <button type="button" class="button" onClick={gather}>
+          Look for newer revisions
+        </button>
+      </div>
+      {before && after && (
+        <>
+          <DifferencesTable before={before.content} after={after.content} names={{ before: before.label, after: after.label }} />
+          <CurveComparison before={before.content} after={after.content} />
+        </>
+      )}
+    </section>
+  );
+}
+
+type Gathered = { readonly sides: readonly Side[] } | { readonly failure: Failure };
+
+async function savedSides(page: CasePage): Promise<Gathered> {
+  const { listRevisions } = await import("../http/cases-api.ts");
+  const { case: stored, regimens } = page.stored.peek();
+  const answers = await Promise.all(
+    regimens.filter(({ latestRevisionNumber }) => latestRevisionNumber > 0).map(({ id }) => listRevisions(stored.id, id)),
+  );
+  const sides: Side[] = [];
+  for (const answer of answers) {
+    if (!answer.ok) return { failure: answer.failure };
+    for (const { id, number, content } of answer.value.revisions)
+      sides.push({ value: id, label: `${content.regimenLabel}, revision ${number}`, content });
+  }
+  return { sides };
+}
+
+function pageSides(page: CasePage): Side[] {
+  const document = page.model.document.value;
+  return document.alternatives.flatMap(({ key, label }) => {
+    const content = page.model.contents.value.get(key);
+    return content === undefined ? [] : [{ value: `page ${key}`, label: `${letterOf(document, key)} ${label}, as on this page`, content }];
+  });
+}

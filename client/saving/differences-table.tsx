@@ -1,0 +1,36 @@
+import type { RegimenContent } from "../../shared/contract/case.ts";
+import { differencesOf } from "../../shared/figures/differences.ts";
+
+interface DifferencesTableProps {
+  readonly before: RegimenContent;
+  readonly after: RegimenContent;
+  readonly names: { readonly before: string; readonly after: string };
+}
+
+/** Two contents field by field: only what differs, in words with units. */
+export function DifferencesTable({ before, after, names }: DifferencesTableProps) {
+  const differences = differencesOf(before, after);
+  if (differences.length === 0) return <p>Nothing that is computed with differs.</p>;
+  return (
+    <div class="scroll-x" role="region" aria-label="What differs" tabIndex={0}>
+      <table>
+        <thead>
+          <tr>
+            <th scope="col">What</th>
+            <th scope="col">{names.before}</th>
+            <th scope="col">{names.after}</th>
+          </tr>
+        </thead>
+        <tbody>
+          {differences.map((difference) => (
+            <tr key={difference.path}>
+              <th scope="row">{difference.label}</th>
+              <td>{difference.before || "(absent)"}</td>
+              <td>{difference.after || "(absent)"}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
