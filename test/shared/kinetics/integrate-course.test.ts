@@ -33,6 +33,8 @@ describe("on random courses, against a general ODE solver", () => {
       ),
       { runs: 300 },
     );
-    console.info(`largest difference between walk and solver, relative to the largest level: ${worst.toExponential(1)}`);
+    console.info(
+      `largest difference between walk and solver, relative to the largest level: ${worst.toExponential(1)}`,
+    );
   });
 });

@@ -5,7 +5,12 @@ import type { CourseInput } from "../../../shared/kinetics/course.ts";
 interface OdeSolver {
   relativeTolerance: number;
   absoluteTolerance: number;
-  solve(slope: (x: number, y: number[]) => number[], from: number, start: number[], to: number): { y: number[]; outcome: number };
+  solve(
+    slope: (x: number, y: number[]) => number[],
+    from: number,
+    start: number[],
+    to: number,
+  ): { y: number[]; outcome: number };
 }
 
 // The package ships its source as TypeScript, without declarations: a plain import would type-check that source.
@@ -22,10 +27,14 @@ export function integrateCourse(input: CourseInput, timesH: readonly number[]): 
   const { volumeL = Number.NaN, absorptionRatePerH: ka = 0, saltFactor, bioavailability } = input.parameters;
   const restarts = new Set([0, ...timesH]);
   for (const dose of input.doses) for (const atH of jumpsOf(dose)) restarts.add(atH);
-  for (const change of input.eliminationChanges ?? []) for (const atH of "toH" in change ? [change.fromH, change.toH] : [change.fromH]) restarts.add(atH);
+  for (const change of input.eliminationChanges ?? [])
+    for (const atH of "toH" in change ? [change.fromH, change.toH] : [change.fromH]) restarts.add(atH);
   const lastH = timesH.at(-1)!;
   const edgesH = [...restarts].filter((atH) => atH <= lastH).sort((one, other) => one - other);
-  const totalMg = input.doses.reduce((sum, dose) => sum + ("amountMg" in dose ? dose.amountMg : 0), (input.startConcentrationMgPerL ?? 0) * volumeL);
+  const totalMg = input.doses.reduce(
+    (sum, dose) => sum + ("amountMg" in dose ? dose.amountMg : 0),
+    (input.startConcentrationMgPerL ?? 0) * volumeL,
+  );
   const solver = new Solver(2);
   solver.relativeTolerance = 1e-13;
   solver.absoluteTolerance = 1e-14 * Math.max(1, totalMg);
@@ -35,7 +44,8 @@ export function integrateCourse(input: CourseInput, timesH: readonly number[]): 
   edgesH.forEach((edgeH, index) => {
     for (const dose of input.doses) {
       if (dose.kind === "bolus" && dose.atH === edgeH) bodyMg += saltFactor * dose.amountMg;
-      if (dose.kind === "absorbed" && dose.atH + dose.lagH === edgeH) depotMg += saltFactor * bioavailability * dose.amountMg;
+      if (dose.kind === "absorbed" && dose.atH + dose.lagH === edgeH)
+        depotMg += saltFactor * bioavailability * dose.amountMg;
     }
     levels.set(edgeH, bodyMg / volumeL);
     const nextH = edgesH[index + 1];
@@ -43,7 +53,12 @@ export function integrateCourse(input: CourseInput, timesH: readonly number[]): 
     const middleH = edgeH + (nextH - edgeH) / 2;
     const k = eliminationAt(input, middleH);
     const rate = saltFactor * input.doses.reduce((sum, dose) => sum + rateAt(dose, middleH), 0);
-    const end = solver.solve((_, [body, depot]) => [rate + ka * depot! - k * body!, -ka * depot!], edgeH, [bodyMg, depotMg], nextH);
+    const end = solver.solve(
+      (_, [body, depot]) => [rate + ka * depot! - k * body!, -ka * depot!],
+      edgeH,
+      [bodyMg, depotMg],
+      nextH,
+    );
     if (end.outcome !== 0) throw new Error(`the solver gave up between ${edgeH} h and ${nextH} h`);
     [bodyMg, depotMg] = [end.y[0]!, end.y[1]!];
   });
@@ -59,7 +74,8 @@ function jumpsOf(dose: Dose): number[] {
 }
 
 function rateAt(dose: Dose, atH: number): number {
-  if (dose.kind === "infusion") return dose.atH < atH && atH < dose.atH + dose.durationH ? dose.amountMg / dose.durationH : 0;
+  if (dose.kind === "infusion")
+    return dose.atH < atH && atH < dose.atH + dose.durationH ? dose.amountMg / dose.durationH : 0;
   if (dose.kind === "pump") return dose.steps.findLast((step) => step.atH < atH)?.rateMgPerH ?? 0;
   return 0;
 }

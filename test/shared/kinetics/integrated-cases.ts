@@ -15,8 +15,18 @@ const Stated = z.strictObject({
   doses: z.array(
     z.discriminatedUnion("kind", [
       z.strictObject({ kind: z.literal("bolus"), time_h: z.number(), amount_mg: z.number() }),
-      z.strictObject({ kind: z.literal("infusion"), time_h: z.number(), amount_mg: z.number(), duration_h: z.number() }),
-      z.strictObject({ kind: z.literal("absorbed"), time_h: z.number(), amount_mg: z.number(), lag_h: z.number().default(0) }),
+      z.strictObject({
+        kind: z.literal("infusion"),
+        time_h: z.number(),
+        amount_mg: z.number(),
+        duration_h: z.number(),
+      }),
+      z.strictObject({
+        kind: z.literal("absorbed"),
+        time_h: z.number(),
+        amount_mg: z.number(),
+        lag_h: z.number().default(0),
+      }),
     ]),
   ),
   times_h: z.array(z.number()),

@@ -52,14 +52,17 @@ export function randomDose(maxH: number): fc.Arbitrary<Dose> {
 
 /** A pump log that ends with 0 mg/h. */
 export function randomPump(maxH: number): fc.Arbitrary<Dose> {
-  return fc
-    .uniqueArray(hourUpTo(maxH), { minLength: 2, maxLength: 6 })
-    .chain((hours) =>
-      fc.array(fc.oneof(fc.constant(0), logarithmic(0.5, 200)), { minLength: hours.length - 1, maxLength: hours.length - 1 }).map((rates) => ({
+  return fc.uniqueArray(hourUpTo(maxH), { minLength: 2, maxLength: 6 }).chain((hours) =>
+    fc
+      .array(fc.oneof(fc.constant(0), logarithmic(0.5, 200)), {
+        minLength: hours.length - 1,
+        maxLength: hours.length - 1,
+      })
+      .map((rates) => ({
         kind: "pump" as const,
         steps: hours.sort((one, other) => one - other).map((atH, index) => ({ atH, rateMgPerH: rates[index] ?? 0 })),
       })),
-    );
+  );
 }
 
 function randomChange(maxH: number): fc.Arbitrary<Change> {
@@ -74,11 +77,14 @@ function randomChange(maxH: number): fc.Arbitrary<Change> {
 }
 
 /** Courses of up to 12 doses and 4 changes of elimination, everything overlapping everything. */
-export function randomCourse(options: { readonly changes: "none" | "any" } = { changes: "any" }): fc.Arbitrary<CourseInput> {
+export function randomCourse(
+  options: { readonly changes: "none" | "any" } = { changes: "any" },
+): fc.Arbitrary<CourseInput> {
   return fc.constantFrom(24, 48, 72, 168).chain((horizonH) =>
     fc.record({
       parameters: randomParameters,
-      eliminationChanges: options.changes === "none" ? fc.constant([]) : fc.array(randomChange(horizonH), { maxLength: 4 }),
+      eliminationChanges:
+        options.changes === "none" ? fc.constant([]) : fc.array(randomChange(horizonH), { maxLength: 4 }),
       startConcentrationMgPerL: fc.oneof(fc.constant(0), logarithmic(0.5, 20)),
       doses: fc.array(randomDose(horizonH), { minLength: 1, maxLength: 12 }),
       horizonH: fc.constant(horizonH),

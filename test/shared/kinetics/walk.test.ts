@@ -7,7 +7,13 @@ import { walk } from "../../../shared/kinetics/walk.ts";
 import { checkedBy } from "../property-run.ts";
 import { randomCourse } from "./random-courses.ts";
 
-const parameters = { volumeL: 20, eliminationRatePerH: 0.1, absorptionRatePerH: 0.8, bioavailability: 1, saltFactor: 1 };
+const parameters = {
+  volumeL: 20,
+  eliminationRatePerH: 0.1,
+  absorptionRatePerH: 0.8,
+  bioavailability: 1,
+  saltFactor: 1,
+};
 const course = (doses: CourseInput["doses"], horizonH = 24) => courseOf({ parameters, doses, horizonH });
 
 describe("walk", () => {
