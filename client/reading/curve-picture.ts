@@ -1,0 +1,53 @@
+import type { RangeMgPerL } from "../../shared/contract/dose.ts";
+import type { TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
+import type { CurvePoint } from "./curve-points.ts";
+
+/** One curve. Colours are names of tokens, so that a picture holds in the light and in the dark. */
+export interface PictureLine {
+  readonly points: readonly CurvePoint[];
+  readonly colour: string;
+  readonly dash: readonly number[];
+  readonly widthPx: number;
+  /** Written at the curve's right end; none for a line that only accompanies another. */
+  readonly letter?: string;
+}
+
+export interface PictureMark {
+  readonly kind: "peak" | "trough";
+  readonly x: number;
+  readonly y: number;
+  readonly colour: string;
+  /** The level in words, where there is room for it. */
+  readonly text?: string;
+}
+
+export type LevelScale = "linear" | "logarithmic";
+
+/** Everything on one chart, as plain data. */
+export interface CurvePicture {
+  readonly window: TimeWindow;
+  readonly scale: LevelScale;
+  readonly lines: readonly PictureLine[];
+  readonly marks: readonly PictureMark[];
+  readonly range?: RangeMgPerL;
+  /** Hours at which a line crosses the plot from top to bottom. */
+  readonly gridH: readonly number[];
+}
+
+/** A logarithmic axis shows at most this many powers of ten below the top: a level that decays for ever has no bottom. */
+const decadesShown = 4;
+
+/** Lowest and highest level of an axis that holds the lines and the range. */
+export function levelBounds({ lines, range, scale }: CurvePicture): { readonly low: number; readonly high: number } {
+  let high = range?.high ?? 0;
+  let lowestPositive = range !== undefined && range.low > 0 ? range.low : Infinity;
+  for (const { points } of lines) {
+    for (const { y } of points) {
+      if (y > high) high = y;
+      if (y > 0 && y < lowestPositive) lowestPositive = y;
+    }
+  }
+  if (!(high > 0)) high = 1;
+  if (scale === "linear") return { low: 0, high: high * 1.06 };
+  return { low: Math.max(Math.min(lowestPositive, high / 10) * 0.9, high / 10 ** decadesShown), high: high * 1.2 };
+}

@@ -1,0 +1,36 @@
+import type { Schedule } from "../../shared/contract/case.ts";
+import type { Give } from "../../shared/contract/schedule.ts";
+import { sayClock } from "../../shared/schedule/clock.ts";
+import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
+import { formatDose, formatDuration, formatHours } from "../../shared/units/format.ts";
+
+/** What a dose is called, whatever time it is moved to: "dose 3", "dose 3 of order 2", "order 1", "extra dose". */
+export function nameOfDose(dose: ScheduledDose, { orders }: Schedule): string {
+  if (dose.orderId === undefined) return "extra dose";
+  const index = orders.findIndex(({ id }) => id === dose.orderId);
+  if (orders[index]?.when.kind === "once") return orders.length === 1 ? "single dose" : `single dose of order ${index + 1}`;
+  const number = `dose ${(dose.occurrence ?? 0) + 1}`;
+  return orders.length === 1 ? number : `${number} of order ${index + 1}`;
+}
+
+/** Amount and, where there is one, duration: "500 mg over 1 h". */
+export function sayGiven(give: Give): string {
+  if (give.kind === "infusion") return `${formatDose(give.amountMg)} over ${formatDuration(give.durationH)}`;
+  if (give.kind === "bolus") return `${formatDose(give.amountMg)} as a bolus`;
+  if (give.kind === "absorbed") return `${formatDose(give.amountMg)} to be absorbed`;
+  return `pump log over ${formatHours(give.steps.at(-1)!.afterH)}`;
+}
+
+/** What became of a dose, in words. */
+export function sayStatus(dose: ScheduledDose, timeZone: string): string {
+  if (dose.status === "planned") return dose.edited ? "planned, other than the rest of its order" : "planned";
+  if (dose.status === "as-planned") return "given as planned";
+  if (dose.status === "omitted") return "omitted";
+  if (dose.status === "extra") return "extra";
+  return dose.plannedAt === undefined ? "given otherwise" : `given otherwise, planned ${sayClock(dose.plannedAt, timeZone)}`;
+}
+
+/** A dose in one line: "dose 3, 500 mg over 1 h, Mon 2 Mar 2026 08:00, planned". */
+export function sayDose(dose: ScheduledDose, schedule: Schedule, timeZone: string): string {
+  return [nameOfDose(dose, schedule), sayGiven(dose.give), sayClock(dose.at, timeZone), sayStatus(dose, timeZone)].join(", ");
+}

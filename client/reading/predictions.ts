@@ -1,0 +1,52 @@
+import type { RegimenContent } from "../../shared/contract/case.ts";
+import { DomainError } from "../../shared/errors.ts";
+import { type Prepared, prepare } from "../../shared/figures/prepared.ts";
+import { levelsAt } from "../../shared/kinetics/levels.ts";
+import { givenDiffers } from "../../shared/schedule/course-of-content.ts";
+import { givenDoses } from "../../shared/schedule/doses-given.ts";
+import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
+
+/** One alternative ready to be read, or why it cannot be computed. */
+export type Prediction =
+  | {
+      readonly ok: true;
+      /** What was given, with the plan going on. */
+      readonly given: Prepared;
+      /** The plan alone, where something was given otherwise. */
+      readonly planned?: Prepared;
+      /** Every dose in the order of time, omitted ones too. */
+      readonly doses: readonly ScheduledDose[];
+    }
+  | { readonly ok: false; readonly problem: string };
+
+const known = new WeakMap<RegimenContent, Prediction>();
+
+/** The prediction of a content. A content keeps its identity while nothing in it changes, so each is computed once. */
+export function predictionOf(content: RegimenContent): Prediction {
+  const found = known.get(content);
+  if (found !== undefined) return found;
+  const made = predict(content);
+  known.set(content, made);
+  return made;
+}
+
+/** Level of a prepared alternative at one hour, in mg/L; at a bolus the value just after it. */
+export function levelAt({ made }: Prepared, atH: number): number {
+  return levelsAt(made, [Math.min(Math.max(0, atH), made.horizonH)])[0]!;
+}
+
+/** A refusal as a sentence for the page: what it is about, what is allowed, what came. */
+export function sayRefusal({ field, allowed, value }: DomainError): string {
+  const about = field.split("/").map((part) => (/^\d+$/.test(part) ? String(Number(part) + 1) : part));
+  return `${about.join(" ")} must be ${allowed}, got ${String(value)}`;
+}
+
+function predict(content: RegimenContent): Prediction {
+  try {
+    const planned = givenDiffers(content) && { planned: prepare(content, "planned") };
+    return { ok: true, given: prepare(content, "given"), ...planned, doses: givenDoses(content) };
+  } catch (error) {
+    if (error instanceof DomainError) return { ok: false, problem: sayRefusal(error) };
+    throw error;
+  }
+}
