@@ -8,9 +8,10 @@ import { noSuchAddress, problemHandler } from "./problems.ts";
 import { requestIds } from "./request-id.ts";
 import { requestLimit } from "./request-limit.ts";
 import { requestLog } from "./request-log.ts";
-import type { SecondOpinionOf } from "./revisions/judge-content.ts";
+import type { Appraise } from "./revisions/judge-content.ts";
 import { caseFileRoutes } from "./routes/case-file-routes.ts";
 import { caseRoutes } from "./routes/case-routes.ts";
+import { docsRoutes } from "./routes/docs-routes.ts";
 import { healthRoutes } from "./routes/health-routes.ts";
 import { predictionRoutes } from "./routes/prediction-routes.ts";
 import { regimenRoutes } from "./routes/regimen-routes.ts";
@@ -32,8 +33,10 @@ export interface AppNeeds {
   readonly ids: Ids;
   readonly logger: Logger;
   readonly writeSheet: WriteSheet;
-  readonly secondOpinionOf: SecondOpinionOf;
+  readonly appraise: Appraise;
   readonly settings: Pick<Settings, "host" | "publicNames" | "transport" | "requestsPerMinute">;
+  /** Called when nothing more can be written safely. */
+  readonly giveUp: (why: string) => void;
   /** Where the built page is; without it only the API answers. */
   readonly clientFolder?: string;
 }
@@ -51,7 +54,7 @@ export function createApp(needs: AppNeeds): Express {
   app.use("/api", requestLimit(settings.requestsPerMinute), sameOriginWrites, ...apiRouters(needs));
   if (clientFolder !== undefined) app.use(clientFiles(clientFolder));
   app.use(noSuchAddress);
-  app.use(problemHandler(logger));
+  app.use(problemHandler(logger, needs.giveUp));
   return app;
 }
 
@@ -63,6 +66,7 @@ export function apiRouters(needs: AppNeeds): Router[] {
     caseFileRoutes(needs),
     regimenRoutes(needs),
     revisionRoutes(needs),
+    docsRoutes(),
     healthRoutes({ stores: needs.stores, nowMs: () => Date.parse(needs.clock()) }),
   ];
 }

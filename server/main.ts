@@ -6,11 +6,10 @@ import { projectFolder } from "../db/project-folder.ts";
 import { sqliteStores } from "../db/stores.ts";
 import { createApp } from "./app.ts";
 import { insertDemoCase } from "./demo/demo-case.ts";
+import { jobRunner } from "./jobs/job-runner.ts";
 import { makeLogger } from "./logger.ts";
-import { secondOpinionOfContent } from "./revisions/second-opinion-of.ts";
 import { serve } from "./serve.ts";
 import { readSettings } from "./settings.ts";
-import { writeSheet } from "./sheet/sheet.ts";
 import { sayWhyNotStarted } from "./start-failure.ts";
 import { silentDescription } from "./silent-description.ts";
 
@@ -30,8 +29,8 @@ async function start(): Promise<void> {
   const clock = () => new Date().toISOString();
   const db = openDatabase(settings.database);
   const stores = sqliteStores(db);
-  const secondOpinionOf = async (content: Parameters<typeof secondOpinionOfContent>[0]) => secondOpinionOfContent(content);
-  await insertDemoCase(stores, secondOpinionOf);
+  const jobs = jobRunner();
+  await insertDemoCase(stores, jobs.appraise);
   await stores.answers.forgetBefore(new Date(Date.now() - rememberAnswersMs).toISOString());
   const built = join(projectFolder(), ".build", "client");
   const app = createApp({
@@ -39,9 +38,10 @@ async function start(): Promise<void> {
     clock,
     ids: randomUUID,
     logger,
-    writeSheet,
-    secondOpinionOf,
+    writeSheet: jobs.writeSheet,
+    appraise: jobs.appraise,
     settings,
+    giveUp: (why) => void stop(why, 1),
     ...(existsSync(join(built, "index.html")) && { clientFolder: built }),
   });
   const serving = await serve(app, settings);
@@ -52,6 +52,7 @@ async function start(): Promise<void> {
     stopping = true;
     logger.info({ why }, "stopping");
     await serving.stop();
+    await jobs.stop();
     closeDatabase(db);
     process.exitCode = exitCode;
   };

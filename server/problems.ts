@@ -2,14 +2,15 @@ import type { ErrorRequestHandler, Request, RequestHandler } from "express";
 import type { Logger } from "pino";
 import type { AlteredRowError, KeyReusedError, NotFoundError, StaleError, TooManyAlternativesError } from "../db/store-errors.ts";
 import type { Problem } from "../shared/contract/problem.ts";
-import type { DomainError } from "../shared/errors.ts";
+import { DomainError } from "../shared/errors.ts";
 import { drain } from "./drain.ts";
 import { requestIdOf } from "./request-id.ts";
 import { RequestError, type RequestErrorCode } from "./request-errors.ts";
 import { silentDescription } from "./silent-description.ts";
 
 type StoreErrorCode = (NotFoundError | StaleError | TooManyAlternativesError | KeyReusedError | AlteredRowError)["code"];
-export type ErrorCode = RequestErrorCode | StoreErrorCode | DomainError["code"] | "internal";
+type DriverErrorCode = "storage-full" | "storage-busy" | "storage-failed";
+export type ErrorCode = RequestErrorCode | StoreErrorCode | DriverErrorCode | DomainError["code"] | "internal";
 
 /** Every way a request can fail: a new error code does not compile until it has its place here. */
 export const problemTable: Readonly<Record<ErrorCode, { readonly status: number; readonly title: string }>> = {
@@ -35,7 +36,11 @@ export const problemTable: Readonly<Record<ErrorCode, { readonly status: number;
   "key-reused": { status: 422, title: "The Idempotency-Key was used for another request" },
   "too-many-requests": { status: 429, title: "Too many requests" },
   altered: { status: 500, title: "A stored record is not as it was stored" },
+  "too-long": { status: 503, title: "The calculation takes too long" },
   "not-ready": { status: 503, title: "The server cannot answer now" },
+  "storage-full": { status: 507, title: "The disk is full: nothing was saved" },
+  "storage-busy": { status: 503, title: "Another program holds the database: nothing was saved" },
+  "storage-failed": { status: 500, title: "The disk failed: nothing was saved" },
   internal: { status: 500, title: "Something went wrong in the server" },
 };
 
@@ -44,12 +49,18 @@ export const noSuchAddress: RequestHandler = () => {
   throw new RequestError("no-route", "check the address; the routes are listed at /api/docs");
 };
 
-/** Turns every error into a problem document (RFC 9457). What is not known is a 500 without detail. */
-export function problemHandler(logger: Logger): ErrorRequestHandler {
+/**
+ * Turns every error into a problem document (RFC 9457). What is not known is a 500 without detail.
+ *
+ * @param giveUp called when the disk failed: after a failed sync a retry may claim success without the data
+ *               being there, so a server that goes on writing would lose what it acknowledges
+ */
+export function problemHandler(logger: Logger, giveUp: (why: string) => void): ErrorRequestHandler {
   return async (error: unknown, request, response, next) => {
     const { code, detail, errors, headers } = described(error);
     const { status, title } = problemTable[code];
     if (status >= 500) logger.error({ requestId: requestIdOf(request), code, error: silentDescription(error) }, "request failed");
+    if (code === "storage-failed") giveUp("the disk failed");
     if (response.headersSent) return next(error);
     // Answering before the body was read resets connections that are kept alive.
     await drain(request, response);
@@ -74,15 +85,20 @@ interface Described {
 
 function described(error: unknown): Described {
   const code = codeOf(error);
-  if (code === "internal") return { code, errors: [], headers: {} };
-  const { errors, headers } = error instanceof RequestError ? error : { errors: [], headers: {} };
-  return { code, detail: detailOf(code, error), errors, headers };
+  if (code === "internal" || code === "storage-failed") return { code, errors: [], headers: {} };
+  const detail = detailOf(code, error);
+  if (error instanceof RequestError) return { code, detail, errors: error.errors, headers: error.headers };
+  const errors = error instanceof DomainError ? [{ pointer: `#/${error.field}`, detail: error.message }] : [];
+  return { code, detail, errors, headers: {} };
 }
 
 function codeOf(error: unknown): ErrorCode {
   if (!(error instanceof Error)) return "internal";
   const own = "code" in error ? String(error.code) : "";
   if (Object.hasOwn(problemTable, own)) return own as ErrorCode;
+  if (own === "SQLITE_FULL") return "storage-full";
+  if (own.startsWith("SQLITE_BUSY")) return "storage-busy";
+  if (own.startsWith("SQLITE_IOERR") || own.startsWith("SQLITE_CORRUPT")) return "storage-failed";
   return "type" in error || "status" in error ? parserCode(error) : "internal";
 }
 
@@ -107,6 +123,8 @@ function detailOf(code: ErrorCode, error: unknown): string {
   const own = error instanceof Error && "code" in error && String(error.code) === code;
   if (own) return (error as Error).message;
   if (code === "malformed-json") return "the body ends early or has a character that JSON does not allow there";
+  if (code === "storage-full") return "what is there can still be read; make room on the disk and try again";
+  if (code === "storage-busy") return "try again with the same Idempotency-Key";
   if (code === "too-large") return "send less at once; the limits are listed at /api/docs";
   if (code === "not-json") return "send UTF-8 without compression";
   return "the address has an escape that is not complete or not UTF-8";

@@ -22,6 +22,7 @@ export type RequestErrorCode =
   | "no-route"
   | "wrong-method"
   | "too-many-requests"
+  | "too-long"
   | "not-ready";
 
 interface More {

@@ -5,7 +5,19 @@ export interface SilentDescription {
   readonly frames: readonly string[];
 }
 
+/** An error of another thread, of which only this much came over. */
+export class DescribedError extends Error {
+  readonly description: SilentDescription;
+
+  constructor(message: string, description: SilentDescription) {
+    super(message);
+    this.name = "DescribedError";
+    this.description = description;
+  }
+}
+
 export function silentDescription(error: unknown): SilentDescription {
+  if (error instanceof DescribedError) return error.description;
   if (!(error instanceof Error)) return { name: typeof error, frames: [] };
   const code = "code" in error && /^[A-Za-z0-9_-]{1,40}$/.test(String(error.code)) ? { code: String(error.code) } : {};
   return { name: error.constructor.name, ...code, frames: framesOf(error) };

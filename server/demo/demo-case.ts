@@ -1,7 +1,7 @@
 import type { Stores } from "../../db/stores.ts";
 import { sealOf } from "../../db/seal.ts";
 import { Case, RegimenContent, RegimenId, RevisionId } from "../../shared/contract/case.ts";
-import { judgeContent, type SecondOpinionOf } from "../revisions/judge-content.ts";
+import { judgeContent, type Appraise } from "../revisions/judge-content.ts";
 import { demoCase, demoContent, demoRevisions } from "./demo-content.ts";
 
 /**
@@ -9,7 +9,7 @@ import { demoCase, demoContent, demoRevisions } from "./demo-content.ts";
  * somebody archives it. Ids and idempotency keys are fixed, so a start that was cut short in the middle is
  * completed by the next one and nothing is put in twice.
  */
-export async function insertDemoCase(stores: Stores, secondOpinionOf: SecondOpinionOf): Promise<void> {
+export async function insertDemoCase(stores: Stores, appraise: Appraise): Promise<void> {
   if (await stores.milestones.isReached("demo-case")) return;
   const [{ createdAt }] = demoRevisions as [(typeof demoRevisions)[number]];
   const made = Case.parse({ ...demoCase, id: fixedId(1), version: 1, archived: false, demo: true, createdAt, changedAt: createdAt });
@@ -21,7 +21,7 @@ export async function insertDemoCase(stores: Stores, secondOpinionOf: SecondOpin
   }
   for (const [index, { label, schedule, ...rest }] of demoRevisions.entries()) {
     const content = RegimenContent.parse(demoContent(label, schedule));
-    const secondOpinion = await judgeContent(content, "#/demo", secondOpinionOf);
+    const secondOpinion = await judgeContent(content, "#/demo", appraise);
     const regimenId = RegimenId.parse(fixedId(10 + labels.indexOf(label)));
     const before = demoRevisions.slice(0, index).filter((revision) => revision.label === label).length;
     const revision = { ...rest, id: RevisionId.parse(fixedId(20 + index)), caseId: made.id, regimenId, preparedBy: "Ebbline (invented)", content, secondOpinion };

@@ -10,17 +10,21 @@ import { intentionOf } from "../intention.ts";
 import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { readId } from "../read.ts";
-import { judgeContent, type SecondOpinionOf } from "../revisions/judge-content.ts";
+import { RequestError } from "../request-errors.ts";
+import { judgeContent, type Appraise } from "../revisions/judge-content.ts";
+
+/** For all the second opinions of one file. */
+const mostMs = 60_000;
 
 interface Needs {
   readonly stores: Pick<Stores, "cases" | "regimens" | "revisions" | "wholeCases" | "answers">;
   readonly clock: Clock;
   readonly ids: Ids;
-  readonly secondOpinionOf: SecondOpinionOf;
+  readonly appraise: Appraise;
 }
 
 /** A case out as a file and in again as a new case. */
-export function caseFileRoutes({ stores, clock, ids, secondOpinionOf }: Needs): Router {
+export function caseFileRoutes({ stores, clock, ids, appraise }: Needs): Router {
   const router = Router();
   router
     .route("/cases/:caseId/file")
@@ -49,12 +53,14 @@ export function caseFileRoutes({ stores, clock, ids, secondOpinionOf }: Needs): 
   async function newCase(file: CaseFile): Promise<WholeCase> {
     const now = clock();
     const made = Case.parse({ ...file.case, id: ids(), version: 1, archived: false, demo: false, createdAt: now, changedAt: now });
+    const startedAtMs = performance.now();
     const regimens: WholeCase["regimens"][number][] = [];
     for (const [index, { label, retired, revisions: inFile }] of file.regimens.entries()) {
       const regimen = { id: RegimenId.parse(ids()), caseId: made.id, label, retired, createdAt: inFile[0]?.createdAt ?? now };
       const revisions: Revision[] = [];
       for (const [number, revision] of inFile.entries()) {
-        const secondOpinion = await judgeContent(revision.content, `#/regimens/${index}/revisions/${number}/content`, secondOpinionOf);
+        if (performance.now() - startedAtMs > mostMs) throw new RequestError("too-long", "the file holds more than can be computed again in one go");
+        const secondOpinion = await judgeContent(revision.content, `#/regimens/${index}/revisions/${number}/content`, appraise);
         revisions.push({ ...revision, id: RevisionId.parse(ids()), caseId: made.id, regimenId: regimen.id, secondOpinion });
       }
       regimens.push({ regimen, revisions });

@@ -15,7 +15,7 @@ export function predictionRoutes(): Router {
     .route("/predictions")
     .post(jsonBody("usual"), (request, response) => {
       const asked = read(PredictionRequest, request.body);
-      const answer = inField("#", "parameters", () => ({ ...predict(asked), cautions: cautionsForPrediction(asked) }));
+      const answer = inField(() => ({ ...predict(asked), cautions: cautionsForPrediction(asked) }));
       refuseNaN(answer.concentrationsMgPerL);
       response.json(answer);
     })
@@ -24,7 +24,7 @@ export function predictionRoutes(): Router {
     .route("/steady-states")
     .post(jsonBody("usual"), (request, response) => {
       const asked = read(SteadyStateRequest, request.body);
-      const answer = inField("#", "parameters", () => ({ ...describeSteadyState(asked), cautions: cautionsForSteadyState(asked) }));
+      const answer = inField(() => ({ ...describeSteadyState(asked), cautions: cautionsForSteadyState(asked) }));
       refuseNaN(answer.concentrationsMgPerL ?? []);
       response.json(answer);
     })

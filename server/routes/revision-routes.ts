@@ -10,7 +10,7 @@ import { intentionOf } from "../intention.ts";
 import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { read, readId } from "../read.ts";
-import { judgeContent, type SecondOpinionOf } from "../revisions/judge-content.ts";
+import { judgeContent, type Appraise } from "../revisions/judge-content.ts";
 
 export const SheetQuery = z.strictObject({ paper: z.enum(["A4", "Letter"], { error: 'must be "A4" or "Letter"' }).default("A4") });
 
@@ -19,10 +19,10 @@ interface Needs {
   readonly clock: Clock;
   readonly ids: Ids;
   readonly writeSheet: WriteSheet;
-  readonly secondOpinionOf: SecondOpinionOf;
+  readonly appraise: Appraise;
 }
 
-export function revisionRoutes({ stores: { regimens, revisions, answers }, clock, ids, writeSheet, secondOpinionOf }: Needs): Router {
+export function revisionRoutes({ stores: { regimens, revisions, answers }, clock, ids, writeSheet, appraise }: Needs): Router {
   const router = Router();
   const regimenAt = async (params: { caseId: string; regimenId: string }) => {
     const found = await regimens.find(readId(CaseId, params.caseId, "case"), readId(RegimenId, params.regimenId, "regimen"));
@@ -71,7 +71,7 @@ export function revisionRoutes({ stores: { regimens, revisions, answers }, clock
     const { basedOnNumber, ...draft } = read(RevisionDraft, body);
     // Said before anything is computed, and made sure of by the store when it writes.
     if (basedOnNumber !== latestRevisionNumber) throw new StaleError("regimen", basedOnNumber, latestRevisionNumber);
-    const secondOpinion = await judgeContent(draft.content, "#/content", secondOpinionOf);
+    const secondOpinion = await judgeContent(draft.content, "#/content", appraise);
     return revisions.add(intention, basedOnNumber, { ...draft, id: RevisionId.parse(ids()), caseId, regimenId, createdAt: clock(), secondOpinion });
   }
 }
