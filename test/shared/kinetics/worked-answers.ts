@@ -60,15 +60,15 @@ function amountsAfter(given: Given, counts: readonly number[], inTheEnd: string)
   return { ...named, after_n_mg: after, [inTheEnd]: cycle(body, [bolus(doseMg)], 1).exposure.peak.mgPerL };
 }
 
-/** Interval and dose for a peak and a trough at steady state, with infusions; the loading dose from the printed whole dose. */
-function regimenFromTargets(given: Given, printedDoseMg: number): Answers {
+/** Interval and dose for a peak and a trough at steady state, with infusions; the loading dose that peaks there at once. */
+function regimenFromTargets(given: Given): Answers {
   const body = { volumeL: given.number("V_L"), eliminationRatePerH: given.number("k_per_h") };
   const [peak, trough, durationH] = [given.number("Cmax_mg_L"), given.number("Cmin_mg_L"), given.number("T_h")];
   const ofOneMg = cycle(body, [infusion(1, durationH)], given.number("tau_chosen_h"));
   return {
     tau_h: durationH + hoursUntil("below", trough, body, [], { startConcentrationMgPerL: peak }),
     dose_mg: peak / ofOneMg.exposure.peak.mgPerL,
-    loading_dose_mg: (printedDoseMg * ofOneMg.exposure.peak.mgPerL) / level(body, [infusion(1, durationH)], durationH),
+    loading_dose_mg: peak / level(body, [infusion(1, durationH)], durationH),
   };
 }
 
@@ -247,8 +247,8 @@ export const engineAnswers: Readonly<Record<string, (given: Given) => Answers>> 
       V_L: courseOf(inputOf(body, [], 1)).kinetics.volumeL,
     };
   },
-  "INT-02": (given) => regimenFromTargets(given, 172),
-  "INT-03": (given) => regimenFromTargets(given, 112),
+  "INT-02": regimenFromTargets,
+  "INT-03": regimenFromTargets,
   "INT-04": (given) => {
     const body = { volumeL: given.number("V_L"), eliminationRatePerH: given.number("k_per_h") };
     return { dose_mg: given.number("Cmax_mg_L") / cycle(body, [bolus(1)], given.number("tau_h")).exposure.peak.mgPerL };
