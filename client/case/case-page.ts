@@ -73,7 +73,7 @@ export function createCasePage(whole: WholeCase, unsaved?: UnsavedWork): CasePag
       () =>
         detailsChanged.value ||
         Object.keys(drafts.all.value).length > 0 ||
-        !same(model.document.value.alternatives, opened.value.alternatives),
+        !same(unkeyed(model.document.value), unkeyed(opened.value)),
     ),
   };
 }
@@ -92,13 +92,19 @@ export function judge(content: RegimenContent | undefined): Judged {
     return { cautions: cautionsForContent(content) };
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;
-    const detail = `must be ${error.allowed}, got ${String(error.value)}`;
+    const got = error.value === undefined ? "" : `, got ${String(error.value)}`;
+    const detail = `must be ${error.allowed}${got}`;
     return { cautions: [standingCaution], problem: { field: error.field, detail } };
   }
 }
 
 function selectedIn({ alternatives }: CaseDocument, key: string | undefined): Alternative | undefined {
   return alternatives.find((each) => each.key === key) ?? alternatives[0];
+}
+
+/** A new alternative keeps its key on the page when the server gives it an id. */
+function unkeyed({ alternatives }: CaseDocument): Omit<Alternative, "key">[] {
+  return alternatives.map(({ key: _, ...rest }) => rest);
 }
 
 /** The form is compared by what it says once it says something; until then by its texts. */

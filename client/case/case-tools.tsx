@@ -17,6 +17,6 @@ export function CaseTools({ page, kept }: { page: CasePage; kept: boolean }) {
 }
 
 function sayKept(unsaved: boolean, kept: boolean): string {
-  if (!unsaved) return "Everything is saved";
-  return kept ? "Not saved; kept in this browser" : "Not saved, and this browser keeps nothing: save before you leave";
+  if (!unsaved) return "All saved";
+  return kept ? "Unsaved; kept in this browser" : "Not saved, and this browser keeps nothing: save before you leave";
 }

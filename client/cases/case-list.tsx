@@ -29,8 +29,8 @@ export function CaseList({ cases, sought, onMove }: CaseListProps) {
             {each.notes && <p class="case-notes">{firstLine(each.notes)}</p>}
           </div>
           <div class="button-row">
-            <a class="button" href={`/api/cases/${each.id}/file`} download aria-label={`Download ${each.label} as JSON`}>
-              JSON file
+            <a class="button" href={`/api/cases/${each.id}/file`} download>
+              JSON file<span class="unseen"> of {each.label}</span>
             </a>
             <button type="button" class="button" onClick={() => onMove(each)}>
               {each.archived ? "Bring back" : "Archive"}

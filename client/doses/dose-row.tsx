@@ -31,7 +31,7 @@ export function DoseRow({ dose, orders, note, timeZone, onEdit, children }: Dose
         <th scope="row">{sayClock(dose.plannedAt ?? dose.at, timeZone)}</th>
         <td>{formatHours(dose.plannedAtH ?? dose.atH)}</td>
         <td>
-          {name}
+          <span class="dose-name">{name}</span>
           {dose.edited && <span class="soft"> (planned otherwise)</span>}
         </td>
         <td>{extra ? <span class="soft">not planned</span> : sayGive(dose.plannedGive ?? dose.give)}</td>
@@ -41,7 +41,7 @@ export function DoseRow({ dose, orders, note, timeZone, onEdit, children }: Dose
         </td>
         <td>
           <button type="button" class="button" id={doseButtonId(dose.key)} onClick={onEdit}>
-            Change or record<span class="unseen"> {name}, {sayClock(dose.plannedAt ?? dose.at, timeZone)}</span>
+            Record or change<span class="unseen"> {name}, {sayClock(dose.plannedAt ?? dose.at, timeZone)}</span>
           </button>
         </td>
       </tr>

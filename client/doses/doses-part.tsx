@@ -103,7 +103,7 @@ export function DosesPart({ page }: { page: CasePage }) {
       <p class="soft">A dose without a record counts as given as planned.</p>
       <LostRecords page={page} alternative={selected} lost={lost} />
       {doses.length > 0 && (
-        <div class="scroll-x" role="region" aria-labelledby="doses-title" tabIndex={0}>
+        <div class="scroll-x" role="region" aria-label={`Table of the doses of alternative ${letter}`} tabIndex={0}>
           <table class="doses">
             <thead>
               <tr>

@@ -1,6 +1,7 @@
 import type { Order } from "../../shared/contract/schedule.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
+import { same } from "../case/same.ts";
 import { sayGive } from "../orders/say-order.ts";
 
 /** What a dose is called: "order 2, dose 5". */
@@ -17,6 +18,6 @@ export function sayOutcome(dose: ScheduledDose, timeZone: string): string {
   if (dose.status === "omitted") return "omitted";
   if (dose.status === "extra") return "extra dose, not planned";
   const moved = dose.plannedAt !== undefined && Date.parse(dose.plannedAt) !== Date.parse(dose.at);
-  const parts = [moved && sayClock(dose.at, timeZone), dose.give !== dose.plannedGive && sayGive(dose.give)];
+  const parts = [moved && sayClock(dose.at, timeZone), !same(dose.give, dose.plannedGive) && sayGive(dose.give)];
   return `given otherwise: ${parts.filter(Boolean).join(", ")}`;
 }

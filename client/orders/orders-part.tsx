@@ -1,4 +1,4 @@
-import { counts } from "../../shared/contract/limits.ts";
+import { type LimitName, counts, limits } from "../../shared/contract/limits.ts";
 import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { newId } from "../case/new-id.ts";
@@ -130,8 +130,10 @@ export function OrdersPart({ page }: { page: CasePage }) {
   );
 }
 
-/** "schedule/orders/0/when/from" -> "order 1, when, from". */
+/** "schedule/orders/0/when/from" -> "order 1, when, from"; a quantity by its name. */
 function sayPath(field: string): string {
+  const last = field.split("/").at(-1) ?? "";
+  if (Object.hasOwn(limits, last)) return limits[last as LimitName].label.toLowerCase();
   return field
     .replace(/^schedule\//, "")
     .replace(/orders\/(\d+)/, (_, index: string) => `order ${Number(index) + 1}`)

@@ -126,7 +126,7 @@ function problemsOf(page: CasePage, reason: string, preparedBy: string): Record<
   if (label.trim() === "") problems["label"] = "Label of the case is empty";
   if (selected?.label.trim() === "") problems["regimenLabel"] = "Name of the alternative is empty";
   if (page.selectedContent.value === undefined) problems["setting"] = "Kinetics and plan are not complete: see “Who and what drug”";
-  if (problem !== undefined) problems["schedule"] = `The alternative cannot be computed: ${problem.field} ${problem.detail}`;
+  if (problem !== undefined) problems["schedule"] = "The alternative cannot be computed: see what stands with its orders";
   const reasons = (selected?.cautionReasons ?? []).filter((each) => each.reason.trim().length >= 3);
   const open = unanswered(cautions, reasons);
   stopsOf(cautions).forEach((stop, index) => {

@@ -1,4 +1,4 @@
-import { type DatedEliminationChange } from "../../shared/contract/setting.ts";
+import type { DatedEliminationChange } from "../../shared/contract/setting.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { newId } from "../case/new-id.ts";
 import { refusedAt } from "../saving/refused.ts";
