@@ -5,8 +5,11 @@ import { type Walk, advance, stretchAt } from "./walk.ts";
 /** Points between two exact values on a uniform grid: 512 multiply-adds stay below 2e-13 relative. */
 const pointsPerAnchor = 512;
 
-/** Grid times within this of an event count as at it, so that 82 x 0.1 h meets a dose at 8.2 h. */
-const gridSlackH = 1e-9;
+/**
+ * Grid times this much before an event, relative to its hour, count as at it: n x everyH rounds twice and
+ * an hour made from clock times once, and 3 x 0.1 h must meet a dose at 0.3 h either way.
+ */
+const gridSlack = 8 * Number.EPSILON;
 
 /**
  * Levels at given times.
@@ -40,12 +43,12 @@ export function levelsAt(made: Walk, timesH: ArrayLike<number>): Float64Array {
  */
 export function levelsEvery(made: Walk, everyH: number): Float64Array {
   if (!(everyH > 0)) throw new DomainError("everyH", everyH, "greater than 0");
-  const points = Math.floor((made.horizonH + gridSlackH) / everyH) + 1;
+  const points = pointsUpTo(made.horizonH, everyH);
   const levels = new Float64Array(points);
   let next = 0;
   for (let index = 0; index < made.count; index++) {
     const last = index === made.count - 1;
-    const end = last ? points : Math.min(points, Math.ceil((made.untilH[index]! - gridSlackH) / everyH));
+    const end = last ? points : Math.min(points, Math.ceil((made.untilH[index]! * (1 - gridSlack)) / everyH));
     while (next < end) {
       const block = Math.min(end, next + pointsPerAnchor);
       fillBlock(made, index, everyH, levels, next, block);
@@ -57,7 +60,11 @@ export function levelsEvery(made: Walk, everyH: number): Float64Array {
 
 /** The grid that `levelsEvery` answers on. */
 export function gridTimesH(horizonH: number, everyH: number): Float64Array {
-  return Float64Array.from({ length: Math.floor((horizonH + gridSlackH) / everyH) + 1 }, (_, point) => point * everyH);
+  return Float64Array.from({ length: pointsUpTo(horizonH, everyH) }, (_, point) => point * everyH);
+}
+
+function pointsUpTo(horizonH: number, everyH: number): number {
+  return Math.floor((horizonH * (1 + gridSlack)) / everyH) + 1;
 }
 
 function fillBlock(made: Walk, index: number, everyH: number, levels: Float64Array, begin: number, end: number): void {

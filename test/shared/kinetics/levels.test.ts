@@ -40,3 +40,37 @@ describe("levelsEvery", () => {
     }
   });
 });
+
+describe("the grid and its events", () => {
+  test("meet at 0.3 h, which 3 x 0.1 misses upwards, and at 2.3 h, which 23 x 0.1 hits", () => {
+    for (const [atH, point] of [
+      [0.3, 3],
+      [2.3, 23],
+      [8.2, 82],
+      [1.7, 17],
+      [4.35, 261],
+    ] as const) {
+      const everyH = atH === 4.35 ? 1 / 60 : 0.1;
+      const made = walk(courseOf({ parameters, doses: [{ kind: "bolus", atH, amountMg: 100 }], horizonH: 24 }));
+      const levels = levelsEvery(made, everyH);
+      expect(levels[point - 1], `just before ${atH} h`).toBe(0);
+      expect(levels[point], `at ${atH} h`).toBeCloseTo(100 / parameters.volumeL, 12);
+    }
+  });
+
+  test("has its last point at the end: 24 h by 0.1 h is 241 points, two years by minutes 1,054,081", () => {
+    expect(gridTimesH(24, 0.1).length).toBe(241);
+    expect(gridTimesH(17_568, 1 / 60).length).toBe(1_054_081);
+    expect(gridTimesH(10, 3).length).toBe(4);
+  });
+
+  test("refuses times out of order, outside the course or not a number, and a step that is not above 0", () => {
+    const made = walk(courseOf({ parameters, doses: [], horizonH: 24 }));
+    expect(() => levelsAt(made, [1, 0.5])).toThrow("timesH/1 must be from 1 to 24, in ascending order, got 0.5");
+    expect(() => levelsAt(made, [25])).toThrow("timesH/0");
+    expect(() => levelsAt(made, [-1])).toThrow("timesH/0");
+    expect(() => levelsAt(made, [Number.NaN])).toThrow("timesH/0");
+    for (const everyH of [0, -1, Number.NaN])
+      expect(() => levelsEvery(made, everyH)).toThrow("everyH must be greater than 0");
+  });
+});
