@@ -1,4 +1,5 @@
 import { CsvError, parse } from "csv-parse/browser/esm/sync";
+import { guarded } from "./guarded.ts";
 
 export type CsvTable =
   | { readonly ok: true; readonly rows: readonly { readonly line: number; readonly cells: readonly string[] }[] }
@@ -43,5 +44,5 @@ function delimiterOf(text: string): string {
 }
 
 function withoutGuard(cell: string): string {
-  return /^'[=+\-@\t\r\uff1d\uff0b\uff0d\uff20]/.test(cell) ? cell.slice(1) : cell;
+  return guarded.test(cell) ? cell.slice(1) : cell;
 }

@@ -10,9 +10,19 @@ module.exports = {
       from: { path: inside("shared") },
       to: { path: "^(client|db|server|test)/" },
     },
-    { name: "db-knows-only-shared", severity: "error", from: { path: inside("db") }, to: { path: "^(client|server|test)/" } },
+    {
+      name: "db-knows-only-shared",
+      severity: "error",
+      from: { path: inside("db") },
+      to: { path: "^(client|server|test)/" },
+    },
     { name: "server-not-client", severity: "error", from: { path: inside("server") }, to: { path: "^(client|test)/" } },
-    { name: "client-knows-only-shared", severity: "error", from: { path: inside("client") }, to: { path: "^(db|server|test)/" } },
+    {
+      name: "client-knows-only-shared",
+      severity: "error",
+      from: { path: inside("client") },
+      to: { path: "^(db|server|test)/" },
+    },
     {
       name: "shared-is-pure",
       comment: "No input, output, clock or randomness: it runs in a page, a server, a worker and a test.",
@@ -27,7 +37,12 @@ module.exports = {
       from: { path: "^shared/kinetics/" },
       to: { path: "^shared/contract/", dependencyTypesNot: ["type-only"] },
     },
-    { name: "no-cycles", severity: "error", from: {}, to: { circular: true, viaOnly: { dependencyTypesNot: ["type-only"] } } },
+    {
+      name: "no-cycles",
+      severity: "error",
+      from: {},
+      to: { circular: true, viaOnly: { dependencyTypesNot: ["type-only"] } },
+    },
     {
       name: "no-tools-in-the-product",
       severity: "error",
@@ -41,6 +56,9 @@ module.exports = {
     exclude: { path: "(^|/)\\.build/" },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: "client/tsconfig.json" },
-    enhancedResolveOptions: { exportsFields: ["exports"], conditionNames: ["import", "require", "node", "default", "types"] },
+    enhancedResolveOptions: {
+      exportsFields: ["exports"],
+      conditionNames: ["import", "require", "node", "default", "types"],
+    },
   },
 };
