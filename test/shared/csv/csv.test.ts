@@ -23,7 +23,9 @@ describe("writeCsv", () => {
 describe("readCsv", () => {
   test("gives back every text that was written", () => {
     const any = fc.oneof(fc.string({ minLength: 1 }), fc.stringMatching(/^['=+@-]{1,4}[a-z]$/));
-    const text = any.filter((value) => value.trim() === value && !/[\u0000\ufffd]/.test(value));
+    const text = any.filter(
+      (value) => value.trim() === value && !value.includes("\u0000") && !value.includes("\ufffd"),
+    );
     fc.assert(
       fc.property(fc.array(fc.tuple(text, text), { minLength: 1, maxLength: 8 }), (rows) => {
         const table = readCsv(writeCsv(["one", "two"], rows));

@@ -137,14 +137,14 @@ describe("workedArithmetic", () => {
   test("shows peak and trough of a settled cycle as the textbook does", () => {
     // 500 mg over 1 h every 8 h, CL 5 L/h, k 0.125 per h: R/CL (1 - e^(-k T)) / (1 - e^(-k P)), then e^(-k (P - T)). By hand.
     const steady = workedArithmetic(inventedContent())[1]!.steps;
-    const valueOf = (title: string) => steps(title).value;
+    const valueIn = (title: string) => steps(title).value;
     const steps = (title: string) => steady.find((step) => step.title.startsWith(title))!;
     const peak = (100 * (1 - Math.exp(-0.125))) / (1 - Math.exp(-1));
-    expect(valueOf("Peak at steady state")).toBeCloseTo(peak, 3);
-    expect(valueOf("Trough at steady state")).toBeCloseTo(peak * Math.exp(-0.875), 3);
-    expect(valueOf("Area over 24 h")).toBe(300);
-    expect(valueOf("Accumulation factor")).toBeCloseTo(1 / (1 - Math.exp(-1)), 4);
-    expect(valueOf("Loading dose that starts at steady state")).toBeCloseTo(500 / (1 - Math.exp(-1)), 2);
+    expect(valueIn("Peak at steady state")).toBeCloseTo(peak, 3);
+    expect(valueIn("Trough at steady state")).toBeCloseTo(peak * Math.exp(-0.875), 3);
+    expect(valueIn("Area over 24 h")).toBe(300);
+    expect(valueIn("Accumulation factor")).toBeCloseTo(1 / (1 - Math.exp(-1)), 4);
+    expect(valueIn("Loading dose that starts at steady state")).toBeCloseTo(500 / (1 - Math.exp(-1)), 2);
   });
 
   test("says why there is no steady state", () => {
