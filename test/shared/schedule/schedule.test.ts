@@ -29,10 +29,11 @@ describe("plannedDoses", () => {
     { zone: "Australia/Lord_Howe", start: "2026-10-03T08:00:00+10:30", gaps: [12, 11.5, 12, 12, 12] },
     { zone: "Australia/Lord_Howe", start: "2026-04-04T08:00:00+11:00", gaps: [12, 12.5, 12, 12, 12] },
   ])("keeps 08:00 and 20:00 by the clock in $zone from $start", ({ zone, start, gaps }) => {
+    const times = [{ time: "20:00" }, { time: "08:00" }];
     const when = {
       kind: "clock-times",
       from: start,
-      times: [{ time: "20:00" }, { time: "08:00" }],
+      times,
       end: { kind: "count", doses: 6 },
     } as const;
     const plan = { start, horizonH: 96 };
