@@ -16,6 +16,8 @@ export function goTo(target: string): void {
   history.pushState(null, "", target);
   path.value = location.pathname;
   scrollTo(0, 0);
+  // A reader of the page by ear is told nothing unless the focus goes along.
+  requestAnimationFrame(() => document.getElementById("main")?.focus({ preventScroll: true }));
 }
 
 /** For links within the program; a click meant for a new tab or window stays the browser's own. */

@@ -1,4 +1,4 @@
-import { useSignal } from "@preact/signals";
+import { useComputed, useSignal } from "@preact/signals";
 import { counts } from "../../shared/contract/limits.ts";
 import { type Alternative, letterOf, withAlternative } from "../case/case-document.ts";
 import { type CasePage, savedStateOf } from "../case/case-page.ts";
@@ -18,8 +18,9 @@ import "./alternatives-part.css";
 export function AlternativesPart({ page }: { page: CasePage }) {
   const { model } = page;
   const failure = useSignal<Failure | undefined>(undefined);
-  const document = model.document.value;
+  const document = page.settled.value;
   const selected = page.selected.value;
+  const label = useComputed(() => model.document.value.alternatives.find(({ key }) => key === page.selected.value?.key)?.label ?? "").value;
   if (selected === undefined) return null;
   const letter = letterOf(document, selected.key);
   const room = hasRoom(document);
@@ -64,11 +65,15 @@ export function AlternativesPart({ page }: { page: CasePage }) {
         <TextField
           id="alternative-label"
           label={`Name of alternative ${letter}`}
-          text={selected.label}
-          onText={(label) =>
-            model.change(`name of alternative ${letter}`, (now) => withAlternative(now, selected.key, (each) => ({ ...each, label })), `name ${selected.key}`)
+          text={label}
+          onText={(text) =>
+            model.change(
+              `name of alternative ${letter}`,
+              (now) => withAlternative(now, selected.key, (each) => ({ ...each, label: text })),
+              `name ${selected.key}`,
+            )
           }
-          problem={selected.label.trim() === "" ? `Name of alternative ${letter} is empty` : refusedAt(page, "alternative-label")}
+          problem={label.trim() === "" ? `Name of alternative ${letter} is empty` : refusedAt(page, "alternative-label")}
           longest={counts.labelCharacters}
         />
       </div>

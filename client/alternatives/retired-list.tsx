@@ -24,7 +24,7 @@ export function RetiredList({ page }: { page: CasePage }) {
             <button
               type="button"
               class="button"
-              disabled={!hasRoom(page.model.document.value)}
+              disabled={!hasRoom(page.settled.value)}
               onClick={async () => {
                 failure.value = await bringBack(page, regimen);
                 if (failure.value === undefined) announce(`${regimen.label} is brought back`);

@@ -11,6 +11,8 @@ import { documentOfCase } from "./document-of-case.ts";
 import { type Drafts, type DraftsByName, createDrafts } from "./drafts.ts";
 import { readSetting, readSettingForm, type SettingReading } from "./read-setting.ts";
 import { same } from "./same.ts";
+import type { SettingForm } from "./setting-form.ts";
+import { settling } from "./settling.ts";
 
 /** Cautions of one alternative, or why it cannot be computed. */
 export interface Judged {
@@ -31,13 +33,20 @@ export interface CasePage {
   readonly baseVersion: Signal<number>;
   /** What the server did not accept, by JSON Pointer of what was sent. */
   readonly refused: Signal<readonly { readonly pointer: string; readonly detail: string }[]>;
+  readonly form: ReadonlySignal<SettingForm>;
+  readonly timeZone: ReadonlySignal<string>;
   readonly reading: ReadonlySignal<SettingReading>;
+  /** The document once it rests: what is long to draw follows this one. */
+  readonly settled: ReadonlySignal<CaseDocument>;
+  /** The alternative being edited, as the settled document has it. */
   readonly selected: ReadonlySignal<Alternative | undefined>;
   readonly selectedContent: ReadonlySignal<RegimenContent | undefined>;
   readonly judged: ReadonlySignal<Judged>;
   /** Label, notes, time zone or setting differ from what the server has. */
   readonly detailsChanged: ReadonlySignal<boolean>;
   readonly unsaved: ReadonlySignal<boolean>;
+  /** Ends what runs on its own; the page is not shown any more. */
+  close(): void;
 }
 
 /** What an earlier visit left unsaved. */
@@ -53,36 +62,41 @@ export function createCasePage(whole: WholeCase, unsaved?: UnsavedWork): CasePag
   const drafts = createDrafts(unsaved?.drafts);
   const stored = signal(whole);
   const opened = computed(() => documentOfCase(stored.value));
-  const selected = computed(() => selectedIn(model.document.value, model.selectedKey.value));
-  const selectedContent = computed(() => model.contents.value.get(selected.value?.key ?? ""));
+  const { value: settled, stop } = settling(model.document);
+  const selected = computed(() => selectedIn(settled.value, model.selectedKey.value));
+  const selectedContent = computed(() => selected.value && contentOf(settled.value, selected.value));
   const form = computed(() => model.document.value.form);
   const timeZone = computed(() => model.document.value.timeZone);
-  const detailsChanged = computed(() => !sameDetails(model.document.value, opened.value));
+  const detailsChanged = computed(() => !sameDetails(settled.value, opened.value));
   return {
     model,
     drafts,
     stored,
     baseVersion: signal(unsaved?.baseVersion ?? whole.case.version),
     refused: signal([]),
+    form,
+    timeZone,
+    settled,
     reading: computed(() => readSettingForm(form.value, timeZone.value)),
     selected,
     selectedContent,
     judged: computed(() => judge(selectedContent.value)),
     detailsChanged,
-    unsaved: computed(
-      () =>
-        detailsChanged.value ||
-        Object.keys(drafts.all.value).length > 0 ||
-        !same(unkeyed(model.document.value), unkeyed(opened.value)),
-    ),
+    unsaved: computed(() => differs(settled.value, opened.value, drafts.all.value)),
+    close: stop,
   };
+}
+
+/** Whether anything on the page is not on the server, this very moment. */
+export function hasUnsaved({ model, stored, drafts }: CasePage): boolean {
+  return differs(model.document.peek(), documentOfCase(stored.peek()), drafts.all.peek());
 }
 
 /** How an alternative on the page stands to its newest revision. */
 export function savedStateOf(page: CasePage, alternative: Alternative): SavedState {
   const latest = page.stored.value.regimens.find(({ id }) => id === alternative.regimenId)?.latest;
   if (latest === undefined) return "never";
-  return same(contentOf(page.model.document.value, alternative), latest.content) ? "saved" : "changed";
+  return same(contentOf(page.settled.value, alternative), latest.content) ? "saved" : "changed";
 }
 
 /** Cautions of a content; where it cannot be computed, the standing one and the reason. */
@@ -100,6 +114,10 @@ export function judge(content: RegimenContent | undefined): Judged {
 
 function selectedIn({ alternatives }: CaseDocument, key: string | undefined): Alternative | undefined {
   return alternatives.find((each) => each.key === key) ?? alternatives[0];
+}
+
+function differs(now: CaseDocument, opened: CaseDocument, drafts: DraftsByName): boolean {
+  return Object.keys(drafts).length > 0 || !sameDetails(now, opened) || !same(unkeyed(now), unkeyed(opened));
 }
 
 /** A new alternative keeps its key on the page when the server gives it an id. */

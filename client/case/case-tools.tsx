@@ -5,7 +5,10 @@ export function CaseTools({ page, kept }: { page: CasePage; kept: boolean }) {
   const { model } = page;
   return (
     <div class="case-tools">
-      <span class="soft">{sayKept(page.unsaved.value, kept)}</span>
+      <span class="soft">
+        {page.unsaved.value ? "Unsaved" : "All saved"}
+        {page.unsaved.value && <span class={kept ? "kept-words" : undefined}>{sayKept(kept)}</span>}
+      </span>
       <button type="button" class="button" disabled={!model.canUndo.value} onClick={model.undo} aria-keyshortcuts="Control+Z">
         Undo
       </button>
@@ -16,7 +19,6 @@ export function CaseTools({ page, kept }: { page: CasePage; kept: boolean }) {
   );
 }
 
-function sayKept(unsaved: boolean, kept: boolean): string {
-  if (!unsaved) return "All saved";
-  return kept ? "Unsaved; kept in this browser" : "Not saved, and this browser keeps nothing: save before you leave";
+function sayKept(kept: boolean): string {
+  return kept ? "; kept in this browser" : ", and this browser keeps nothing: save before you leave";
 }

@@ -1,4 +1,4 @@
-import { useSignal } from "@preact/signals";
+import { effect, useSignal } from "@preact/signals";
 import { useEffect } from "preact/hooks";
 import { AlternativesPart } from "../alternatives/alternatives-part.tsx";
 import { DosesPart } from "../doses/doses-part.tsx";
@@ -20,14 +20,24 @@ import { CaseTools } from "./case-tools.tsx";
 import { useUndoKeys } from "./undo-keys.ts";
 import "./case-view.css";
 
+/** What the server did not accept is told until something is changed. */
+function clearRefusals({ model, drafts, refused }: CasePage): () => void {
+  return effect(() => {
+    void [model.document.value, drafts.all.value];
+    if (refused.peek().length > 0) refused.value = [];
+  });
+}
+
 /** One case, read from top to bottom as the question is asked. */
 export function CaseView({ page }: { page: CasePage }) {
   const { model } = page;
   const kept = useSignal(true);
   useEffect(() => keepWhileOpen(page, kept), [page]);
   useEffect(() => model.lastChange.subscribe(announce), [page]);
+  useEffect(() => clearRefusals(page), [page]);
   useUndoKeys(model);
-  const { label } = model.document.value;
+  useEffect(() => page.close, [page]);
+  const { label } = page.settled.value;
   useEffect(() => {
     document.title = `${label} - Ebbline`;
   }, [label]);

@@ -8,7 +8,7 @@ import type { KeptWork } from "../keeping/unsaved-form.ts";
 import { UnsavedOffer } from "../keeping/unsaved-offer.tsx";
 import { FailureNote } from "../shell/failure-note.tsx";
 import { PageFrame } from "../shell/page-frame.tsx";
-import { type CasePage, createCasePage } from "./case-page.ts";
+import { type CasePage, createCasePage, hasUnsaved } from "./case-page.ts";
 import { CaseView } from "./case-view.tsx";
 
 type Opening =
@@ -50,6 +50,13 @@ export function OpenCase({ id }: { id: string }) {
   );
 }
 
+/** Kept work that says what the server has by now is no news. */
+function isNews(whole: WholeCase, kept: KeptWork): boolean {
+  const page = createCasePage(whole, kept);
+  page.close();
+  return hasUnsaved(page);
+}
+
 /** The schemas come with the first request, so that the page itself is there sooner. */
 async function openedCase(id: string): Promise<Opening> {
   const [{ loadCase }, { readUnsaved }] = await Promise.all([
@@ -62,6 +69,6 @@ async function openedCase(id: string): Promise<Opening> {
   const text = readKept(keptName(id));
   if (text === undefined) return { step: "open", page: createCasePage(whole) };
   const kept = readUnsaved(text);
-  if (kept !== undefined && !createCasePage(whole, kept).unsaved.value) return { step: "open", page: createCasePage(whole) };
+  if (kept !== undefined && !isNews(whole, kept)) return { step: "open", page: createCasePage(whole) };
   return { step: "offer", whole, text, kept };
 }

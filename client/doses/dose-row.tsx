@@ -1,14 +1,15 @@
 import type { ComponentChildren } from "preact";
-import type { Order } from "../../shared/contract/schedule.ts";
+import type { Schedule } from "../../shared/contract/case.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { formatHours } from "../../shared/units/format.ts";
 import { sayGive } from "../orders/say-order.ts";
-import { nameOfDose, sayOutcome } from "./say-dose.ts";
+import { nameOfDose } from "../reading/dose-words.ts";
+import { sayOutcome } from "./say-dose.ts";
 
 interface DoseRowProps {
   readonly dose: ScheduledDose;
-  readonly orders: readonly Order[];
+  readonly schedule: Schedule;
   readonly note: string;
   readonly timeZone: string;
   readonly onEdit: () => void;
@@ -22,8 +23,8 @@ export function doseButtonId(key: string): string {
 }
 
 /** One dose of the dated table, and its editor below it. */
-export function DoseRow({ dose, orders, note, timeZone, onEdit, children }: DoseRowProps) {
-  const name = nameOfDose(dose, orders);
+export function DoseRow({ dose, schedule, note, timeZone, onEdit, children }: DoseRowProps) {
+  const name = nameOfDose(dose, schedule);
   const extra = dose.status === "extra";
   return (
     <>

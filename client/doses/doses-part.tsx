@@ -12,7 +12,7 @@ import { draftOfExtra } from "./extra-draft.ts";
 import { ExtraEditor } from "./extra-editor.tsx";
 import { LostRecords } from "./lost-records.tsx";
 import { withDoseEdit, withExtra, withoutExtra } from "./record-edits.ts";
-import { nameOfDose } from "./say-dose.ts";
+import { nameOfDose } from "../reading/dose-words.ts";
 import "./doses-part.css";
 
 /** A long plan has thousands of doses; so many are shown until more are asked for. */
@@ -23,12 +23,11 @@ export function DosesPart({ page }: { page: CasePage }) {
   const { model, drafts } = page;
   const shown = useSignal(shownAtOnce);
   const dated = useComputed(() => datedDoses(page.selectedContent.value));
-  const document = model.document.value;
+  const document = page.settled.value;
   const selected = page.selected.value;
   if (selected === undefined) return null;
   const { timeZone } = document;
   const letter = letterOf(document, selected.key);
-  const { orders } = selected.schedule;
   const { doses, lost } = dated.value;
   const draftName = (key: string) => `dose:${selected.key}:${key}`;
   const close = (key: string, backTo: string) => {
@@ -43,12 +42,12 @@ export function DosesPart({ page }: { page: CasePage }) {
     return (
       <DoseEditor
         dose={dose}
-        title={nameOfDose(dose, orders)}
+        title={titleOf(nameOfDose(dose, selected.schedule))}
         draft={draft}
         timeZone={timeZone}
         onDraft={(fields) => drafts.set(draftName(dose.key), fields)}
         onApply={(edit) => {
-          model.change(`${nameOfDose(dose, orders)} of alternative ${letter}`, (now) =>
+          model.change(`${nameOfDose(dose, selected.schedule)} of alternative ${letter}`, (now) =>
             withSchedule(now, selected.key, (schedule) => withDoseEdit(schedule, dose, edit)),
           );
           close(dose.key, doseButtonId(dose.key));
@@ -120,7 +119,7 @@ export function DosesPart({ page }: { page: CasePage }) {
                 <DoseRow
                   key={dose.key}
                   dose={dose}
-                  orders={orders}
+                  schedule={selected.schedule}
                   note={noteOf(selected, dose)}
                   timeZone={timeZone}
                   onEdit={() => {
@@ -167,6 +166,10 @@ export function DosesPart({ page }: { page: CasePage }) {
       {extraEditor("new", "new", "Extra dose")}
     </section>
   );
+}
+
+function titleOf(name: string): string {
+  return name.charAt(0).toUpperCase() + name.slice(1);
 }
 
 function isOrdered(dose: ScheduledDose): dose is OrderedDose {

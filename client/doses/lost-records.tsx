@@ -3,7 +3,6 @@ import { type Alternative, withSchedule } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { focusOn } from "../shell/focus.ts";
 import { withoutRecord } from "./record-edits.ts";
-import { nameOfDose } from "./say-dose.ts";
 
 interface LostRecordsProps {
   readonly page: CasePage;
@@ -19,7 +18,7 @@ export function LostRecords({ page, alternative, lost }: LostRecordsProps) {
       <h3>Records whose dose is gone</h3>
       <ul class="entries">
         {lost.map((record) => {
-          const name = nameOfDose(record, alternative.schedule.orders);
+          const name = nameOfRecord(record, alternative);
           return (
             <li key={`${record.orderId}#${record.occurrence}`} class="entry">
               <p>
@@ -44,4 +43,9 @@ export function LostRecords({ page, alternative, lost }: LostRecordsProps) {
       </ul>
     </>
   );
+}
+
+function nameOfRecord({ orderId, occurrence }: DoseRecord, { schedule }: Alternative): string {
+  const index = schedule.orders.findIndex(({ id }) => id === orderId);
+  return `dose ${occurrence + 1} of ${index < 0 ? "an order that is gone" : `order ${index + 1}`}`;
 }

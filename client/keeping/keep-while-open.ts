@@ -1,5 +1,5 @@
 import { type Signal, effect } from "@preact/signals";
-import type { CasePage } from "../case/case-page.ts";
+import { type CasePage, hasUnsaved } from "../case/case-page.ts";
 import { dropKept, keptName, writeKept } from "./kept-text.ts";
 import { writeUnsaved } from "./write-unsaved.ts";
 
@@ -19,7 +19,7 @@ export function keepWhileOpen(page: CasePage, kept: Signal<boolean>): () => void
   const keep = () => {
     clearTimeout(timer);
     timer = undefined;
-    if (!page.unsaved.peek()) {
+    if (!hasUnsaved(page)) {
       dropKept(name);
       kept.value = true;
       return;

@@ -16,7 +16,7 @@ import "./orders-part.css";
 /** The orders of the alternative being edited: read as sentences, edited in place. */
 export function OrdersPart({ page }: { page: CasePage }) {
   const { model, drafts } = page;
-  const document = model.document.value;
+  const document = page.settled.value;
   const selected = page.selected.value;
   if (selected === undefined) return null;
   const { timeZone } = document;
@@ -119,7 +119,7 @@ export function OrdersPart({ page }: { page: CasePage }) {
           id="order-add"
           disabled={orders.length >= counts.ordersPerAlternative}
           onClick={() => {
-            drafts.open(draftName("new"), { ...emptyOrderDraft, ...momentFields("at", document.form.start) });
+            drafts.open(draftName("new"), { ...emptyOrderDraft, ...momentFields("at", model.document.peek().form.start) });
             focusOn("order-new-amount");
           }}
         >

@@ -1,6 +1,6 @@
 import { useSignal } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
-import { letterOf } from "../case/case-document.ts";
+import { contentOf, letterOf } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { SelectField } from "../controls/select-field.tsx";
 import type { Failure } from "../http/answer.ts";
@@ -97,9 +97,10 @@ async function savedSides(page: CasePage): Promise<Gathered> {
 }
 
 function pageSides(page: CasePage): Side[] {
-  const document = page.model.document.value;
-  return document.alternatives.flatMap(({ key, label }) => {
-    const content = page.model.contents.value.get(key);
+  const document = page.settled.value;
+  return document.alternatives.flatMap((alternative) => {
+    const { key, label } = alternative;
+    const content = contentOf(document, alternative);
     return content === undefined ? [] : [{ value: `page ${key}`, label: `${letterOf(document, key)} ${label}, as on this page`, content }];
   });
 }

@@ -1,15 +1,17 @@
 import type { RegimenContent } from "../../shared/contract/case.ts";
-import { differencesOf } from "../../shared/figures/differences.ts";
+import { type Difference, differencesOf } from "../../shared/figures/differences.ts";
 
 interface DifferencesTableProps {
   readonly before: RegimenContent;
   readonly after: RegimenContent;
   readonly names: { readonly before: string; readonly after: string };
+  /** Texts that belong to no content, such as the notes of the case. */
+  readonly texts?: readonly Difference[];
 }
 
 /** Two contents field by field: only what differs, in words with units. */
-export function DifferencesTable({ before, after, names }: DifferencesTableProps) {
-  const differences = differencesOf(before, after);
+export function DifferencesTable({ before, after, names, texts = [] }: DifferencesTableProps) {
+  const differences = [...texts.filter((text) => text.before !== text.after), ...differencesOf(before, after)];
   if (differences.length === 0) return <p>Nothing that is computed with differs.</p>;
   return (
     <div class="scroll-x" role="region" aria-label="What differs" tabIndex={0}>

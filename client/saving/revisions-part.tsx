@@ -35,7 +35,7 @@ export function RevisionsPart({ page }: { page: CasePage }) {
     };
   }, [regimenId, known]);
   if (selected === undefined || known === 0) return null;
-  const letter = letterOf(page.model.document.value, selected.key);
+  const letter = letterOf(page.settled.value, selected.key);
   return (
     <>
       <h3 id="revisions-title">Revisions of alternative {letter}</h3>

@@ -18,7 +18,7 @@ export function SaveDetails({ page }: { page: CasePage }) {
     busy.value = false;
     if (outcome.value.kind === "done") announce("The case's details are saved");
   };
-  const { label, setting } = page.model.document.value;
+  const { label, setting } = page.settled.value;
   const changed = page.detailsChanged.value;
   const unfinished = changed && setting === undefined && page.stored.value.case.setting !== undefined;
   const now = outcome.value;

@@ -19,13 +19,13 @@ import "./save-part.css";
 
 /** Saves the alternative being edited as a revision that never changes, and shows the earlier ones. */
 export function SavePart({ page }: { page: CasePage }) {
-  const { model, drafts } = page;
+  const { drafts } = page;
   const outcome = useSignal<{ readonly key: string; readonly result: SaveOutcome } | undefined>(undefined);
   const checked = useSignal(false);
   const busy = useSignal(false);
   const selected = page.selected.value;
   if (selected === undefined) return null;
-  const letter = letterOf(model.document.value, selected.key);
+  const letter = letterOf(page.settled.value, selected.key);
   const draftName = `save:${selected.key}`;
   const draft = drafts.all.value[draftName];
   const problems = problemsOf(page, textIn(draft, "reason"), textIn(draft, "preparedBy"));
@@ -120,7 +120,7 @@ const fieldIds: Readonly<Record<string, string>> = {
 
 function problemsOf(page: CasePage, reason: string, preparedBy: string): Record<string, string> {
   const problems: Record<string, string> = {};
-  const { label } = page.model.document.value;
+  const { label } = page.settled.value;
   const selected = page.selected.value;
   const { problem, cautions } = page.judged.value;
   if (label.trim() === "") problems["label"] = "Label of the case is empty";

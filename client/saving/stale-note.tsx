@@ -18,7 +18,7 @@ export function StaleNote({ page, stale, onSettled }: StaleNoteProps) {
   const { newest, what } = stale;
   const latest = newest.regimens.find(({ id }) => id === page.selected.value?.regimenId)?.latest;
   const theirs = what === "details" ? detailsContent(documentOfCase(newest)) : latest?.content;
-  const mine = what === "details" ? detailsContent(page.model.document.value) : page.selectedContent.value;
+  const mine = what === "details" ? detailsContent(page.settled.value) : page.selectedContent.value;
   const agree = () => {
     page.stored.value = newest;
     if (what === "details") page.baseVersion.value = newest.case.version;
@@ -34,9 +34,12 @@ export function StaleNote({ page, stale, onSettled }: StaleNoteProps) {
             `Revision ${latest.number} was saved at ${sayInstant(latest.createdAt, newest.case.timeZone)} by ${latest.preparedBy}: ${latest.reason}`}
       </p>
       {theirs !== undefined && mine !== undefined ? (
-        <DifferencesTable before={theirs} after={mine} names={{ before: "Saved in between", after: "Yours on this page" }} />
+        <DifferencesTable before={theirs} after={mine} names={names} texts={notesOf(page, stale)} />
       ) : (
-        <p>The two cannot be set side by side, because one of them is not complete.</p>
+        <p>
+          Kinetics and plan cannot be set side by side, because one of the two is not complete. Notes saved in between:{" "}
+          {newest.case.notes || "none"}
+        </p>
       )}
       <div class="button-row">
         <button
@@ -63,6 +66,13 @@ export function StaleNote({ page, stale, onSettled }: StaleNoteProps) {
       </div>
     </div>
   );
+}
+
+const names = { before: "Saved in between", after: "Yours on this page" };
+
+function notesOf(page: CasePage, { newest, what }: Stale) {
+  if (what === "revision") return [];
+  return [{ path: "notes", label: "Notes of the case", before: newest.case.notes, after: page.settled.value.notes }];
 }
 
 function load(page: CasePage, { newest, what }: Stale): void {

@@ -1,3 +1,4 @@
+import { useComputed } from "@preact/signals";
 import type { Caution } from "../../shared/contract/caution.ts";
 import { counts } from "../../shared/contract/limits.ts";
 import { type Alternative, withAlternative } from "../case/case-document.ts";
@@ -12,6 +13,7 @@ interface StopReasonsProps {
 /** Each caution that stops, with the reason for going on all the same. */
 export function StopReasons({ page, problems }: StopReasonsProps) {
   const selected = page.selected.value;
+  const reasons = useComputed(() => reasonsNow(page)).value;
   const stops = stopsOf(page.judged.value.cautions);
   if (selected === undefined || stops.length === 0) return null;
   return (
@@ -28,7 +30,7 @@ export function StopReasons({ page, problems }: StopReasonsProps) {
           <TextField
             id={reasonField(index)}
             label="Reason for going on"
-            text={reasonFor(selected, stop)}
+            text={reasonFor(reasons, stop)}
             onText={(reason) =>
               page.model.change(
                 "reason for going on",
@@ -37,7 +39,7 @@ export function StopReasons({ page, problems }: StopReasonsProps) {
               )
             }
             problem={problems[reasonField(index)]}
-            hint={sayEarlier(selected, stop)}
+            hint={sayEarlier(reasons, stop)}
             longest={counts.noteCharacters}
           />
         </div>
@@ -62,12 +64,21 @@ export function isAbout(one: Pick<Caution, "code" | "about" | "text">, other: Pi
   return one.code === other.code && one.about === other.about && one.text === other.text;
 }
 
-function reasonFor({ cautionReasons }: Alternative, stop: Caution): string {
-  return cautionReasons.find((each) => isAbout(each, stop))?.reason ?? "";
+type Reasons = Alternative["cautionReasons"];
+
+/** As typed this moment; an array of the document keeps its identity while nothing in it changes. */
+function reasonsNow({ model, selected }: CasePage): Reasons {
+  return model.document.value.alternatives.find(({ key }) => key === selected.value?.key)?.cautionReasons ?? none;
 }
 
-function sayEarlier({ cautionReasons }: Alternative, stop: Caution): string | undefined {
-  const earlier = cautionReasons.find((each) => each.code === stop.code && each.about === stop.about && !isAbout(each, stop));
+const none: Reasons = [];
+
+function reasonFor(reasons: Reasons, stop: Caution): string {
+  return reasons.find((each) => isAbout(each, stop))?.reason ?? "";
+}
+
+function sayEarlier(reasons: Reasons, stop: Caution): string | undefined {
+  const earlier = reasons.find((each) => each.code === stop.code && each.about === stop.about && !isAbout(each, stop));
   return earlier && `given before, for another value: ${earlier.reason}`;
 }
 

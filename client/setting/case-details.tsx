@@ -1,5 +1,6 @@
-import { useSignal } from "@preact/signals";
+import { useComputed } from "@preact/signals";
 import type { CasePage } from "../case/case-page.ts";
+import { textIn } from "../case/drafts.ts";
 import { TimeZoneField, timeZoneProblem } from "../cases/time-zone-field.tsx";
 import { momentText, readMoment } from "../controls/moment.ts";
 import { TextField } from "../controls/text-field.tsx";
@@ -8,15 +9,21 @@ import type { CaseDocument } from "../case/case-document.ts";
 import { refusedAt } from "../saving/refused.ts";
 import { SaveDetails } from "../saving/save-details-button.tsx";
 
+/** A time zone that is being typed, or that is none, is kept like every open editor. */
+const zoneDraft = "time-zone";
+
 /** The case's label, time zone and notes. */
 export function CaseDetails({ page }: { page: CasePage }) {
-  const { model } = page;
-  const { label, notes, timeZone } = model.document.value;
-  const zone = useSignal<string | undefined>(undefined);
-  const zoneText = zone.value ?? timeZone;
+  const { model, drafts } = page;
+  const label = useComputed(() => model.document.value.label).value;
+  const notes = useComputed(() => model.document.value.notes).value;
+  const timeZone = page.timeZone.value;
+  const typedZone = drafts.all.value[zoneDraft];
+  const zoneText = typedZone === undefined ? timeZone : textIn(typedZone, "text");
   return (
     <section class="case-title" aria-label="Case">
       <h1>{label || "Case without a label"}</h1>
+      {page.stored.value.case.archived && <p class="missing">This case is archived. It can be brought back from the list of cases.</p>}
       <div class="fields">
         <TextField
           id="case-label"
@@ -30,11 +37,11 @@ export function CaseDetails({ page }: { page: CasePage }) {
         <TimeZoneField
           id="case-zone"
           text={zoneText}
-          problem={zone.value === undefined ? refusedAt(page, "case-zone") : timeZoneProblem(zoneText)}
+          problem={typedZone === undefined ? refusedAt(page, "case-zone") : timeZoneProblem(zoneText)}
           onText={(text, stage) => {
-            zone.value = text;
+            drafts.set(zoneDraft, { text });
             if (stage !== "settled" || timeZoneProblem(text) !== undefined) return;
-            zone.value = undefined;
+            drafts.close(zoneDraft);
             model.change("time zone", (document) => inZone(document, text.trim()));
           }}
         />

@@ -13,7 +13,8 @@ const draftName = (id: string) => `change:${id}`;
 /** Elimination that does not stay as it is: failing or recovering kidneys, a dialysis session. */
 export function ChangesPart({ page }: { page: CasePage }) {
   const { model, drafts } = page;
-  const { form, timeZone } = model.document.value;
+  const form = page.form.value;
+  const timeZone = page.timeZone.value;
   const open = drafts.all.value;
   const refused = refusedAt(page, "changes-title");
   const changeList = (what: string, edit: (changes: readonly DatedEliminationChange[]) => DatedEliminationChange[]) =>

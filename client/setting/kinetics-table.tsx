@@ -19,7 +19,7 @@ const absorption: readonly { readonly name: StatedName; readonly hint: string }[
 /** V, CL, k and half-life, of which any two give the rest, and what absorbed doses and salts need. */
 export function KineticsTable({ page }: { page: CasePage }) {
   const { model } = page;
-  const { form } = model.document.value;
+  const form = page.form.value;
   const reading = page.reading.value;
   const row = (name: StatedName, hint: string | undefined, said: string | undefined) => (
     <StatedRow

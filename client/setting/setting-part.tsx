@@ -14,7 +14,8 @@ import "./setting-part.css";
 /** Who and what drug: the plan's span, the kinetics, what is there at the start, what is wanted. */
 export function SettingPart({ page }: { page: CasePage }) {
   const { model } = page;
-  const { form, timeZone } = model.document.value;
+  const form = page.form.value;
+  const timeZone = page.timeZone.value;
   const { problems, missing } = page.reading.value;
   const edit = (what: string, part: Partial<SettingForm>, merge: string) =>
     model.change(what, (document) => ({ ...document, form: { ...document.form, ...part } }), merge);
@@ -63,14 +64,14 @@ export function SettingPart({ page }: { page: CasePage }) {
       <div class="stated-list">
         <StatedRow
           id="setting-startConcentration"
-          label="Concentration already present at the start"
+          label="Concentration at the start"
           unit="mg/L"
           stated={form.startConcentration}
           onStated={(startConcentration, field) =>
             edit("start concentration", { startConcentration }, `startConcentration ${field}`)
           }
           problem={problemOf("startConcentration")}
-          hint="empty means none"
+          hint="already present then; empty means none"
         />
       </div>
       <div class="fields range-fields">

@@ -22,7 +22,7 @@ export function Ribbon({ cautions }: { cautions: readonly Caution[] }) {
         <div class="ribbon-others">
           <button
             type="button"
-            class="ribbon-fold"
+            class={`ribbon-fold has-${gravest(others)}`}
             aria-expanded={unfolded.value}
             aria-controls="ribbon-list"
             onClick={() => {
@@ -53,4 +53,10 @@ function sayCounts(cautions: readonly Caution[]): string {
     ...say(count("warn"), "warning", "warnings"),
     ...say(count("note"), "note", "notes"),
   ].join(", ");
+}
+
+function gravest(cautions: readonly Caution[]): Caution["severity"] {
+  const has = (severity: Caution["severity"]) => cautions.some((caution) => caution.severity === severity);
+  if (has("stop")) return "stop";
+  return has("warn") ? "warn" : "note";
 }
