@@ -50,8 +50,8 @@ export const SteadyStateResponse = z
     swing: z.number().exactOptional(),
     /** (peak - trough) / average. */
     fluctuation: z.number(),
-    /** Steady-state area of a cycle over the area of the first cycle from nothing. */
-    accumulationRatio: z.number(),
+    /** Steady-state area of a cycle over the area of the first cycle from nothing; absent where that leaves none. */
+    accumulationRatio: z.number().exactOptional(),
     /** Level at the start of the cycle, just before anything given then. */
     startMgPerL: z.number(),
     timesH: z.array(z.number()).exactOptional(),

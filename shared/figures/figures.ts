@@ -188,7 +188,7 @@ function steadyFigures(prepared: Prepared): SteadyFigures {
     ),
     timeTo90Percent: { value: Math.LN10 / course.elimination[0]!.ratePerH, unit: "h" },
     settledFrom: settledFigure(prepared),
-    accumulationRatio: { value: steady.accumulationRatio, unit: "times" },
+    accumulationRatio: plain(steady.accumulationRatio, "times", "the first cycle leaves no level"),
     swing: plain(steady.swing === undefined ? undefined : 100 * steady.swing, "percent", "the trough is 0"),
     fluctuation: { value: 100 * steady.fluctuation, unit: "percent" },
   };

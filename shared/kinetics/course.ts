@@ -42,7 +42,12 @@ export interface CourseInput {
 export function courseOf(input: CourseInput): Course {
   const { parameters, doses, horizonH } = input;
   const resolved = resolveKinetics(parameters);
-  if (!resolved.ok) throw new DomainError(resolved.field, parameters[resolved.field], resolved.problem);
+  if (!resolved.ok)
+    throw new DomainError(
+      resolved.field,
+      parameters[resolved.field],
+      `such that the kinetics are fixed (${resolved.problem})`,
+    );
   if (!(horizonH > 0)) throw new DomainError("horizonH", horizonH, "greater than 0");
   if (parameters.absorptionRatePerH === undefined && doses.some(({ kind }) => kind === "absorbed"))
     throw new DomainError("absorptionRatePerH", undefined, "given, because a dose is absorbed");
@@ -73,7 +78,8 @@ export function eliminationPieces(kinetics: Kinetics, changes: readonly Eliminat
     .sort((one, other) => one - other)
     .map((fromH) => {
       while (next < lasting.length && lasting[next]!.fromH <= fromH) next++;
-      for (; nextStep < steps.length && steps[nextStep]!.fromH <= fromH; nextStep++) addedLPerH.add(steps[nextStep]!.byLPerH);
+      for (; nextStep < steps.length && steps[nextStep]!.fromH <= fromH; nextStep++)
+        addedLPerH.add(steps[nextStep]!.byLPerH);
       return piece(kinetics, fromH, lasting[next - 1], addedLPerH.value);
     });
 }
@@ -92,7 +98,12 @@ function byHour(one: { readonly fromH: number }, other: { readonly fromH: number
   return one.fromH - other.fromH;
 }
 
-function piece(kinetics: Kinetics, fromH: number, holds: EliminationChange | undefined, addedLPerH: number): EliminationPiece {
+function piece(
+  kinetics: Kinetics,
+  fromH: number,
+  holds: EliminationChange | undefined,
+  addedLPerH: number,
+): EliminationPiece {
   if (holds === undefined)
     return {
       fromH,

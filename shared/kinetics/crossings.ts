@@ -1,6 +1,6 @@
 import { DomainError } from "../errors.ts";
 import { bracketedRoot } from "./bracketed-root.ts";
-import { type MonotonePiece, type TimeWindow, levelWithin, monotonePieces } from "./monotone-pieces.ts";
+import { levelWithin, type MonotonePiece, monotonePieces, type TimeWindow } from "./monotone-pieces.ts";
 import type { Walk } from "./walk.ts";
 
 export interface Crossing {

@@ -2,7 +2,7 @@ import type { RangeMgPerL } from "../contract/dose.ts";
 import type { Exposure } from "../contract/prediction.ts";
 import { crossingHours } from "./crossings.ts";
 import { expSecondDifference, phi } from "./exp-differences.ts";
-import { type MonotonePiece, type TimeWindow, monotonePieces } from "./monotone-pieces.ts";
+import { type MonotonePiece, monotonePieces, type TimeWindow } from "./monotone-pieces.ts";
 import type { BodyState, Flow, Walk } from "./walk.ts";
 
 /** A later extreme must be this much further out to count, so that equal peaks name the first one. */
@@ -19,7 +19,8 @@ const tie = 1e-12;
  */
 export function exposureOf(made: Walk, window: TimeWindow, range?: RangeMgPerL): Exposure {
   const pieces = monotonePieces(made, window);
-  const aucMgHPerL = sum(pieces.map((piece) => areaMgH(piece.state, piece.flow, piece.untilH - piece.fromH))) / made.volumeL;
+  const aucMgHPerL =
+    sum(pieces.map((piece) => areaMgH(piece.state, piece.flow, piece.untilH - piece.fromH))) / made.volumeL;
   return {
     aucMgHPerL,
     averageMgPerL: aucMgHPerL / (window.toH - window.fromH),

@@ -1,6 +1,6 @@
 import { DomainError } from "../errors.ts";
 import { expDifference, phi } from "./exp-differences.ts";
-import { type Walk, advance, stretchAt } from "./walk.ts";
+import { advance, stretchAt, type Walk } from "./walk.ts";
 
 /** Points between two exact values on a uniform grid: 512 multiply-adds stay below 2e-13 relative. */
 const pointsPerAnchor = 512;

@@ -1,6 +1,6 @@
 import { DomainError } from "../errors.ts";
 import { bracketedRoot } from "./bracketed-root.ts";
-import { type BodyState, type Flow, type Walk, advance, stretchAt } from "./walk.ts";
+import { advance, type BodyState, type Flow, stretchAt, type Walk } from "./walk.ts";
 
 /** A part of one stretch on which the level only rises or only falls. */
 export interface MonotonePiece {
@@ -27,7 +27,8 @@ export interface TimeWindow {
  */
 export function monotonePieces(made: Walk, window: TimeWindow): MonotonePiece[] {
   const { fromH, toH } = window;
-  if (!(fromH >= 0 && fromH < made.horizonH)) throw new DomainError("window/fromH", fromH, `from 0 to below ${made.horizonH}`);
+  if (!(fromH >= 0 && fromH < made.horizonH))
+    throw new DomainError("window/fromH", fromH, `from 0 to below ${made.horizonH}`);
   if (!(toH > fromH && toH <= made.horizonH))
     throw new DomainError("window/toH", toH, `above ${fromH} and at most ${made.horizonH}`);
   const pieces: MonotonePiece[] = [];

@@ -1,7 +1,7 @@
+import { DomainError } from "../errors.ts";
 import type { Course, EliminationPiece } from "./course.ts";
 import { expDifference, expSecondDifference } from "./exp-differences.ts";
-import { DomainError } from "../errors.ts";
-import { type BodyState, type Flow, advance, stretchAt, walk } from "./walk.ts";
+import { advance, type BodyState, type Flow, stretchAt, walk } from "./walk.ts";
 
 /** How the level moves with each parameter, one number per time, in mg/L per unit of the parameter. */
 export interface Sensitivities {
@@ -78,7 +78,13 @@ function rateMoves(piece: EliminationPiece, volumeL: number): { perRate: number;
  *     dA/dk  = -[A u e^(-k u) + R u^2 exp[0, -k u, -k u] + ka D u^2 exp[-k u, -k u, -ka u]]
  *     dA/dka = D [u exp[-k u, -ka u] - ka u^2 exp[-k u, -ka u, -ka u]],   dD/dka = -D u e^(-ka u)
  */
-function carry(tangent: Tangent, state: BodyState, flow: Flow, u: number, moves: { rate: number; absorption: number }): Tangent {
+function carry(
+  tangent: Tangent,
+  state: BodyState,
+  flow: Flow,
+  u: number,
+  moves: { rate: number; absorption: number },
+): Tangent {
   const { k, ka, rateMgPerH } = flow;
   const { amountMg, depotMg } = state;
   const x = k * u;

@@ -3,7 +3,7 @@ import type { Exposure } from "../contract/prediction.ts";
 import { DomainError } from "../errors.ts";
 import type { Course } from "./course.ts";
 import { exposureOf } from "./exposure.ts";
-import { type BodyState, type Walk, advance, stretchAt, walkFrom } from "./walk.ts";
+import { advance, type BodyState, stretchAt, type Walk, walkFrom } from "./walk.ts";
 
 /** One cycle of a regimen that has been repeated for ever. */
 export interface SteadyState {
@@ -16,8 +16,8 @@ export interface SteadyState {
   readonly swing?: number;
   /** (peak - trough) / average. */
   readonly fluctuation: number;
-  /** Area of a cycle at steady state over the area of the first cycle, from nothing. */
-  readonly accumulationRatio: number;
+  /** Area of a cycle at steady state over the area of the first cycle, from nothing; absent where that leaves none. */
+  readonly accumulationRatio?: number;
   /** Level at the start of the cycle, before anything given then. */
   readonly startMgPerL: number;
 }
@@ -39,7 +39,11 @@ export interface SteadyState {
  */
 export function steadyState(course: Course, range?: RangeMgPerL): SteadyState {
   const cycleH = course.horizonH;
-  const folded: Course = { ...course, startConcentrationMgPerL: 0, doses: course.doses.flatMap((dose, index) => fold(dose, index, cycleH)) };
+  const folded: Course = {
+    ...course,
+    startConcentrationMgPerL: 0,
+    doses: course.doses.flatMap((dose, index) => fold(dose, index, cycleH)),
+  };
   const start = solve(folded);
   const made = walkFrom(folded, start);
   const exposure = exposureOf(made, { fromH: 0, toH: cycleH }, range);
@@ -52,7 +56,7 @@ export function steadyState(course: Course, range?: RangeMgPerL): SteadyState {
     auc24MgHPerL: averageMgPerL * 24,
     ...(trough.mgPerL > 0 && { swing: (peak.mgPerL - trough.mgPerL) / trough.mgPerL }),
     fluctuation: averageMgPerL > 0 ? (peak.mgPerL - trough.mgPerL) / averageMgPerL : 0,
-    accumulationRatio: exposure.aucMgHPerL / first.aucMgHPerL,
+    ...(first.aucMgHPerL > 0 && { accumulationRatio: exposure.aucMgHPerL / first.aucMgHPerL }),
     startMgPerL: start.amountMg / course.kinetics.volumeL,
   };
 }
@@ -63,7 +67,12 @@ function solve(folded: Course): BodyState {
   const forcedWalk = walkFrom(folded, nothing);
   const forced = endOf(forcedWalk);
   const decay = eliminationOver(forcedWalk);
-  if (!(decay > 0)) throw new DomainError("eliminationRatePerH", 0, "above 0 somewhere in the cycle: without elimination there is no steady state");
+  if (!(decay > 0))
+    throw new DomainError(
+      "eliminationRatePerH",
+      0,
+      "above 0 somewhere in the cycle: without elimination there is no steady state",
+    );
   const ka = folded.absorptionRatePerH ?? 0;
   const depotMg = forced.depotMg === 0 ? 0 : forced.depotMg / -Math.expm1(-ka * folded.horizonH);
   const carried = depotMg === 0 ? 0 : endOf(walkFrom({ ...folded, doses: [] }, { amountMg: 0, depotMg })).amountMg;
@@ -87,7 +96,8 @@ function eliminationOver(made: Walk): number {
 /** One cycle of what a dose looks like when every cycle has it. */
 function fold(dose: Dose, index: number, cycleH: number): Dose[] {
   if (dose.kind === "pump") return foldPump(dose.steps, index, cycleH);
-  if (!(dose.atH >= 0 && dose.atH < cycleH)) throw new DomainError(`doses/${index}/atH`, dose.atH, `from 0 to below ${cycleH}`);
+  if (!(dose.atH >= 0 && dose.atH < cycleH))
+    throw new DomainError(`doses/${index}/atH`, dose.atH, `from 0 to below ${cycleH}`);
   if (dose.kind === "bolus") return [dose];
   if (dose.kind === "absorbed") return [{ ...dose, atH: (dose.atH + dose.lagH) % cycleH, lagH: 0 }];
   return foldRate({ atH: dose.atH, hours: dose.durationH, rateMgPerH: dose.amountMg / dose.durationH }, cycleH);
@@ -95,7 +105,8 @@ function fold(dose: Dose, index: number, cycleH: number): Dose[] {
 
 function foldPump(steps: Extract<Dose, { kind: "pump" }>["steps"], index: number, cycleH: number): Dose[] {
   const { rateMgPerH: lastMgPerH } = steps.at(-1)!;
-  if (lastMgPerH !== 0) throw new DomainError(`doses/${index}/steps`, lastMgPerH, "0 mg/h at the last step, so that the pump stops");
+  if (lastMgPerH !== 0)
+    throw new DomainError(`doses/${index}/steps`, lastMgPerH, "0 mg/h at the last step, so that the pump stops");
   return steps.slice(1).flatMap((next, step) => {
     const { atH, rateMgPerH } = steps[step]!;
     return rateMgPerH === 0 ? [] : foldRate({ atH: atH % cycleH, hours: next.atH - atH, rateMgPerH }, cycleH);
@@ -103,11 +114,24 @@ function foldPump(steps: Extract<Dose, { kind: "pump" }>["steps"], index: number
 }
 
 /** A rate that outlasts the cycle runs in several cycles at once: whole cycles as a constant, the rest as a box. */
-function foldRate({ atH, hours, rateMgPerH }: { atH: number; hours: number; rateMgPerH: number }, cycleH: number): Dose[] {
+function foldRate(
+  { atH, hours, rateMgPerH }: { atH: number; hours: number; rateMgPerH: number },
+  cycleH: number,
+): Dose[] {
   const whole = Math.floor(hours / cycleH);
   const restH = hours - whole * cycleH;
   const constant: Dose[] = whole > 0 ? [{ kind: "pump", steps: [{ atH: 0, rateMgPerH: whole * rateMgPerH }] }] : [];
   const box = (fromH: number, toH: number): Dose[] =>
-    toH > fromH ? [{ kind: "pump", steps: [{ atH: fromH, rateMgPerH }, { atH: toH, rateMgPerH: 0 }] }] : [];
+    toH > fromH
+      ? [
+          {
+            kind: "pump",
+            steps: [
+              { atH: fromH, rateMgPerH },
+              { atH: toH, rateMgPerH: 0 },
+            ],
+          },
+        ]
+      : [];
   return [...constant, ...box(atH, Math.min(cycleH, atH + restH)), ...box(0, atH + restH - cycleH)];
 }

@@ -1,5 +1,5 @@
 import type { Course } from "./course.ts";
-import { type BodyState, advance } from "./walk.ts";
+import { advance, type BodyState } from "./walk.ts";
 
 /** Milligrams in the body at a fixed hour of what came earlier; 0 for what comes later. */
 export interface Survival {
@@ -53,7 +53,9 @@ function legsUntil(course: Course, atH: number, ka: number): Leg[] {
   let ofBody = 1;
   let ofDepot = 0;
   let untilH = atH;
-  for (const { fromH, ratePerH: k } of course.elimination.filter((piece) => piece.fromH < atH || piece.fromH === 0).reverse()) {
+  for (const { fromH, ratePerH: k } of course.elimination
+    .filter((piece) => piece.fromH < atH || piece.fromH === 0)
+    .reverse()) {
     legs.push({ fromH, untilH, k, ofBody, ofDepot });
     const flow = { k, ka, rateMgPerH: 0 };
     const unit = advance({ amountMg: 0, depotMg: 1 }, flow, untilH - fromH);

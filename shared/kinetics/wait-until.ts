@@ -10,7 +10,7 @@ export interface WaitQuestion {
   readonly mgPerL: number;
   readonly direction: "below" | "above";
   /** "nothing-more": no dose begins after fromH; what is already running or being absorbed goes on to its end. */
-  readonly then: "nothing-more" | "plan-goes-on";
+  readonly meanwhile: "nothing-more" | "plan-goes-on";
 }
 
 export type WaitAnswer =
@@ -29,15 +29,18 @@ const longestH = 876_600;
  * @throws {DomainError} if fromH is outside the course or mgPerL is not a number of 0 or more
  */
 export function waitUntil(course: Course, question: WaitQuestion): WaitAnswer {
-  const { fromH, mgPerL, direction, then } = question;
-  if (!(fromH >= 0 && fromH < course.horizonH)) throw new DomainError("fromH", fromH, `from 0 to below ${course.horizonH}`);
+  const { fromH, mgPerL, direction, meanwhile } = question;
+  if (!(fromH >= 0 && fromH < course.horizonH))
+    throw new DomainError("fromH", fromH, `from 0 to below ${course.horizonH}`);
   if (!(mgPerL >= 0)) throw new DomainError("mgPerL", mgPerL, "0 or more");
-  const followed = then === "plan-goes-on" ? course : { ...course, doses: course.doses.filter((dose) => beginsH(dose) <= fromH) };
+  const followed =
+    meanwhile === "plan-goes-on" ? course : { ...course, doses: course.doses.filter((dose) => beginsH(dose) <= fromH) };
   const [nowMgPerL] = levelsAt(walk(followed), [fromH]);
   if (direction === "below" ? nowMgPerL! < mgPerL : nowMgPerL! > mgPerL) return { kind: "already", mgPerL: nowMgPerL! };
   const wanted = direction === "below" ? "falling" : "rising";
-  const search = (made: Walk) => crossingsOf(made, mgPerL, { fromH, toH: made.horizonH }).find((crossing) => crossing.direction === wanted);
-  if (then === "plan-goes-on") {
+  const search = (made: Walk) =>
+    crossingsOf(made, mgPerL, { fromH, toH: made.horizonH }).find((crossing) => crossing.direction === wanted);
+  if (meanwhile === "plan-goes-on") {
     const crossing = search(walk(followed));
     return crossing ? { kind: "at", atH: crossing.atH } : { kind: "never", why: "not before the plan ends" };
   }
@@ -45,12 +48,16 @@ export function waitUntil(course: Course, question: WaitQuestion): WaitAnswer {
     const crossing = search(walk({ ...followed, horizonH }));
     if (crossing) return { kind: "at", atH: crossing.atH };
   }
-  return { kind: "never", why: direction === "below" ? neverBelow(followed, mgPerL) : "what has been given does not reach it" };
+  return {
+    kind: "never",
+    why: direction === "below" ? neverBelow(followed, mgPerL) : "what has been given does not reach it",
+  };
 }
 
 function neverBelow(course: Course, mgPerL: number): string {
   if (mgPerL === 0) return "a level that falls exponentially never reaches 0 mg/L";
-  if (course.doses.some((dose) => dose.kind === "pump" && dose.steps.at(-1)!.rateMgPerH > 0)) return "a pump is left running";
+  if (course.doses.some((dose) => dose.kind === "pump" && dose.steps.at(-1)!.rateMgPerH > 0))
+    return "a pump is left running";
   return "nothing is eliminated fast enough";
 }
 

@@ -57,7 +57,9 @@ export function walk(course: Course): Walk {
 export function walkFrom(course: Course, start: BodyState): Walk {
   const { horizonH } = course;
   const absorptionRatePerH = course.absorptionRatePerH ?? 0;
-  const events = eventsOf(course).filter(({ atH, bolusMg }) => atH < horizonH || (atH === horizonH && bolusMg !== undefined));
+  const events = eventsOf(course).filter(
+    ({ atH, bolusMg }) => atH < horizonH || (atH === horizonH && bolusMg !== undefined),
+  );
   const made = emptyWalk(course, events.length + 1);
   const rates = new RunningRates();
   let { amountMg, depotMg } = start;
@@ -114,14 +116,19 @@ export function stretchAt(made: Walk, index: number): { state: BodyState; flow: 
 }
 
 function eventsOf(course: Course): Event[] {
-  const events: Event[] = course.elimination.map(({ fromH, ratePerH }) => ({ atH: fromH, eliminationRatePerH: ratePerH }));
+  const events: Event[] = course.elimination.map(({ fromH, ratePerH }) => ({
+    atH: fromH,
+    eliminationRatePerH: ratePerH,
+  }));
   course.doses.forEach((dose, source) => {
     if (dose.kind === "bolus") events.push({ atH: dose.atH, bolusMg: effectiveMg(course, dose) });
     else if (dose.kind === "absorbed") events.push({ atH: dose.atH + dose.lagH, depotMg: effectiveMg(course, dose) });
     else if (dose.kind === "infusion") {
       events.push({ atH: dose.atH, source, rateMgPerH: effectiveMg(course, dose) / dose.durationH });
       events.push({ atH: dose.atH + dose.durationH, source, rateMgPerH: 0 });
-    } else for (const step of dose.steps) events.push({ atH: step.atH, source, rateMgPerH: course.saltFactor * step.rateMgPerH });
+    } else
+      for (const step of dose.steps)
+        events.push({ atH: step.atH, source, rateMgPerH: course.saltFactor * step.rateMgPerH });
   });
   // Stable: at one hour, events keep the order of their doses.
   return events.sort((one, other) => one.atH - other.atH);

@@ -164,7 +164,7 @@ export const engineAnswers: Readonly<Record<string, (given: Given) => Answers>> 
       fraction_left: level(body, doses, given.number("tau_h")) / level(body, doses, 0),
       Cmax_mg_L: steady.exposure.peak.mgPerL,
       Cmin_mg_L: steady.exposure.trough.mgPerL,
-      accumulation: steady.accumulationRatio,
+      accumulation: steady.accumulationRatio!,
       loading_dose_mg: steady.exposure.peak.mgPerL / level(body, [bolus(1)], 0),
     };
   },
@@ -192,7 +192,7 @@ export const engineAnswers: Readonly<Record<string, (given: Given) => Answers>> 
     const body = { volumeL: oneLitre, halfLifeH: 1 };
     const { accumulationRatio, exposure: steady } = cycle(body, [bolus(1)], 1);
     return {
-      accumulation: accumulationRatio,
+      accumulation: accumulationRatio!,
       ss_trough_over_first_peak: steady.trough.mgPerL / level(body, [bolus(1)], 0),
       swing: steady.peak.mgPerL / steady.trough.mgPerL,
       body_after_2nd_dose_in_doses: level(body, [bolus(1), bolus(1, 1)], 1),
@@ -321,7 +321,7 @@ export const engineAnswers: Readonly<Record<string, (given: Given) => Answers>> 
     const doseMg = given.number("Cavg_mg_L") / ofOneMg.exposure.averageMgPerL;
     return {
       dose_mg: doseMg,
-      loading_dose_mg: doseMg * ofOneMg.accumulationRatio,
+      loading_dose_mg: doseMg * ofOneMg.accumulationRatio!,
       Cmin_mg_L: doseMg * ofOneMg.exposure.trough.mgPerL,
     };
   },
@@ -399,14 +399,14 @@ export const engineAnswers: Readonly<Record<string, (given: Given) => Answers>> 
       .numbers("interval_over_half_life")
       .map((interval) => cycle({ volumeL: oneLitre, halfLifeH: 1 }, [bolus(1)], interval));
     return {
-      ratio: steady.map(({ accumulationRatio }) => accumulationRatio),
+      ratio: steady.map(({ accumulationRatio }) => accumulationRatio!),
       average_over_dose_amount: steady.map(({ exposure: { averageMgPerL } }) => averageMgPerL),
     };
   },
   "TAB-03": (given) => {
     const body = { volumeL: oneLitre, halfLifeH: 1 };
     return {
-      ratio_at_5: cycle(body, [bolus(1)], given.number("interval_over_half_life")).accumulationRatio,
+      ratio_at_5: cycle(body, [bolus(1)], given.number("interval_over_half_life")).accumulationRatio!,
       // The average is in inverse proportion to the interval, so the average at interval 1 is that interval.
       interval_at_which_average_equals_one_dose: cycle(body, [bolus(1)], 1).exposure.averageMgPerL,
     };
