@@ -92,6 +92,11 @@ export function hasUnsaved({ model, stored, drafts }: CasePage): boolean {
   return differs(model.document.peek(), documentOfCase(stored.peek()), drafts.all.peek());
 }
 
+/** Whether label, notes, time zone or setting differ from what the server has, this very moment. */
+export function haveDetailsChanged({ model, stored }: CasePage): boolean {
+  return !sameDetails(model.document.peek(), documentOfCase(stored.peek()));
+}
+
 /** How an alternative on the page stands to its newest revision. */
 export function savedStateOf(page: CasePage, alternative: Alternative): SavedState {
   const latest = page.stored.value.regimens.find(({ id }) => id === alternative.regimenId)?.latest;

@@ -108,7 +108,7 @@ function derivedProblems(kinetics: Kinetics, note: Note): boolean {
   const from = kinetics.given.map((name) => shortNames[name]).join(" and ");
   note(
     kinetics.given[1] ?? absurd,
-    `${from} give a ${limits[absurd].label.toLowerCase()} of ${say(kinetics[absurd])}, which must be from ${say(low)} to ${say(high)}`,
+    `${from} give: ${limits[absurd].label.toLowerCase()} ${say(kinetics[absurd])}, which must be from ${say(low)} to ${say(high)}`,
   );
   return true;
 }

@@ -18,6 +18,7 @@ export function settling<Value>(source: ReadonlySignal<Value>): Settling<Value> 
   let changedAt = Number.NEGATIVE_INFINITY;
   const stop = effect(() => {
     const newest = source.value;
+    if (timer === undefined && newest === value.peek()) return;
     const now = performance.now();
     const alone = now - changedAt > restMs;
     changedAt = now;

@@ -1,4 +1,4 @@
-import type { CasePage } from "../case/case-page.ts";
+import { type CasePage, haveDetailsChanged } from "../case/case-page.ts";
 import type { Failure } from "../http/answer.ts";
 import type { WholeCase } from "../http/cases-api.ts";
 
@@ -15,7 +15,7 @@ const done = { kind: "done" } as const;
 
 /** Saves label, notes, time zone and setting where they differ from what the server has. */
 export async function saveDetails(page: CasePage): Promise<Outcome> {
-  if (!page.detailsChanged.peek()) return done;
+  if (!haveDetailsChanged(page)) return done;
   const { label, timeZone, notes, setting } = page.model.document.peek();
   const { changeCase } = await import("../http/cases-api.ts");
   const { id } = page.stored.peek().case;
