@@ -1,5 +1,5 @@
-import { instantAt, secondInstant, toInstant, toLocal } from "../../shared/schedule/clock.ts";
 import type { TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
+import { instantAt, secondInstant, toInstant, toLocal } from "../../shared/schedule/clock.ts";
 import type { ClockSpan } from "./snap.ts";
 
 /** A line across the plot with its clock time or day below it. */
@@ -33,7 +33,8 @@ export function clockTicks(span: ClockSpan, window: TimeWindow, plotPx: number):
   const pxPerH = plotPx / (window.toH - window.fromH);
   const stepMin = stepsMin.find((minutes) => (minutes / 60) * pxPerH >= narrowestTimePx);
   const days = daysIn(span, window);
-  if (stepMin !== undefined) return { ticks: timeTicks(span, window, days, stepMin), stretches: named(days, window, pxPerH, dayNames) };
+  if (stepMin !== undefined)
+    return { ticks: timeTicks(span, window, days, stepMin), stretches: named(days, window, pxPerH, dayNames) };
   const everyDays = stepsDays.find((count) => count * 24 * pxPerH >= narrowestDayPx) ?? stepsDays.at(-1)!;
   return { ticks: dayTicks(days, window, everyDays), stretches: named(months(days), window, pxPerH, monthNames) };
 }
@@ -108,7 +109,9 @@ function named(
 
 /** Made by hand from the parts, so that a date reads the same as everywhere else: "Mon 2 Mar 2026". */
 function say(date: string, options: Intl.DateTimeFormatOptions): string {
-  const parts = new Intl.DateTimeFormat("en-GB", { ...options, timeZone: "UTC" }).formatToParts(new Date(`${date}T00:00:00Z`));
+  const parts = new Intl.DateTimeFormat("en-GB", { ...options, timeZone: "UTC" }).formatToParts(
+    new Date(`${date}T00:00:00Z`),
+  );
   const part = (type: string) => parts.find((each) => each.type === type)?.value;
   return [part("weekday"), part("day"), part("month"), part("year")].filter(Boolean).join(" ");
 }

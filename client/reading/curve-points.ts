@@ -1,4 +1,9 @@
-import { type MonotonePiece, type TimeWindow, levelWithin, monotonePieces } from "../../shared/kinetics/monotone-pieces.ts";
+import {
+  levelWithin,
+  type MonotonePiece,
+  monotonePieces,
+  type TimeWindow,
+} from "../../shared/kinetics/monotone-pieces.ts";
 import type { Walk } from "../../shared/kinetics/walk.ts";
 
 /** One point of a curve: elapsed hours and mg/L. */
@@ -26,7 +31,8 @@ export function curvePoints(made: Walk, window: TimeWindow, widthPx: number): Cu
     points.push({ x: piece.fromH, y: piece.startMgPerL });
     pushInside(points, made, piece, pixelsPerH);
     const next = pieces[index + 1];
-    if (next === undefined || next.startMgPerL !== piece.endMgPerL) points.push({ x: piece.untilH, y: piece.endMgPerL });
+    if (next === undefined || next.startMgPerL !== piece.endMgPerL)
+      points.push({ x: piece.untilH, y: piece.endMgPerL });
   });
   return points.length > mostPointsPerPixel * widthPx ? thinned(points, window, pixelsPerH) : points;
 }

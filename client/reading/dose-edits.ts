@@ -3,7 +3,7 @@ import { counts } from "../../shared/contract/limits.ts";
 import type { DoseRecord, Instant, Order } from "../../shared/contract/schedule.ts";
 import { DomainError } from "../../shared/errors.ts";
 import { changedGive } from "../../shared/schedule/changed-give.ts";
-import { type DueTime, type PlanSpan, dueTimes } from "../../shared/schedule/order-times.ts";
+import { type DueTime, dueTimes, type PlanSpan } from "../../shared/schedule/order-times.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 
 /** What one dose is to become. What is left out stays as it is. */
@@ -24,12 +24,18 @@ type Exception = Order["exceptions"][number];
  * @throws {DomainError} if the dose is recorded as omitted, has no such thing, or its order has too many exceptions
  */
 export function editDose(schedule: Schedule, dose: ScheduledDose, change: DoseChange, span: PlanSpan): Schedule {
-  if (dose.status === "omitted") throw new DomainError("dose", "an omitted one", "a dose that is given: change its record first");
+  if (dose.status === "omitted")
+    throw new DomainError("dose", "an omitted one", "a dose that is given: change its record first");
   if (dose.extraId !== undefined) return withExtra(schedule, dose.extraId, change);
   if (dose.status !== "planned") return withRecord(schedule, dose, given(dose, change));
   return withOrder(schedule, dose, (order) =>
     order.when.kind === "once"
-      ? { ...order, give: changedGive(dose.give, amounts(change), "dose"), when: { kind: "once", at: change.at ?? dose.at }, exceptions: [] }
+      ? {
+          ...order,
+          give: changedGive(dose.give, amounts(change), "dose"),
+          when: { kind: "once", at: change.at ?? dose.at },
+          exceptions: [],
+        }
       : withException(order, dose.occurrence!, exceptionFor(order, dose, change, span)),
   );
 }
@@ -41,7 +47,8 @@ export function editDose(schedule: Schedule, dose: ScheduledDose, change: DoseCh
  * @throws {DomainError} if its order has too many exceptions
  */
 export function removeDose(schedule: Schedule, dose: ScheduledDose): Schedule {
-  if (dose.extraId !== undefined) return { ...schedule, extras: schedule.extras.filter(({ id }) => id !== dose.extraId) };
+  if (dose.extraId !== undefined)
+    return { ...schedule, extras: schedule.extras.filter(({ id }) => id !== dose.extraId) };
   if (dose.status === "omitted") return schedule;
   if (dose.status !== "planned") return withRecord(schedule, dose, { kind: "omitted" });
   const order = schedule.orders.find(({ id }) => id === dose.orderId);
@@ -52,7 +59,9 @@ export function removeDose(schedule: Schedule, dose: ScheduledDose): Schedule {
 
 function withExtra(schedule: Schedule, id: string, change: DoseChange): Schedule {
   const extras = schedule.extras.map((extra) =>
-    extra.id === id ? { ...extra, at: change.at ?? extra.at, give: changedGive(extra.give, amounts(change), "dose") } : extra,
+    extra.id === id
+      ? { ...extra, at: change.at ?? extra.at, give: changedGive(extra.give, amounts(change), "dose") }
+      : extra,
   );
   return { ...schedule, extras };
 }
@@ -83,8 +92,10 @@ function exceptionFor(order: Order, dose: ScheduledDose, change: DoseChange, spa
 }
 
 function differences(usualAt: Instant, usual: Order["give"], at: Instant, give: Order["give"]): DoseChange {
-  const amountMg = "amountMg" in give && "amountMg" in usual && give.amountMg !== usual.amountMg ? give.amountMg : undefined;
-  const durationH = "durationH" in give && "durationH" in usual && give.durationH !== usual.durationH ? give.durationH : undefined;
+  const amountMg =
+    "amountMg" in give && "amountMg" in usual && give.amountMg !== usual.amountMg ? give.amountMg : undefined;
+  const durationH =
+    "durationH" in give && "durationH" in usual && give.durationH !== usual.durationH ? give.durationH : undefined;
   return {
     ...(Date.parse(at) !== Date.parse(usualAt) && { at }),
     ...(amountMg !== undefined && { amountMg }),
@@ -94,9 +105,14 @@ function differences(usualAt: Instant, usual: Order["give"], at: Instant, give: 
 
 function withException(order: Order, occurrence: number, exception: Exception | undefined): Order {
   const others = order.exceptions.filter((each) => each.occurrence !== occurrence);
-  const exceptions = exception === undefined ? others : [...others, exception].sort((one, other) => one.occurrence - other.occurrence);
+  const exceptions =
+    exception === undefined ? others : [...others, exception].sort((one, other) => one.occurrence - other.occurrence);
   if (exceptions.length > counts.exceptionsPerOrder)
-    throw new DomainError("order", `${exceptions.length} doses planned otherwise`, `one with at most ${counts.exceptionsPerOrder} of them`);
+    throw new DomainError(
+      "order",
+      `${exceptions.length} doses planned otherwise`,
+      `one with at most ${counts.exceptionsPerOrder} of them`,
+    );
   return { ...order, exceptions };
 }
 

@@ -8,7 +8,8 @@ import { formatDose, formatDuration, formatHours } from "../../shared/units/form
 export function nameOfDose(dose: ScheduledDose, { orders }: Schedule): string {
   if (dose.orderId === undefined) return "extra dose";
   const index = orders.findIndex(({ id }) => id === dose.orderId);
-  if (orders[index]?.when.kind === "once") return orders.length === 1 ? "single dose" : `single dose of order ${index + 1}`;
+  if (orders[index]?.when.kind === "once")
+    return orders.length === 1 ? "single dose" : `single dose of order ${index + 1}`;
   const number = `dose ${(dose.occurrence ?? 0) + 1}`;
   return orders.length === 1 ? number : `${number} of order ${index + 1}`;
 }
@@ -27,10 +28,14 @@ export function sayStatus(dose: ScheduledDose, timeZone: string): string {
   if (dose.status === "as-planned") return "given as planned";
   if (dose.status === "omitted") return "omitted";
   if (dose.status === "extra") return "extra";
-  return dose.plannedAt === undefined ? "given otherwise" : `given otherwise, planned ${sayClock(dose.plannedAt, timeZone)}`;
+  return dose.plannedAt === undefined
+    ? "given otherwise"
+    : `given otherwise, planned ${sayClock(dose.plannedAt, timeZone)}`;
 }
 
 /** A dose in one line: "dose 3, 500 mg over 1 h, Mon 2 Mar 2026 08:00, planned". */
 export function sayDose(dose: ScheduledDose, schedule: Schedule, timeZone: string): string {
-  return [nameOfDose(dose, schedule), sayGiven(dose.give), sayClock(dose.at, timeZone), sayStatus(dose, timeZone)].join(", ");
+  return [nameOfDose(dose, schedule), sayGiven(dose.give), sayClock(dose.at, timeZone), sayStatus(dose, timeZone)].join(
+    ", ",
+  );
 }

@@ -1,4 +1,13 @@
-import { Chart, LineController, LineElement, LinearScale, LogarithmicScale, PointElement, type ChartDataset, type Plugin } from "chart.js";
+import {
+  Chart,
+  type ChartDataset,
+  LinearScale,
+  LineController,
+  LineElement,
+  LogarithmicScale,
+  type Plugin,
+  PointElement,
+} from "chart.js";
 import { formatLevel, formatQuantity } from "../../shared/units/format.ts";
 import { type CurvePicture, levelBounds } from "./curve-picture.ts";
 import { gutters } from "./plot-scale.ts";
@@ -21,7 +30,16 @@ export function createLevelChart(canvas: HTMLCanvasElement): LevelChart {
   const chart = new Chart<"line">(canvas, {
     type: "line",
     data: { datasets: [] },
-    plugins: [groundPlugin(() => picture, () => inks), marksPlugin(() => picture, () => inks)],
+    plugins: [
+      groundPlugin(
+        () => picture,
+        () => inks,
+      ),
+      marksPlugin(
+        () => picture,
+        () => inks,
+      ),
+    ],
     options: {
       animation: false,
       responsive: true,
@@ -168,7 +186,8 @@ function marksPlugin(pictureNow: () => CurvePicture | undefined, inksNow: () => 
       const inks = inksNow();
       if (picture === undefined) return;
       const xOf = (atH: number) => scales["x"]!.getPixelForValue(atH);
-      const yOf = (mgPerL: number) => Math.min(chartArea.bottom, Math.max(chartArea.top, scales["y"]!.getPixelForValue(mgPerL)));
+      const yOf = (mgPerL: number) =>
+        Math.min(chartArea.bottom, Math.max(chartArea.top, scales["y"]!.getPixelForValue(mgPerL)));
       const write = (text: string, x: number, y: number, ink: string, align: CanvasTextAlign) => {
         ctx.textAlign = align;
         ctx.strokeStyle = inks.of("--raised");
@@ -199,11 +218,18 @@ function marksPlugin(pictureNow: () => CurvePicture | undefined, inksNow: () => 
         if (mark.text === undefined) continue;
         const halfPx = ctx.measureText(mark.text).width / 2;
         const insideX = Math.min(chartArea.right - halfPx, Math.max(chartArea.left + halfPx, x));
-        write(mark.text, insideX, mark.kind === "peak" ? Math.max(chartArea.top + 4, y - 13) : Math.min(chartArea.bottom - 2, y + 22), inks.of("--ink"), "center");
+        write(
+          mark.text,
+          insideX,
+          mark.kind === "peak" ? Math.max(chartArea.top + 4, y - 13) : Math.min(chartArea.bottom - 2, y + 22),
+          inks.of("--ink"),
+          "center",
+        );
       }
       ctx.font = `bold 13px ${inks.font}`;
       ctx.textBaseline = "middle";
-      for (const { letter, y, colour } of lettersApart(picture, yOf)) write(letter, chartArea.right + 6, y, inks.of(colour), "left");
+      for (const { letter, y, colour } of lettersApart(picture, yOf))
+        write(letter, chartArea.right + 6, y, inks.of(colour), "left");
       ctx.restore();
     },
   };

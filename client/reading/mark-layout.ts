@@ -26,8 +26,20 @@ export function placeMarks(
     .map((dose) => ({ dose, xPx: pixelOf(dose.atH) }))
     .filter(({ dose, xPx }) => dose.key === heldKey || (xPx >= 0 && xPx <= plotPx))
     .sort((one, other) => one.xPx - other.xPx);
-  const held = inView.filter(({ dose }) => dose.key === heldKey).map((each): PlacedMark => ({ kind: "dose", ...each, row: 0 }));
+  const held = inView
+    .filter(({ dose }) => dose.key === heldKey)
+    .map((each): PlacedMark => ({ kind: "dose", ...each, row: 0 }));
   return [...runsOf(inView.filter(({ dose }) => dose.key !== heldKey)).flatMap(placeRun), ...held];
+}
+
+/** Names a mark as long as it stays what it is. */
+export function keyOfMark(mark: PlacedMark): string {
+  return mark.kind === "dose" ? mark.dose.key : `bunch ${mark.doses[0]!.key}`;
+}
+
+/** Id of a mark's element: keys hold signs that ids should not. */
+export function markId(key: string): string {
+  return `mark-${key.replace(/[^A-Za-z0-9]/g, "-")}`;
 }
 
 interface Mark {
@@ -50,7 +62,9 @@ function placeRun(run: readonly Mark[]): PlacedMark[] {
   const placed: PlacedMark[] = [];
   const lastPx: number[] = [];
   for (const mark of run) {
-    const row = Array.from({ length: mostRows }, (_, index) => index).find((index) => mark.xPx - (lastPx[index] ?? -Infinity) >= markPx);
+    const row = Array.from({ length: mostRows }, (_, index) => index).find(
+      (index) => mark.xPx - (lastPx[index] ?? -Infinity) >= markPx,
+    );
     if (row === undefined) return bunched(run);
     lastPx[row] = mark.xPx;
     placed.push({ kind: "dose", ...mark, row });

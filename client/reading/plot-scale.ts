@@ -20,7 +20,7 @@ export function hourAt(pixel: number, window: TimeWindow, plotPx: number): numbe
 export function windowWithin(window: TimeWindow, horizonH: number): TimeWindow {
   const lengthH = Math.min(horizonH, Math.max(Math.min(narrowestH, horizonH), window.toH - window.fromH));
   const fromH = Math.min(Math.max(0, window.fromH), horizonH - lengthH);
-  return { fromH, toH: fromH + lengthH >= horizonH ? horizonH : fromH + lengthH };
+  return { fromH, toH: Math.min(horizonH, fromH + lengthH) };
 }
 
 /** The window made `times` as wide; what stands at `aroundH` keeps its place. */

@@ -25,11 +25,19 @@ export function snappedH(atH: number, step: SnapStep, span: ClockSpan): number {
 }
 
 /** The next multiple of the step in one direction; with "larger", four steps on. */
-export function steppedH(atH: number, direction: -1 | 1, step: SnapStep, size: "usual" | "larger", span: ClockSpan): number {
+export function steppedH(
+  atH: number,
+  direction: -1 | 1,
+  step: SnapStep,
+  size: "usual" | "larger",
+  span: ClockSpan,
+): number {
   const minutes = minutesOf(step);
   const times = size === "larger" ? largerBy : 1;
   return fromLocal(atH, span, (localMin) =>
-    direction > 0 ? (Math.floor(localMin / minutes) + times) * minutes : (Math.ceil(localMin / minutes) - times) * minutes,
+    direction > 0
+      ? (Math.floor(localMin / minutes) + times) * minutes
+      : (Math.ceil(localMin / minutes) - times) * minutes,
   );
 }
 

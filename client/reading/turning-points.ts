@@ -1,4 +1,4 @@
-import { type TimeWindow, monotonePieces } from "../../shared/kinetics/monotone-pieces.ts";
+import { monotonePieces, type TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
 import type { Walk } from "../../shared/kinetics/walk.ts";
 
 /** A level at which the curve turns. At a bolus the trough is the value just before it, the peak that just after. */
@@ -42,7 +42,13 @@ export function pointsToMark(points: readonly TurningPoint[], room: number): rea
 export function outermost(points: readonly TurningPoint[]): TurningPoint[] {
   const peaks = points.filter(({ kind }) => kind === "peak");
   const troughs = points.filter(({ kind }) => kind === "trough");
-  const highest = peaks.reduce<TurningPoint | undefined>((best, each) => (best && best.mgPerL >= each.mgPerL ? best : each), undefined);
-  const lowest = troughs.reduce<TurningPoint | undefined>((best, each) => (best && best.mgPerL <= each.mgPerL ? best : each), undefined);
+  const highest = peaks.reduce<TurningPoint | undefined>(
+    (best, each) => (best && best.mgPerL >= each.mgPerL ? best : each),
+    undefined,
+  );
+  const lowest = troughs.reduce<TurningPoint | undefined>(
+    (best, each) => (best && best.mgPerL <= each.mgPerL ? best : each),
+    undefined,
+  );
   return [highest, lowest].filter((point) => point !== undefined);
 }

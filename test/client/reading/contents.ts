@@ -24,4 +24,8 @@ export const everyTwelve = {
   when: { kind: "every", from: "2026-03-02T08:00:00Z", intervalH: 12, end: { kind: "open" } },
 };
 
-export const onceAtNoon = { id: "o2", give: { kind: "bolus", amountMg: 750 }, when: { kind: "once", at: "2026-03-02T12:00:00Z" } };
+export const onceAtNoon = {
+  id: "o2",
+  give: { kind: "bolus", amountMg: 750 },
+  when: { kind: "once", at: "2026-03-02T12:00:00Z" },
+};

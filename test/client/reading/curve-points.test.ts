@@ -1,8 +1,8 @@
 import { describe, expect, test } from "vitest";
 import { curvePoints } from "../../../client/reading/curve-points.ts";
 import { outermost, turningPoints } from "../../../client/reading/turning-points.ts";
-import { levelsAt } from "../../../shared/kinetics/levels.ts";
 import { courseOf } from "../../../shared/kinetics/course.ts";
+import { levelsAt } from "../../../shared/kinetics/levels.ts";
 import { walk } from "../../../shared/kinetics/walk.ts";
 
 const parameters = { volumeL: 50, halfLifeH: 6, bioavailability: 1, saltFactor: 1 };
@@ -31,12 +31,19 @@ describe("curvePoints", () => {
     expect(points.map(({ x }) => x)).toEqual(expect.arrayContaining([12, 12.5, 24]));
     expect(points.every(({ x }, index) => index === 0 || x >= points[index - 1]!.x)).toBe(true);
     const smooth = points.filter(({ x }) => x !== 6 && x !== 0);
-    const levels = levelsAt(made, smooth.map(({ x }) => x));
+    const levels = levelsAt(
+      made,
+      smooth.map(({ x }) => x),
+    );
     for (const [index, { y }] of smooth.entries()) expect(Math.abs(y - levels[index]!)).toBeLessThan(1e-12 * 25);
   });
 
   test("is no denser than four points a pixel, and loses no peak, where doses are denser than pixels", () => {
-    const doses = Array.from({ length: 2_000 }, (_, index) => ({ kind: "bolus" as const, atH: index, amountMg: index === 777 ? 900 : 50 }));
+    const doses = Array.from({ length: 2_000 }, (_, index) => ({
+      kind: "bolus" as const,
+      atH: index,
+      amountMg: index === 777 ? 900 : 50,
+    }));
     const dense = walk(courseOf({ parameters, doses, horizonH: 2_000 }));
     const drawn = curvePoints(dense, { fromH: 0, toH: 2_000 }, 200);
     expect(drawn.length).toBeLessThanOrEqual(800);

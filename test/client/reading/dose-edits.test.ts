@@ -11,7 +11,11 @@ const extra = { id: "x1", at: "2026-03-03T02:00:00Z", give: { kind: "bolus", amo
 
 function opened(schedule: object) {
   const content = contentWith(schedule);
-  return { schedule: content.schedule, span: spanOf(content), dose: (key: string) => givenDoses(content).find((each) => each.key === key)! };
+  return {
+    schedule: content.schedule,
+    span: spanOf(content),
+    dose: (key: string) => givenDoses(content).find((each) => each.key === key)!,
+  };
 }
 
 /** What the edited schedule says of one dose, after it has passed the contract. */
@@ -29,28 +33,51 @@ describe("editDose", () => {
   });
 
   test("needs no exception for a dose that is put back where it belongs", () => {
-    const { schedule, span, dose } = opened({ orders: [{ ...everyTwelve, exceptions: [{ occurrence: 1, at: later }] }] });
-    expect(editDose(schedule, dose("o1#1"), { at: "2026-03-02T20:00:00+00:00" }, span).orders[0]!.exceptions).toEqual([]);
+    const { schedule, span, dose } = opened({
+      orders: [{ ...everyTwelve, exceptions: [{ occurrence: 1, at: later }] }],
+    });
+    expect(editDose(schedule, dose("o1#1"), { at: "2026-03-02T20:00:00+00:00" }, span).orders[0]!.exceptions).toEqual(
+      [],
+    );
   });
 
   test("keeps another amount when the dose is moved, and the other exceptions", () => {
-    const exceptions = [{ occurrence: 1, amountMg: 250 }, { occurrence: 3, skip: true }];
+    const exceptions = [
+      { occurrence: 1, amountMg: 250 },
+      { occurrence: 3, skip: true },
+    ];
     const { schedule, span, dose } = opened({ orders: [{ ...everyTwelve, exceptions }] });
     const edited = editDose(schedule, dose("o1#1"), { at: later }, span);
-    expect(edited.orders[0]!.exceptions).toEqual([{ occurrence: 1, at: later, amountMg: 250 }, { occurrence: 3, skip: true }]);
+    expect(edited.orders[0]!.exceptions).toEqual([
+      { occurrence: 1, at: later, amountMg: 250 },
+      { occurrence: 3, skip: true },
+    ]);
   });
 
   test("compares with the amount of its clock time, not with that of the order", () => {
-    const when = { kind: "clock-times", from: "2026-03-02T08:00:00Z", times: [{ time: "08:00", amountMg: 1000 }, { time: "20:00" }], end: { kind: "open" } };
+    const when = {
+      kind: "clock-times",
+      from: "2026-03-02T08:00:00Z",
+      times: [{ time: "08:00", amountMg: 1000 }, { time: "20:00" }],
+      end: { kind: "open" },
+    };
     const { schedule, span, dose } = opened({ orders: [{ ...everyTwelve, when }] });
     expect(editDose(schedule, dose("o1#0"), { amountMg: 1000 }, span).orders[0]!.exceptions).toEqual([]);
-    expect(editDose(schedule, dose("o1#0"), { amountMg: 500 }, span).orders[0]!.exceptions).toEqual([{ occurrence: 0, amountMg: 500 }]);
+    expect(editDose(schedule, dose("o1#0"), { amountMg: 500 }, span).orders[0]!.exceptions).toEqual([
+      { occurrence: 0, amountMg: 500 },
+    ]);
   });
 
   test("changes a dose that is ordered once itself", () => {
-    const { schedule, span, dose } = opened({ orders: [everyTwelve, { ...onceAtNoon, exceptions: [{ occurrence: 0, amountMg: 600 }] }] });
+    const { schedule, span, dose } = opened({
+      orders: [everyTwelve, { ...onceAtNoon, exceptions: [{ occurrence: 0, amountMg: 600 }] }],
+    });
     const edited = editDose(schedule, dose("o2#0"), { at: later }, span);
-    expect(edited.orders[1]).toMatchObject({ when: { kind: "once", at: later }, give: { amountMg: 600 }, exceptions: [] });
+    expect(edited.orders[1]).toMatchObject({
+      when: { kind: "once", at: later },
+      give: { amountMg: 600 },
+      exceptions: [],
+    });
     expect(edited.orders[0]).toBe(schedule.orders[0]);
   });
 
@@ -65,7 +92,9 @@ describe("editDose", () => {
     const records = [{ orderId: "o1", occurrence: 1, outcome: { kind: "as-planned" }, note: "seen" }];
     const { schedule, span, dose } = opened({ orders: [everyTwelve], records });
     const edited = editDose(schedule, dose("o1#1"), { at: later }, span);
-    expect(edited.records).toEqual([{ orderId: "o1", occurrence: 1, outcome: { kind: "changed", at: later }, note: "seen" }]);
+    expect(edited.records).toEqual([
+      { orderId: "o1", occurrence: 1, outcome: { kind: "changed", at: later }, note: "seen" },
+    ]);
     expect(edited.orders).toEqual(schedule.orders);
     expect(reread(edited, "o1#1")).toMatchObject({ atH: 13.5, plannedAtH: 12, status: "changed" });
   });
@@ -73,7 +102,9 @@ describe("editDose", () => {
   test("records a dose that is moved back to its plan as given as planned", () => {
     const records = [{ orderId: "o1", occurrence: 1, outcome: { kind: "changed", at: later } }];
     const { schedule, span, dose } = opened({ orders: [everyTwelve], records });
-    expect(editDose(schedule, dose("o1#1"), { at: "2026-03-02T20:00:00+00:00" }, span).records[0]!.outcome).toEqual({ kind: "as-planned" });
+    expect(editDose(schedule, dose("o1#1"), { at: "2026-03-02T20:00:00+00:00" }, span).records[0]!.outcome).toEqual({
+      kind: "as-planned",
+    });
   });
 
   test("refuses to move what was omitted, and a duration for a bolus", () => {

@@ -56,7 +56,13 @@ describe("clockTicks", () => {
 
   test("leave out the hour that a day in spring does not have and show twice the one that comes twice in autumn", () => {
     const spring = { start: "2026-03-29T00:00:00Z", horizonH: 6, timeZone: "Europe/London" };
-    expect(clockTicks(spring, { fromH: 0, toH: 4 }, 400).ticks.map(({ text }) => text)).toEqual(["00:00", "02:00", "03:00", "04:00", "05:00"]);
+    expect(clockTicks(spring, { fromH: 0, toH: 4 }, 400).ticks.map(({ text }) => text)).toEqual([
+      "00:00",
+      "02:00",
+      "03:00",
+      "04:00",
+      "05:00",
+    ]);
     const autumn = { start: "2026-10-25T00:00:00+01:00", horizonH: 6, timeZone: "Europe/London" };
     expect(clockTicks(autumn, { fromH: 0, toH: 3 }, 300).ticks.map(({ text, atH }) => `${text} ${atH}`)).toEqual([
       "00:00 0",
@@ -78,7 +84,12 @@ describe("clockTicks", () => {
 describe("placeMarks", () => {
   const dose = (key: string, atH: number) => ({ key, atH }) as ScheduledDose;
   const place = (hours: readonly number[], heldKey?: string) =>
-    placeMarks(hours.map((atH, index) => dose(`d${index}`, atH)), (atH) => atH, 1_000, heldKey);
+    placeMarks(
+      hours.map((atH, index) => dose(`d${index}`, atH)),
+      (atH) => atH,
+      1_000,
+      heldKey,
+    );
 
   test("keeps one row while there is room, then uses up to three", () => {
     expect(place([0, 30, 60]).map(({ row }) => row)).toEqual([0, 0, 0]);

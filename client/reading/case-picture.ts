@@ -1,0 +1,71 @@
+import type { RegimenContent } from "../../shared/contract/case.ts";
+import type { RangeMgPerL } from "../../shared/contract/dose.ts";
+import type { TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
+import type { Walk } from "../../shared/kinetics/walk.ts";
+import { formatLevel } from "../../shared/units/format.ts";
+import { lookAt } from "./alternative-look.ts";
+import type { CurvePicture, LevelScale, PictureLine, PictureMark } from "./curve-picture.ts";
+import { type CurvePoint, curvePoints } from "./curve-points.ts";
+import { predictionOf } from "./predictions.ts";
+import { outermost, pointsToMark, type TurningPoint, turningPoints } from "./turning-points.ts";
+
+export interface CasePictureInput {
+  /** In the order of the case: its place gives each alternative its look. */
+  readonly contents: ReadonlyMap<string, RegimenContent>;
+  readonly selectedKey: string | undefined;
+  readonly window: TimeWindow;
+  readonly plotPx: number;
+  readonly scale: LevelScale;
+  readonly gridH: readonly number[];
+  readonly range: RangeMgPerL | undefined;
+}
+
+const pixelsPerMark = 40;
+
+/** The curves of all alternatives; the selected one is thicker and lies on top, a plan that was not followed is thin. */
+export function pictureOf(input: CasePictureInput): CurvePicture {
+  const { contents, selectedKey, window, plotPx, scale, gridH, range } = input;
+  const lines: PictureLine[] = [];
+  const marks: PictureMark[] = [];
+  const inOrder = [...contents].map(([key, content], place) => ({
+    content,
+    selected: key === selectedKey,
+    look: lookAt(place),
+  }));
+  for (const { content, selected, look } of [
+    ...inOrder.filter((each) => !each.selected),
+    ...inOrder.filter((each) => each.selected),
+  ]) {
+    const prediction = predictionOf(content);
+    if (!prediction.ok) continue;
+    const { colour, dash, letter } = look;
+    if (prediction.planned)
+      lines.push({ points: drawn(prediction.planned.made, window, plotPx).points, colour, dash, widthPx: 1 });
+    const { points, turns } = drawn(prediction.given.made, window, plotPx);
+    lines.push({ points, colour, dash, widthPx: selected ? 2.75 : 1.75, letter });
+    const named = outermost(turns);
+    for (const turn of selected ? pointsToMark(turns, plotPx / pixelsPerMark) : named) {
+      const text = selected && named.includes(turn) && { text: `${turn.kind} ${formatLevel(turn.mgPerL)}` };
+      marks.push({ kind: turn.kind, x: turn.atH, y: turn.mgPerL, colour, ...text });
+    }
+  }
+  return { window, scale, lines, marks, gridH, ...(range !== undefined && { range }) };
+}
+
+interface Drawn {
+  readonly window: TimeWindow;
+  readonly plotPx: number;
+  readonly points: readonly CurvePoint[];
+  readonly turns: readonly TurningPoint[];
+}
+
+const known = new WeakMap<Walk, Drawn>();
+
+/** Remembered by walk, so that moving a dose of one alternative draws the others from what is there. */
+function drawn(made: Walk, window: TimeWindow, plotPx: number): Drawn {
+  const found = known.get(made);
+  if (found?.window === window && found.plotPx === plotPx) return found;
+  const fresh = { window, plotPx, points: curvePoints(made, window, plotPx), turns: turningPoints(made, window) };
+  known.set(made, fresh);
+  return fresh;
+}

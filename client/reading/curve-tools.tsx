@@ -1,0 +1,60 @@
+import { ChoiceField } from "../controls/choice-field.tsx";
+import { SelectField } from "../controls/select-field.tsx";
+import type { LevelScale } from "./curve-picture.ts";
+import type { CurveView } from "./curve-view.ts";
+import { type SnapStep, snapSteps } from "./snap.ts";
+
+const scales: readonly { readonly value: LevelScale; readonly label: string }[] = [
+  { value: "linear", label: "linear" },
+  { value: "logarithmic", label: "logarithmic" },
+];
+
+/** What part of the plan is in view, on which axis, and how finely doses and the cursor move. */
+export function CurveTools({ view }: { view: CurveView }) {
+  const { fromH, toH } = view.window.value;
+  const horizonH = view.span.value?.horizonH ?? toH;
+  const whole = fromH <= 0 && toH >= horizonH;
+  const stepH = (toH - fromH) / 3;
+  return (
+    <div class="curve-tools">
+      <div class="button-row" role="group" aria-label="Part of the plan in view">
+        <button type="button" class="button" onClick={() => view.zoom(0.5)}>
+          Closer
+        </button>
+        <button type="button" class="button" disabled={whole} onClick={() => view.zoom(2)}>
+          Wider
+        </button>
+        <button type="button" class="button" disabled={fromH <= 0} onClick={() => view.pan(-stepH)}>
+          ← Earlier
+        </button>
+        <button type="button" class="button" disabled={toH >= horizonH} onClick={() => view.pan(stepH)}>
+          Later →
+        </button>
+        <button type="button" class="button" disabled={whole} onClick={() => view.show(undefined)}>
+          Whole plan
+        </button>
+      </div>
+      <ChoiceField
+        id="level-scale"
+        legend="Level axis"
+        value={view.scale.value}
+        choices={scales}
+        onChoice={(scale) => {
+          view.scale.value = scale;
+        }}
+      />
+      <SelectField
+        id="snap-step"
+        label="Times move in steps of"
+        value={view.snap.value}
+        choices={snapSteps.map((value) => ({
+          value,
+          label: value === "free" ? "free: to the minute" : `${value}\u00a0min`,
+        }))}
+        onChoice={(value) => {
+          view.snap.value = value as SnapStep;
+        }}
+      />
+    </div>
+  );
+}
