@@ -1,8 +1,8 @@
 import type { Give } from "../../shared/contract/schedule.ts";
-import { readPumpLog } from "../../shared/schedule/pump-log.ts";
 import { type Draft, textIn } from "../case/drafts.ts";
 import { plainText } from "../case/form-of-setting.ts";
 import { readLimited } from "../controls/read-field.ts";
+import { pumpLogReader } from "./pump-log-reader.ts";
 
 export type GiveKind = Give["kind"];
 
@@ -48,7 +48,12 @@ export function draftOfGive(give: Give): Draft {
 }
 
 function readPump(draft: Draft, timeZone: string, startsAt: string, problems: Record<string, string>): Give | undefined {
-  const log = readPumpLog(textIn(draft, "pump"), { timeZone, startsAt });
+  const read = pumpLogReader();
+  if (read === undefined) {
+    problems["pump"] = "Pump log cannot be read yet: the page is still fetching its reader. Apply again in a moment";
+    return undefined;
+  }
+  const log = read(textIn(draft, "pump"), { timeZone, startsAt });
   if (log.ok) return { kind: "pump", steps: [...log.steps] };
   const shown = log.problems.slice(0, 5).map(({ line, detail }) => `line ${line}: ${detail}`);
   const rest = log.problems.length - shown.length;

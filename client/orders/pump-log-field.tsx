@@ -1,5 +1,7 @@
 import { useSignal } from "@preact/signals";
+import { useEffect } from "preact/hooks";
 import { TextField } from "../controls/text-field.tsx";
+import { loadPumpLogReader } from "./pump-log-reader.ts";
 
 interface PumpLogFieldProps {
   readonly id: string;
@@ -11,6 +13,7 @@ interface PumpLogFieldProps {
 /** A pump's log: typed, pasted from a table, or read from a CSV file. It is read when the order is applied. */
 export function PumpLogField({ id, text, problem, onText }: PumpLogFieldProps) {
   const unread = useSignal<string | undefined>(undefined);
+  useEffect(() => void loadPumpLogReader(), []);
   const take = async (file: File | undefined) => {
     if (file === undefined) return;
     const read = await readText(file);

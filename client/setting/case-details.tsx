@@ -1,5 +1,6 @@
 import { useComputed } from "@preact/signals";
 import type { CasePage } from "../case/case-page.ts";
+import { PageContents } from "../case/page-contents.tsx";
 import { textIn } from "../case/drafts.ts";
 import { TimeZoneField, timeZoneProblem } from "../cases/time-zone-field.tsx";
 import { momentText, readMoment } from "../controls/moment.ts";
@@ -24,6 +25,7 @@ export function CaseDetails({ page }: { page: CasePage }) {
     <section class="case-title" aria-label="Case">
       <h1>{label || "Case without a label"}</h1>
       {page.stored.value.case.archived && <p class="missing">This case is archived. It can be brought back from the list of cases.</p>}
+      <PageContents />
       <div class="fields">
         <TextField
           id="case-label"

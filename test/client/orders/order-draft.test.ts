@@ -1,8 +1,11 @@
-import { describe, expect, test } from "vitest";
+import { beforeAll, describe, expect, test } from "vitest";
 import { draftOfOrder, readOrderDraft } from "../../../client/orders/order-draft.ts";
+import { loadPumpLogReader } from "../../../client/orders/pump-log-reader.ts";
 import { Order } from "../../../shared/contract/schedule.ts";
 
 const zone = "Europe/London";
+beforeAll(loadPumpLogReader);
+
 const kept = { id: "one", exceptions: [] };
 
 /** Amounts and times are invented. */
