@@ -8,10 +8,12 @@ import { only } from "./methods.ts";
  */
 export function clientFiles(folder: string): Router {
   const router = Router();
-  const page = join(folder, "index.html");
   router
     .route(["/", "/cases/:caseId"])
-    .get((_request, response) => response.sendFile(page, { cacheControl: false, etag: false, lastModified: false }))
+    // With a root, so that a folder of the path above it may begin with a dot, as .build does.
+    .get((_request, response) =>
+      response.sendFile("index.html", { root: folder, cacheControl: false, etag: false, lastModified: false }),
+    )
     .all(only("GET"));
   router.use(
     express.static(folder, {

@@ -7,7 +7,8 @@ import { afterAll, describe, expect, test } from "vitest";
 import { makeApp } from "./support/make-app.ts";
 
 const above = mkdtempSync(join(tmpdir(), "ebbline-client-"));
-const clientFolder = join(above, "client");
+// As .build/client, which lies in a folder whose name begins with a dot.
+const clientFolder = join(above, ".built", "client");
 mkdirSync(join(clientFolder, "assets"), { recursive: true });
 writeFileSync(join(above, "secret.txt"), "secret");
 writeFileSync(join(clientFolder, ".env"), "secret");
