@@ -3,6 +3,7 @@ import { cautionsForContent } from "../../shared/cautions/gather.ts";
 import { standingCaution } from "../../shared/cautions/standing.ts";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { Caution } from "../../shared/contract/caution.ts";
+import { sayClock } from "../../shared/schedule/clock.ts";
 import { DomainError } from "../../shared/errors.ts";
 import type { WholeCase } from "../http/cases-api.ts";
 import { type Alternative, type CaseDocument, contentOf } from "./case-document.ts";
@@ -112,9 +113,14 @@ export function judge(content: RegimenContent | undefined): Judged {
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;
     const got = error.value === undefined ? "" : `, got ${String(error.value)}`;
-    const detail = `must be ${error.allowed}${got}`;
+    const detail = withClock(`must be ${error.allowed}${got}`, content.timeZone);
     return { cautions: [standingCaution], problem: { field: error.field, detail } };
   }
+}
+
+/** Instants in an error as a person reads them. */
+function withClock(text: string, timeZone: string): string {
+  return text.replace(/\d{4}-\d\d-\d\dT[\d:.]+(?:Z|[+-]\d\d:\d\d)/g, (instant) => sayClock(instant, timeZone));
 }
 
 function selectedIn({ alternatives }: CaseDocument, key: string | undefined): Alternative | undefined {

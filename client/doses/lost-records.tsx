@@ -35,7 +35,7 @@ export function LostRecords({ page, alternative, lost }: LostRecordsProps) {
                   focusOn("doses-title");
                 }}
               >
-                Take the record out<span class="unseen">, {name}</span>
+                Take the record out<span class="unseen"> of {name}</span>
               </button>
             </li>
           );

@@ -32,11 +32,11 @@ export function TakeUp({ page, revision, onTaken }: TakeUpProps) {
   return (
     <span class="button-row">
       <button type="button" class="button" onClick={() => takeUp("orders")}>
-        Take up {sameSetting ? "" : "its orders "}again<span class="unseen">, revision {number}</span>
+        Take up {sameSetting ? "" : "its orders "}again<span class="unseen"> revision {number}</span>
       </button>
       {!sameSetting && (
         <button type="button" class="button" onClick={() => takeUp("everything")}>
-          Take up with its kinetics and plan, for all alternatives<span class="unseen">, revision {number}</span>
+          Take up with its kinetics and plan, for all alternatives<span class="unseen"> revision {number}</span>
         </button>
       )}
     </span>
