@@ -60,7 +60,9 @@ export function levelsEvery(made: Walk, everyH: number): Float64Array {
 
 /** The grid that `levelsEvery` answers on. */
 export function gridTimesH(horizonH: number, everyH: number): Float64Array {
-  return Float64Array.from({ length: pointsUpTo(horizonH, everyH) }, (_, point) => point * everyH);
+  const timesH = new Float64Array(pointsUpTo(horizonH, everyH));
+  for (let point = 0; point < timesH.length; point++) timesH[point] = point * everyH;
+  return timesH;
 }
 
 function pointsUpTo(horizonH: number, everyH: number): number {
