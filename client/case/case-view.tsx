@@ -2,7 +2,7 @@ import { effect, useSignal } from "@preact/signals";
 import { useEffect } from "preact/hooks";
 import { AlternativesPart } from "../alternatives/alternatives-part.tsx";
 import { DosesPart } from "../doses/doses-part.tsx";
-import { keepWhileOpen } from "../keeping/keep-while-open.ts";
+import { type Keeping, keepWhileOpen } from "../keeping/keep-while-open.ts";
 import { OrdersPart } from "../orders/orders-part.tsx";
 import { ArithmeticSection } from "../reading/arithmetic-section.tsx";
 import { CurveSection } from "../reading/curve-section.tsx";
@@ -31,8 +31,8 @@ function clearRefusals({ model, drafts, refused }: CasePage): () => void {
 /** One case, read from top to bottom as the question is asked. */
 export function CaseView({ page }: { page: CasePage }) {
   const { model } = page;
-  const kept = useSignal(true);
-  useEffect(() => keepWhileOpen(page, kept), [page]);
+  const keeping = useSignal<Keeping>("kept");
+  useEffect(() => keepWhileOpen(page, keeping), [page]);
   useEffect(() => model.lastChange.subscribe(announce), [page]);
   useEffect(() => clearRefusals(page), [page]);
   useUndoKeys(model);
@@ -42,7 +42,7 @@ export function CaseView({ page }: { page: CasePage }) {
     document.title = `${label} - Ebbline`;
   }, [label]);
   return (
-    <PageFrame cautions={page.judged.value.cautions} tools={<CaseTools page={page} kept={kept.value} />}>
+    <PageFrame cautions={page.judged.value.cautions} tools={<CaseTools page={page} keeping={keeping.value} />}>
       <CaseDetails page={page} />
       <SettingPart page={page} />
       <ChangesPart page={page} />

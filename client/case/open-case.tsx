@@ -7,6 +7,7 @@ import { dropKept, keptName, readKept } from "../keeping/kept-text.ts";
 import type { KeptWork } from "../keeping/unsaved-form.ts";
 import { UnsavedOffer } from "../keeping/unsaved-offer.tsx";
 import { FailureNote } from "../shell/failure-note.tsx";
+import { focusOn } from "../shell/focus.ts";
 import { PageFrame } from "../shell/page-frame.tsx";
 import { type CasePage, createCasePage, hasUnsaved } from "./case-page.ts";
 import { CaseView } from "./case-view.tsx";
@@ -29,11 +30,18 @@ export function OpenCase({ id }: { id: string }) {
   if (now.step === "open") return <CaseView page={now.page} />;
   const open = (page: CasePage) => {
     opening.value = { step: "open", page };
+    // The button that was pressed is gone.
+    focusOn("main");
   };
   return (
     <PageFrame cautions={[standingCaution]}>
-      {now.step === "loading" && <p role="status">Loading the case …</p>}
-      {now.step === "failed" && <FailureNote failure={now.failure} onRetry={load} />}
+      {now.step === "loading" && <h1 class="loading">Loading the case …</h1>}
+      {now.step === "failed" && (
+        <>
+          <h1>The case could not be opened</h1>
+          <FailureNote failure={now.failure} onRetry={load} />
+        </>
+      )}
       {now.step === "offer" && (
         <UnsavedOffer
           whole={now.whole}

@@ -12,7 +12,7 @@ interface FailureNoteProps {
 export function FailureNote({ failure, onRetry, fieldOf }: FailureNoteProps) {
   return (
     <div class="failure" role="alert">
-      <h3>{failure.title}</h3>
+      <p class="failure-title">{failure.title}</p>
       {failure.detail && <p>{failure.detail}</p>}
       {failure.errors.length > 0 && (
         <ul>
