@@ -20,7 +20,7 @@ import "./curve-section.css";
 /** Curves of all alternatives above a ruler of real clock time, on one axis. */
 export function CurveSection({ model }: { model: CaseModel }) {
   const view = useMemo(() => createCurveView(model), [model]);
-  const computable = view.span.value !== undefined && view.contents.value.size > 0;
+  const computable = view.span.value !== undefined && view.keys.value !== "";
   return (
     <section class="part" aria-labelledby="curve-title">
       <h2 id="curve-title">Levels over time, and the doses</h2>

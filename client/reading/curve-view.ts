@@ -24,6 +24,8 @@ export interface CurveView {
   readonly hand: DoseHand;
   /** The contents of the case, with the dose in hand where the hand holds it. */
   readonly contents: ReadonlySignal<ReadonlyMap<string, RegimenContent>>;
+  /** Keys of what can be drawn, one a line: a text, so that it changes only when they do. */
+  readonly keys: ReadonlySignal<string>;
   readonly ticks: ReadonlySignal<ClockTicks>;
   readonly picture: ReadonlySignal<CurvePicture | undefined>;
   /** The dose whose editor is open. */
@@ -66,6 +68,7 @@ export function createCurveView(model: CaseModel): CurveView {
     cursorH,
     hand,
     contents,
+    keys: computed(() => [...contents.value.keys()].join("\n")),
     ticks,
     picture: computed(() =>
       span.value === undefined
@@ -111,12 +114,10 @@ export function followCursor(view: CurveView): void {
   if (next !== now) view.show(next);
 }
 
-/** Only the alternative in hand gets a new content; once the page has caught up, the page's own is used. */
+/** Only the alternative in hand gets another content. */
 function withHeld(
   contents: ReadonlyMap<string, RegimenContent>,
   held: DoseHand["held"]["value"],
 ): ReadonlyMap<string, RegimenContent> {
-  const content = held && contents.get(held.key);
-  if (held === undefined || content === undefined || content.schedule === held.schedule) return contents;
-  return new Map(contents).set(held.key, { ...content, schedule: held.schedule });
+  return held !== undefined && contents.has(held.key) ? new Map(contents).set(held.key, held.content) : contents;
 }

@@ -8,22 +8,21 @@ import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { newId } from "../case/new-id.ts";
 import { type DoseChange, editDose, removeDose } from "./dose-edits.ts";
-import { nameOfDose } from "./dose-words.ts";
-import { sayRefusal } from "./predictions.ts";
-import { withinPlan } from "./snap.ts";
+import { capital, nameOfDose } from "./dose-words.ts";
+import { type Moved, movedPrediction } from "./moved-prediction.ts";
+import { predictionOf, rememberPrediction, sayRefusal } from "./predictions.ts";
+import { type Clamped, withinPlan } from "./snap.ts";
 
 /** How long the hand must rest before the page around the curve follows: sooner, each figure would cost a frame. */
 const restMs = 150;
 
-/** A dose while it is being dragged, and the schedule it would make. */
-export interface Held {
+/** A dose in the hand, and the content as it would be if it were dropped here. */
+export interface Held extends Moved {
   readonly key: string;
-  readonly doseKey: string;
-  readonly schedule: Schedule;
-  readonly atH: number;
+  readonly content: RegimenContent;
 }
 
-/** The hand that moves doses. What it does is one undo step, however far it goes. */
+/** The hand that moves doses. From taking to dropping is one undo step, however far it goes. */
 export interface DoseHand {
   readonly held: ReadonlySignal<Held | undefined>;
   /** What the newest move, edit or refusal was, for the line below the ruler. */
@@ -33,8 +32,8 @@ export interface DoseHand {
   drop(): void;
   /** Puts the dose back where it was taken. */
   putBack(): void;
-  /** Changes a dose at once; with the same `merge` text, consecutive changes are one undo step. */
-  edit(key: string, dose: ScheduledDose, change: DoseChange, merge?: string): void;
+  /** Changes a dose at once. */
+  edit(key: string, dose: ScheduledDose, change: DoseChange): void;
   remove(key: string, dose: ScheduledDose): void;
 }
 
@@ -43,7 +42,8 @@ interface Grip {
   readonly dose: ScheduledDose;
   readonly content: RegimenContent;
   readonly merge: string;
-  written: boolean;
+  why?: string | undefined;
+  written?: Held;
 }
 
 export function createDoseHand(model: CaseModel): DoseHand {
@@ -51,26 +51,7 @@ export function createDoseHand(model: CaseModel): DoseHand {
   const said = signal("");
   let grip: Grip | undefined;
   let resting: ReturnType<typeof setTimeout> | undefined;
-  let why = "";
 
-  const write = (key: string, content: RegimenContent, what: string, schedule: Schedule, merge?: string) => {
-    const sentence = `${what} of alternative ${letterOf(model.document.peek(), key)}${why && `. ${why}`}`;
-    said.value = sentence;
-    if (schedule !== content.schedule)
-      model.change(sentence, (document) => withSchedule(document, key, () => schedule), merge);
-  };
-  const writeHeld = () => {
-    const now = held.peek();
-    if (grip === undefined || now === undefined) return;
-    grip.written = true;
-    write(grip.key, grip.content, sayMoved(grip.dose, now.atH, grip.content), now.schedule, grip.merge);
-  };
-  const release = () => {
-    clearTimeout(resting);
-    held.value = undefined;
-    grip = undefined;
-    why = "";
-  };
   /** A refused change leaves everything as it was and says why. */
   const attempt = (edit: () => void) => {
     try {
@@ -80,34 +61,59 @@ export function createDoseHand(model: CaseModel): DoseHand {
       said.value = `Not done: ${sayRefusal(error)}`;
     }
   };
+  const write = (key: string, what: string, schedule: Schedule, merge?: string) => {
+    said.value = what;
+    model.change(what, (document) => withSchedule(document, key, () => schedule), merge);
+  };
+  const writeHeld = () => {
+    const now = held.peek();
+    if (grip === undefined || now === undefined || grip.written === now) return;
+    const { key, dose, content, merge, why } = grip;
+    grip.written = now;
+    attempt(() => {
+      const schedule = editDose(content.schedule, dose, { at: now.at }, spanOf(content));
+      write(key, sentence(model, key, sayMoved(dose, now.at, content), why), schedule, merge);
+    });
+  };
+  const release = () => {
+    clearTimeout(resting);
+    held.value = undefined;
+    grip = undefined;
+  };
+  const drop = () =>
+    batch(() => {
+      writeHeld();
+      release();
+    });
   return {
     held,
     said,
     take(key, dose) {
+      drop();
       const content = model.contents.peek().get(key);
-      if (content !== undefined) grip = { key, dose, content, merge: `dose moved ${newId()}`, written: false };
+      if (content === undefined) return;
+      attempt(() => {
+        // What may not be moved is refused here, not on the way.
+        editDose(content.schedule, dose, { at: dose.at }, spanOf(content));
+        grip = { key, dose, content, merge: `dose moved ${newId()}` };
+      });
     },
     moveTo(toH) {
-      const taken = grip;
-      if (taken === undefined) return;
-      attempt(() => {
-        const { content, dose, key } = taken;
-        const clamped = withinPlan(toH, spanOf(content));
-        why = clamped.why ?? "";
-        if (clamped.atH === held.peek()?.atH) return;
-        const at = instantAt(content.setting.plan.start, clamped.atH, content.timeZone);
-        const schedule = editDose(content.schedule, dose, { at }, spanOf(content));
-        held.value = { key, doseKey: dose.key, schedule, atH: clamped.atH };
-        clearTimeout(resting);
-        resting = setTimeout(writeHeld, restMs);
-      });
+      if (grip === undefined) return;
+      const { content, dose, key } = grip;
+      const { atH, why } = withinPlan(toH, spanOf(content));
+      grip.why = why;
+      if (why !== undefined) said.value = why;
+      if (atH === (held.peek()?.atH ?? dose.atH)) return;
+      const at = instantAt(content.setting.plan.start, atH, content.timeZone);
+      const moved = { doseKey: dose.key, at, atH };
+      const preview = { ...content };
+      rememberPrediction(preview, movedPrediction(predictionOf(content), moved));
+      held.value = { key, content: preview, ...moved };
+      clearTimeout(resting);
+      resting = setTimeout(writeHeld, restMs);
     },
-    drop() {
-      batch(() => {
-        writeHeld();
-        release();
-      });
-    },
+    drop,
     putBack() {
       batch(() => {
         if (grip?.written) model.undo();
@@ -115,54 +121,45 @@ export function createDoseHand(model: CaseModel): DoseHand {
         release();
       });
     },
-    edit(key, dose, change, merge) {
+    edit(key, dose, change) {
       const content = model.contents.peek().get(key);
       if (content === undefined) return;
       attempt(() => {
-        const wanted = change.at ?? dose.at;
-        const clamped = withinPlan(
-          (Date.parse(wanted) - Date.parse(content.setting.plan.start)) / 3_600_000,
-          spanOf(content),
-        );
-        why = clamped.why ?? "";
-        const at =
-          clamped.why === undefined ? wanted : instantAt(content.setting.plan.start, clamped.atH, content.timeZone);
+        const { at, why } = instantWithin(change.at ?? dose.at, content);
         const schedule = editDose(content.schedule, dose, { ...change, at }, spanOf(content));
-        const moved = change.amountMg === undefined && change.durationH === undefined;
-        const what = moved
-          ? sayMoved(dose, clamped.atH, content)
-          : `${capital(nameOfDose(dose, content.schedule))} changed`;
-        write(key, content, what, schedule, merge);
-        why = "";
+        write(key, sentence(model, key, `${capital(nameOfDose(dose, content.schedule))} changed`, why), schedule);
       });
     },
     remove(key, dose) {
       const content = model.contents.peek().get(key);
       if (content === undefined) return;
+      const name = capital(nameOfDose(dose, content.schedule));
+      if (dose.status === "omitted") {
+        said.value = `${name} is recorded as omitted already; its record is under the doses given`;
+        return;
+      }
+      const recorded = dose.status === "as-planned" || dose.status === "changed";
       attempt(() => {
-        const schedule = removeDose(content.schedule, dose);
-        const name = capital(nameOfDose(dose, content.schedule));
-        if (schedule === content.schedule)
-          said.value = `${name} is recorded as omitted already; its record is under the doses given`;
-        else
-          write(
-            key,
-            content,
-            dose.status === "as-planned" || dose.status === "changed"
-              ? `${name} recorded as omitted`
-              : `${name} deleted`,
-            schedule,
-          );
+        const what = `${name} ${recorded ? "recorded as omitted" : "deleted"}`;
+        write(key, sentence(model, key, what, undefined), removeDose(content.schedule, dose));
       });
     },
   };
 }
 
-function sayMoved(dose: ScheduledDose, atH: number, content: RegimenContent): string {
-  const at = instantAt(content.setting.plan.start, atH, content.timeZone);
-  return `${capital(nameOfDose(dose, content.schedule))} moved to ${sayClock(at, content.timeZone)}`;
+function instantWithin(wanted: string, { setting, timeZone }: RegimenContent): Pick<Clamped, "why"> & { at: string } {
+  const { start } = setting.plan;
+  const { atH, why } = withinPlan((Date.parse(wanted) - Date.parse(start)) / 3_600_000, {
+    ...setting.plan,
+    timeZone,
+  });
+  return why === undefined ? { at: wanted } : { at: instantAt(start, atH, timeZone), why };
 }
 
-function capital(text: string): string {
-  return text.charAt(0).toUpperCase() + text.slice(1);
+function sentence(model: CaseModel, key: string, what: string, why: string | undefined): string {
+  return `Alternative ${letterOf(model.document.peek(), key)}: ${what}${why === undefined ? "" : `. ${why}`}`;
+}
+
+function sayMoved(dose: ScheduledDose, at: string, { schedule, timeZone }: RegimenContent): string {
+  return `${nameOfDose(dose, schedule)} moved to ${sayClock(at, timeZone)}`;
 }

@@ -68,6 +68,10 @@ export function DoseMark({ view, alternativeKey, content, mark, tabIndex, onKeyD
           drag.current = undefined;
         } else onKeyDown(event);
       }}
+      onKeyUp={() => {
+        if (drag.current === undefined) view.hand.drop();
+      }}
+      onBlur={() => view.hand.drop()}
       onPointerDown={(event) => {
         if (event.button !== 0) return;
         event.currentTarget.setPointerCapture(event.pointerId);

@@ -33,9 +33,27 @@ export function sayStatus(dose: ScheduledDose, timeZone: string): string {
     : `given otherwise, planned ${sayClock(dose.plannedAt, timeZone)}`;
 }
 
-/** A dose in one line: "dose 3, 500 mg over 1 h, Mon 2 Mar 2026 08:00, planned". */
+const said = new WeakMap<ScheduledDose, string>();
+
+/**
+ * A dose in one line: "Dose 3, 500 mg over 1 h, Mon 2 Mar 2026 08:00, planned". Remembered by the dose, which
+ * is made anew whenever its schedule is: a hundred dates in words a frame would be felt.
+ */
 export function sayDose(dose: ScheduledDose, schedule: Schedule, timeZone: string): string {
-  return [nameOfDose(dose, schedule), sayGiven(dose.give), sayClock(dose.at, timeZone), sayStatus(dose, timeZone)].join(
-    ", ",
-  );
+  const known = said.get(dose);
+  if (known !== undefined) return known;
+  const parts = [
+    nameOfDose(dose, schedule),
+    sayGiven(dose.give),
+    sayClock(dose.at, timeZone),
+    sayStatus(dose, timeZone),
+  ];
+  const words = capital(parts.join(", "));
+  said.set(dose, words);
+  return words;
+}
+
+/** The text as a sentence begins. */
+export function capital(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
 }

@@ -1,5 +1,5 @@
 import type { RegimenContent } from "../../shared/contract/case.ts";
-import { instantAt, sayClock } from "../../shared/schedule/clock.ts";
+import { sayClock } from "../../shared/schedule/clock.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import type { AlternativeLook } from "./alternative-look.ts";
 import type { CurveView } from "./curve-view.ts";
@@ -37,7 +37,7 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
     if (event.ctrlKey || event.metaKey || event.altKey) return;
     const acted =
       mark.kind === "dose" &&
-      actOn(view, alternativeKey, content, mark.dose, event, () => focusNeighbour(placed, mark, look.letter));
+      actOn(view, alternativeKey, mark.dose, event, () => focusNeighbour(placed, mark, look.letter));
     if (!acted && !walkAlong(view, placed, mark, event.key)) return;
     event.preventDefault();
   };
@@ -103,23 +103,17 @@ function zoomTo(view: CurveView, doses: readonly ScheduledDose[]): void {
 function actOn(
   view: CurveView,
   alternativeKey: string,
-  content: RegimenContent,
   dose: ScheduledDose,
   event: KeyboardEvent,
   onRemoved: () => void,
 ): boolean {
   const span = view.span.peek();
-  const direction = { ArrowLeft: -1, ArrowRight: 1 }[event.key] as -1 | 1 | undefined;
+  const direction = ({ ArrowLeft: -1, ArrowRight: 1 } as const)[event.key as "ArrowLeft" | "ArrowRight"];
   if (direction !== undefined && span !== undefined) {
-    const toH = steppedH(dose.atH, direction, view.snap.peek(), event.shiftKey ? "larger" : "usual", span);
-    // A key that is held down is one undo step; each press is its own.
-    if (!event.repeat) pressCount++;
-    view.hand.edit(
-      alternativeKey,
-      dose,
-      { at: instantAt(span.start, toH, content.timeZone) },
-      `dose by key ${pressCount}`,
-    );
+    // A key that is held down is one undo step, dropped when it is let go; each press is its own.
+    if (!event.repeat) view.hand.take(alternativeKey, dose);
+    const size = event.shiftKey ? "larger" : "usual";
+    view.hand.moveTo(steppedH(view.hand.held.peek()?.atH ?? dose.atH, direction, view.snap.peek(), size, span));
     return true;
   }
   if (event.key === "Delete" || event.key === "Backspace") {
@@ -129,8 +123,6 @@ function actOn(
   }
   return false;
 }
-
-let pressCount = 0;
 
 function walkAlong(view: CurveView, placed: readonly PlacedMark[], mark: PlacedMark, key: string): boolean {
   const inTime = [...placed].sort((one, other) => one.xPx - other.xPx || one.row - other.row);

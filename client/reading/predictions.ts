@@ -30,6 +30,11 @@ export function predictionOf(content: RegimenContent): Prediction {
   return made;
 }
 
+/** Answers for a content whose prediction follows from another one without computing all of it. */
+export function rememberPrediction(content: RegimenContent, prediction: Prediction): void {
+  known.set(content, prediction);
+}
+
 /** Level of a prepared alternative at one hour, in mg/L; at a bolus the value just after it. */
 export function levelAt({ made }: Prepared, atH: number): number {
   return levelsAt(made, [Math.min(Math.max(0, atH), made.horizonH)])[0]!;

@@ -4,34 +4,32 @@ import { formatPercent } from "../../shared/units/format.ts";
 export interface PictureSlice {
   readonly key: string;
   readonly label: string;
+  /** Written into the piece where it is wide enough. */
+  readonly short: string;
   readonly percent: number;
 }
 
-const width = 1_000;
-const height = 56;
-const narrowestLabel = 46;
+const narrowestLabelPercent = 7;
 
-/** The level as one bar, cut into its parts. Neighbours differ in tint and are parted by a line; the table names them. */
+/** The level as one bar, cut into its parts; neighbours differ in tint and are parted by a line. */
 export function RemainsPicture({ slices, label }: { slices: readonly PictureSlice[]; label: string }) {
   let begin = 0;
-  const placed = slices.map((slice, index) => {
-    const x = begin;
-    begin += (slice.percent / 100) * width;
-    return { ...slice, index, x, wide: begin - x };
+  const placed = slices.map((slice) => {
+    const from = begin;
+    begin += slice.percent;
+    return { ...slice, from };
   });
   return (
-    <svg
-      class="remains-picture"
-      viewBox={`0 0 ${width} ${height}`}
-      role="img"
-      aria-label={label}
-      preserveAspectRatio="none"
-    >
-      {placed.map(({ key, label: name, percent, index, x, wide }) => (
+    <svg class="remains-picture" width="100%" height="48" role="img" aria-label={label}>
+      {placed.map(({ key, label: name, short, percent, from }, index) => (
         <g key={key}>
           <title>{`${name}: ${formatPercent(percent)}`}</title>
-          <rect class={`slice slice-${index % 3}`} x={x} y="0" width={Math.max(0, wide)} height={height} />
-          {wide >= narrowestLabel && <line class="slice-end" x1={x + wide} x2={x + wide} y1="0" y2={height} />}
+          <rect class={`slice slice-${index % 2}`} x={`${from}%`} y="0" width={`${percent}%`} height="48" />
+          {percent >= narrowestLabelPercent && (
+            <text class="slice-name" x={`${from + percent / 2}%`} y="29" text-anchor="middle">
+              {short}
+            </text>
+          )}
         </g>
       ))}
     </svg>

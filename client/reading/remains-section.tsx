@@ -5,7 +5,7 @@ import { formatLevel, formatPercent } from "../../shared/units/format.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { CsvButton } from "./csv-button.tsx";
 import { sayHour } from "./cursor-words.ts";
-import { nameOfDose, sayGiven } from "./dose-words.ts";
+import { capital, nameOfDose, sayGiven } from "./dose-words.ts";
 import { levelAt, predictionOf } from "./predictions.ts";
 import { type Part, partsAt, sayGathered } from "./remains-parts.ts";
 import { type PictureSlice, RemainsPicture } from "./remains-picture.tsx";
@@ -39,8 +39,15 @@ function Remains({ content, cursorH }: { content: RegimenContent; cursorH: numbe
   const gatheredMgPerL = gathered.reduce((sum, { mgPerL }) => sum + mgPerL, 0);
   const gatheredPercent = gathered.reduce((sum, { percent }) => sum + percent, 0);
   const slices: PictureSlice[] = [
-    ...(gathered.length > 0 ? [{ key: "gathered", label: gatheredWords, percent: gatheredPercent }] : []),
-    ...shown.map((part) => ({ key: keyOfPart(part), label: nameOf(part, content), percent: part.percent })),
+    ...(gathered.length > 0
+      ? [{ key: "gathered", label: gatheredWords, short: "rest", percent: gatheredPercent }]
+      : []),
+    ...shown.map((part) => ({
+      key: keyOfPart(part),
+      label: nameOf(part, content),
+      short: shortNameOf(part),
+      percent: part.percent,
+    })),
   ];
   const when = sayHour(atH, { start, timeZone: content.timeZone });
   const file = () => ({
@@ -147,5 +154,10 @@ function keyOfPart({ source }: Part): string {
 }
 
 function nameOf({ source }: Part, content: RegimenContent): string {
-  return source === "start" ? "Start of the plan" : nameOfDose(source, content.schedule);
+  return source === "start" ? "Start of the plan" : capital(nameOfDose(source, content.schedule));
+}
+
+function shortNameOf({ source }: Part): string {
+  if (source === "start") return "start";
+  return source.occurrence === undefined ? "extra" : String(source.occurrence + 1);
 }

@@ -1,3 +1,4 @@
+import { useComputed } from "@preact/signals";
 import { lookAt } from "./alternative-look.ts";
 import type { CurveView } from "./curve-view.ts";
 import { EditedLane } from "./edited-lane.tsx";
@@ -9,37 +10,48 @@ import "./ruler.css";
 
 /** One lane of doses per alternative, on the axis of the curves; the selected one can be edited. */
 export function Ruler({ view }: { view: CurveView }) {
-  const selectedKey = selectedKeyOf(view.model);
   return (
     <div class="ruler">
-      {[...view.contents.value].map(([key, content], place) => {
-        const prediction = predictionOf(content);
-        const doses = prediction.ok ? prediction.doses : [];
-        const look = lookAt(place);
-        const { letter } = look;
-        const selected = key === selectedKey;
-        return (
-          <div key={key} class={selected ? "lane lane-selected" : "lane"}>
-            <button
-              type="button"
-              class={`lane-head ${inkOf(look)}`}
-              id={`lane-${letter}`}
-              aria-pressed={selected}
-              aria-label={`Edit the doses of alternative ${letter}, ${content.regimenLabel}`}
-              onClick={() => {
-                view.model.selectedKey.value = key;
-              }}
-            >
-              {letter}
-            </button>
-            {selected ? (
-              <EditedLane view={view} alternativeKey={key} content={content} look={look} doses={doses} />
-            ) : (
-              <PlainLane view={view} look={look} doses={doses} />
-            )}
-          </div>
-        );
-      })}
+      {view.keys.value.split("\n").map((key, place) => (
+        <Lane key={key} view={view} alternativeKey={key} place={place} />
+      ))}
+    </div>
+  );
+}
+
+interface LaneProps {
+  readonly view: CurveView;
+  readonly alternativeKey: string;
+  readonly place: number;
+}
+
+/** Drawn anew only when its own alternative changes, so that a dose in the hand costs one lane a frame. */
+function Lane({ view, alternativeKey, place }: LaneProps) {
+  const content = useComputed(() => view.contents.value.get(alternativeKey)).value;
+  const selected = useComputed(() => selectedKeyOf(view.model) === alternativeKey).value;
+  if (content === undefined) return null;
+  const look = lookAt(place);
+  const prediction = predictionOf(content);
+  const doses = prediction.ok ? prediction.doses : [];
+  return (
+    <div class={selected ? "lane lane-selected" : "lane"}>
+      <button
+        type="button"
+        class={`lane-head ${inkOf(look)}`}
+        id={`lane-${look.letter}`}
+        aria-pressed={selected}
+        aria-label={`Edit the doses of alternative ${look.letter}, ${content.regimenLabel}`}
+        onClick={() => {
+          view.model.selectedKey.value = alternativeKey;
+        }}
+      >
+        {look.letter}
+      </button>
+      {selected ? (
+        <EditedLane view={view} alternativeKey={alternativeKey} content={content} look={look} doses={doses} />
+      ) : (
+        <PlainLane view={view} look={look} doses={doses} />
+      )}
     </div>
   );
 }

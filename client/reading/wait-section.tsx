@@ -148,7 +148,7 @@ export function sayAnswer(content: RegimenContent, question: WaitQuestion): stri
   try {
     const answer = waitUntil(prediction.given.course, question);
     if (answer.kind === "already") return `already ${question.direction} it: ${formatLevel(answer.mgPerL)}`;
-    if (answer.kind === "never") return `never: ${answer.why}`;
+    if (answer.kind === "never") return question.meanwhile === "plan-goes-on" ? answer.why : `never: ${answer.why}`;
     const at = instantAt(content.setting.plan.start, answer.atH, content.timeZone);
     return `${sayInstant(at, content.timeZone)}; ${formatHours(answer.atH - question.fromH)} to wait, ${formatHours(answer.atH)} into the plan`;
   } catch (error) {
