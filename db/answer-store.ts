@@ -1,5 +1,5 @@
 import type { Database } from "better-sqlite3";
-import { z } from "zod";
+import type { z } from "zod";
 import type { Intention } from "./once.ts";
 import { KeyReusedError } from "./store-errors.ts";
 
@@ -12,7 +12,9 @@ export interface AnswerStore {
 }
 
 export function sqliteAnswerStore(db: Database): AnswerStore {
-  const byKey = db.prepare<[string], { fingerprint: string; answer: string }>("SELECT fingerprint, answer FROM answered_write WHERE key = ?");
+  const byKey = db.prepare<[string], { fingerprint: string; answer: string }>(
+    "SELECT fingerprint, answer FROM answered_write WHERE key = ?",
+  );
   const forget = db.prepare<[string]>("DELETE FROM answered_write WHERE answered_at < ?");
   return {
     async find(intention, schema) {

@@ -13,7 +13,7 @@ export interface CaseStore {
    * @throws {NotFoundError} if there is no such case
    * @throws {StaleError} if the change was made from an older version than the newest
    */
-  change(intention: Intention, id: CaseId, change: CaseChange, at: string): Promise<Case>;
+  change(intention: Intention, id: CaseId, change: CaseChange): Promise<Case>;
 }
 
 interface CaseRow {
@@ -34,7 +34,9 @@ const columns = "id, version, label, time_zone, notes, setting, archived, demo, 
 
 export function sqliteCaseStore(db: Database): CaseStore {
   const once = onceIn(db);
-  const byArchived = db.prepare<[number], CaseRow>(`SELECT ${columns} FROM case_record WHERE archived = ? ORDER BY changed_at DESC, id`);
+  const byArchived = db.prepare<[number], CaseRow>(
+    `SELECT ${columns} FROM case_record WHERE archived = ? ORDER BY changed_at DESC, id`,
+  );
   const byId = db.prepare<[string], CaseRow>(`SELECT ${columns} FROM case_record WHERE id = ?`);
   const update = db.prepare<[CaseRow]>(
     `UPDATE case_record SET version = @version, label = @label, time_zone = @time_zone, notes = @notes, setting = @setting,
@@ -50,14 +52,14 @@ export function sqliteCaseStore(db: Database): CaseStore {
       return row && fromRow(row);
     },
     async add(intention, made) {
-      return once(intention, Case, made.createdAt, () => insert(made));
+      return once(intention, Case, () => insert(made));
     },
-    async change(intention, id, change, at) {
-      return once(intention, Case, at, () => {
+    async change(intention, id, change) {
+      return once(intention, Case, () => {
         const row = byId.get(id);
         if (row === undefined) throw new NotFoundError("case");
         if (row.version !== change.version) throw new StaleError("case", change.version, row.version);
-        const changed = Case.parse({ ...fromRow(row), ...change, version: row.version + 1, changedAt: at });
+        const changed = Case.parse({ ...fromRow(row), ...change, version: row.version + 1, changedAt: intention.at });
         update.run(toRow(changed));
         return changed;
       });

@@ -17,13 +17,16 @@ export interface Migration {
  * @throws {DatabaseRefused} naming a file that is out of order or does not say why it is there
  */
 export function readMigrations(folder: string): Migration[] {
-  const names = readdirSync(folder).filter((name) => name.endsWith(".sql")).sort();
+  const names = readdirSync(folder)
+    .filter((name) => name.endsWith(".sql"))
+    .sort();
   return names.map((name, index) => {
     const sql = readFileSync(join(folder, name), "utf8");
     const number = Number(/^(\d{4})-[a-z0-9-]+\.sql$/.exec(name)?.[1]);
     if (number !== index + 1)
       throw new DatabaseRefused("migrations", `migration ${name} is out of order: number ${index + 1} is expected`);
-    if (!sql.startsWith("-- Why: ")) throw new DatabaseRefused("migrations", `migration ${name} does not open with its reason`);
+    if (!sql.startsWith("-- Why: "))
+      throw new DatabaseRefused("migrations", `migration ${name} does not open with its reason`);
     return { number, name, sql, sha256: createHash("sha256").update(sql).digest("hex") };
   });
 }
@@ -51,19 +54,27 @@ export function migrate(db: Database, migrations: readonly Migration[]): void {
 function applyOne(db: Database, { number, name, sql, sha256 }: Migration): void {
   if (db.prepare("SELECT 1 FROM migration WHERE number = ?").get(number) !== undefined) return;
   db.exec(sql);
-  db.prepare("INSERT INTO migration (number, name, sha256, applied_at) VALUES (?, ?, ?, strftime('%Y-%m-%dT%H:%M:%SZ', 'now'))").run(number, name, sha256);
+  db.prepare(
+    "INSERT INTO migration (number, name, sha256, applied_at) VALUES (?, ?, ?, strftime('%Y-%m-%dT%H:%M:%SZ', 'now'))",
+  ).run(number, name, sha256);
   db.pragma(`user_version = ${number}`);
 }
 
 function checkRecorded(db: Database, migrations: readonly Migration[]): void {
   const recorded = db
-    .prepare<[], { number: number; name: string; sha256: string }>("SELECT number, name, sha256 FROM migration ORDER BY number")
+    .prepare<[], { number: number; name: string; sha256: string }>(
+      "SELECT number, name, sha256 FROM migration ORDER BY number",
+    )
     .all();
   recorded.forEach((had, index) => {
     const migration = migrations[index];
-    if (had.number !== index + 1) throw new DatabaseRefused("migrations", `migration ${had.name} was recorded out of order`);
+    if (had.number !== index + 1)
+      throw new DatabaseRefused("migrations", `migration ${had.name} was recorded out of order`);
     if (migration === undefined || migration.name !== had.name)
-      throw new DatabaseRefused("migrations", `migration ${had.name}, which this database has had, is missing from the program`);
+      throw new DatabaseRefused(
+        "migrations",
+        `migration ${had.name}, which this database has had, is missing from the program`,
+      );
     if (migration.sha256 !== had.sha256)
       throw new DatabaseRefused("migrations", `migration ${had.name} was changed after this database had it`);
   });

@@ -8,7 +8,9 @@ export interface MilestoneStore {
 
 export function sqliteMilestoneStore(db: Database): MilestoneStore {
   const find = db.prepare<[string]>("SELECT 1 FROM milestone WHERE name = ?");
-  const keep = db.prepare<[string, string]>("INSERT INTO milestone (name, reached_at) VALUES (?, ?) ON CONFLICT DO NOTHING");
+  const keep = db.prepare<[string, string]>(
+    "INSERT INTO milestone (name, reached_at) VALUES (?, ?) ON CONFLICT DO NOTHING",
+  );
   return {
     async isReached(name) {
       return find.get(name) !== undefined;

@@ -8,10 +8,12 @@ export interface Intention {
   readonly key: string;
   /** SHA-256 over method, path and body, so that a key cannot stand for two requests. */
   readonly fingerprint: string;
+  /** When it was asked for by the server's clock; what it writes may bear another date. */
+  readonly at: string;
 }
 
 /** Carries a write out once, and answers a retry with what the first try answered. */
-export type Once = <Answer>(intention: Intention, answer: z.ZodType<Answer>, at: string, work: () => Answer) => Answer;
+export type Once = <Answer>(intention: Intention, answer: z.ZodType<Answer>, work: () => Answer) => Answer;
 
 /**
  * The work and the record of its answer are one transaction, and the lock is taken before the key is
@@ -20,9 +22,13 @@ export type Once = <Answer>(intention: Intention, answer: z.ZodType<Answer>, at:
  * @returns a function that throws KeyReusedError where the key came with another request
  */
 export function onceIn(db: Database): Once {
-  const known = db.prepare<[string], { fingerprint: string; answer: string }>("SELECT fingerprint, answer FROM answered_write WHERE key = ?");
-  const keep = db.prepare<[string, string, string, string]>("INSERT INTO answered_write (key, fingerprint, answer, answered_at) VALUES (?, ?, ?, ?)");
-  return (intention, schema, at, work) =>
+  const known = db.prepare<[string], { fingerprint: string; answer: string }>(
+    "SELECT fingerprint, answer FROM answered_write WHERE key = ?",
+  );
+  const keep = db.prepare<[string, string, string, string]>(
+    "INSERT INTO answered_write (key, fingerprint, answer, answered_at) VALUES (?, ?, ?, ?)",
+  );
+  return (intention, schema, work) =>
     db
       .transaction(() => {
         const first = known.get(intention.key);
@@ -31,7 +37,7 @@ export function onceIn(db: Database): Once {
           return schema.parse(JSON.parse(first.answer));
         }
         const answer = work();
-        keep.run(intention.key, intention.fingerprint, JSON.stringify(answer), at);
+        keep.run(intention.key, intention.fingerprint, JSON.stringify(answer), intention.at);
         return answer;
       })
       .immediate();

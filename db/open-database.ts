@@ -20,7 +20,10 @@ const oldestSqlite = [3, 51, 3] as const;
  * @param migrations those of the program unless a test gives others
  * @throws {DatabaseRefused} saying what is wrong with the file
  */
-export function openDatabase(file: string, migrations: readonly Migration[] = readMigrations(join(projectFolder(), "db", "migrations"))): Database {
+export function openDatabase(
+  file: string,
+  migrations: readonly Migration[] = readMigrations(join(projectFolder(), "db", "migrations")),
+): Database {
   const db = connect(file);
   try {
     checkSqlite(db);
@@ -50,10 +53,16 @@ export function closeDatabase(db: Database): void {
 export function checkWhole(db: Database): void {
   const found: unknown = db.pragma("integrity_check(1)", { simple: true });
   if (found !== "ok")
-    throw new DatabaseRefused("damaged", "the database file is damaged (integrity_check found a fault); restore it from a backup");
+    throw new DatabaseRefused(
+      "damaged",
+      "the database file is damaged (integrity_check found a fault); restore it from a backup",
+    );
   // integrity_check does not look at foreign keys.
   if ((db.pragma("foreign_key_check") as unknown[]).length > 0)
-    throw new DatabaseRefused("damaged", "the database file is damaged (a row refers to one that is gone); restore it from a backup");
+    throw new DatabaseRefused(
+      "damaged",
+      "the database file is damaged (a row refers to one that is gone); restore it from a backup",
+    );
 }
 
 function connect(file: string): Database {
@@ -87,16 +96,29 @@ function checkIdentity(db: Database, newest: number): void {
   if (id !== applicationId && !(id === 0 && version === 0 && isEmpty))
     throw new DatabaseRefused("foreign", "the file is a database of another program, or of none; it was left as it is");
   if (version > newest)
-    throw new DatabaseRefused("newer", `the database was written by a newer release (schema ${version}, this program knows ${newest}); update the program`);
+    throw new DatabaseRefused(
+      "newer",
+      `the database was written by a newer release (schema ${version}, this program knows ${newest}); update the program`,
+    );
 }
 
 function refusalOf(error: unknown): unknown {
   const code = codeOf(error);
-  if (code === "SQLITE_NOTADB") return new DatabaseRefused("foreign", "the file is not a database; it was left as it is", { cause: error });
+  if (code === "SQLITE_NOTADB")
+    return new DatabaseRefused("foreign", "the file is not a database; it was left as it is", { cause: error });
   if (code.startsWith("SQLITE_CORRUPT"))
-    return new DatabaseRefused("damaged", `the database file is damaged (${code}); restore it from a backup`, { cause: error });
-  if (code.startsWith("SQLITE_IOERR") || code.startsWith("SQLITE_CANTOPEN") || code === "SQLITE_READONLY" || code === "SQLITE_FULL")
-    return new DatabaseRefused("unreachable", `the database file cannot be read and written: ${code}`, { cause: error });
+    return new DatabaseRefused("damaged", `the database file is damaged (${code}); restore it from a backup`, {
+      cause: error,
+    });
+  if (
+    code.startsWith("SQLITE_IOERR") ||
+    code.startsWith("SQLITE_CANTOPEN") ||
+    code === "SQLITE_READONLY" ||
+    code === "SQLITE_FULL"
+  )
+    return new DatabaseRefused("unreachable", `the database file cannot be read and written: ${code}`, {
+      cause: error,
+    });
   return error;
 }
 

@@ -18,7 +18,7 @@ export interface RegimenStore {
    */
   add(intention: Intention, made: NewRegimen): Promise<Regimen>;
   /** @throws {NotFoundError | TooManyAlternativesError} as above; taking a retired one up again counts too */
-  change(intention: Intention, caseId: CaseId, id: RegimenId, change: RegimenChange, at: string): Promise<Regimen>;
+  change(intention: Intention, caseId: CaseId, id: RegimenId, change: RegimenChange): Promise<Regimen>;
 }
 
 interface RegimenRow {
@@ -39,8 +39,12 @@ export function sqliteRegimenStore(db: Database): RegimenStore {
   const ofCase = db.prepare<[string], StoredRegimen>(`${select} WHERE case_id = ? ORDER BY position`);
   const byId = db.prepare<[string, string], StoredRegimen>(`${select} WHERE id = ? AND case_id = ?`);
   const caseIsThere = db.prepare<[string]>("SELECT 1 FROM case_record WHERE id = ?");
-  const countActive = db.prepare<[string], number>("SELECT COUNT(*) FROM regimen WHERE case_id = ? AND retired = 0").pluck();
-  const update = db.prepare<[RegimenRow]>("UPDATE regimen SET label = @label, retired = @retired, seal = @seal WHERE id = @id");
+  const countActive = db
+    .prepare<[string], number>("SELECT COUNT(*) FROM regimen WHERE case_id = ? AND retired = 0")
+    .pluck();
+  const update = db.prepare<[RegimenRow]>(
+    "UPDATE regimen SET label = @label, retired = @retired, seal = @seal WHERE id = @id",
+  );
   const insert = regimenInsert(db);
   const refuseIfFull = (caseId: string) => {
     if (!(countActive.get(caseId)! < counts.alternatives)) throw new TooManyAlternativesError(counts.alternatives);
@@ -54,14 +58,14 @@ export function sqliteRegimenStore(db: Database): RegimenStore {
       return row && fromRow(row);
     },
     async add(intention, made) {
-      return once(intention, Regimen, made.createdAt, () => {
+      return once(intention, Regimen, () => {
         if (caseIsThere.get(made.caseId) === undefined) throw new NotFoundError("case");
         refuseIfFull(made.caseId);
         return insert(made);
       });
     },
-    async change(intention, caseId, id, change, at) {
-      return once(intention, Regimen, at, () => {
+    async change(intention, caseId, id, change) {
+      return once(intention, Regimen, () => {
         const row = byId.get(id, caseId);
         if (row === undefined) throw new NotFoundError("regimen");
         const before = fromRow(row);
@@ -76,7 +80,9 @@ export function sqliteRegimenStore(db: Database): RegimenStore {
 
 /** Writes one regimen at the end of its case, within a transaction that the caller has begun. */
 export function regimenInsert(db: Database): (made: NewRegimen) => Regimen {
-  const nextPosition = db.prepare<[string], number>("SELECT COALESCE(MAX(position), 0) + 1 FROM regimen WHERE case_id = ?").pluck();
+  const nextPosition = db
+    .prepare<[string], number>("SELECT COALESCE(MAX(position), 0) + 1 FROM regimen WHERE case_id = ?")
+    .pluck();
   const insert = db.prepare<[RegimenRow]>(
     "INSERT INTO regimen (id, case_id, position, label, retired, created_at, seal) VALUES (@id, @case_id, @position, @label, @retired, @created_at, @seal)",
   );
@@ -101,7 +107,13 @@ function toRow({ id, caseId, label, retired, createdAt }: NewRegimen, position: 
 }
 
 function fromRow(row: StoredRegimen): Regimen {
-  const stored = { id: row.id, caseId: row.case_id, label: row.label, retired: row.retired === 1, createdAt: row.created_at };
+  const stored = {
+    id: row.id,
+    caseId: row.case_id,
+    label: row.label,
+    retired: row.retired === 1,
+    createdAt: row.created_at,
+  };
   if (sealOf({ ...stored, position: row.position }) !== row.seal) throw new AlteredRowError(`regimen ${row.id}`);
   return Regimen.parse({ ...stored, latestRevisionNumber: row.latest_revision_number });
 }

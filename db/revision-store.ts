@@ -47,12 +47,16 @@ const columns = `id, case_id, regimen_id, number, created_at, reason, prepared_b
 export function sqliteRevisionStore(db: Database): RevisionStore {
   const once = onceIn(db);
   const byId = db.prepare<[string], RevisionRow>(`SELECT ${columns} FROM revision WHERE id = ?`);
-  const ofRegimen = db.prepare<[string], RevisionRow>(`SELECT ${columns} FROM revision WHERE regimen_id = ? ORDER BY number DESC`);
+  const ofRegimen = db.prepare<[string], RevisionRow>(
+    `SELECT ${columns} FROM revision WHERE regimen_id = ? ORDER BY number DESC`,
+  );
   const latest = db.prepare<[string], RevisionRow>(
     `SELECT ${columns} FROM revision WHERE case_id = ?
        AND number = (SELECT MAX(other.number) FROM revision AS other WHERE other.regimen_id = revision.regimen_id)`,
   );
-  const newestNumber = db.prepare<[string], number>("SELECT COALESCE(MAX(number), 0) FROM revision WHERE regimen_id = ?").pluck();
+  const newestNumber = db
+    .prepare<[string], number>("SELECT COALESCE(MAX(number), 0) FROM revision WHERE regimen_id = ?")
+    .pluck();
   const regimenIsThere = db.prepare<[string, string]>("SELECT 1 FROM regimen WHERE id = ? AND case_id = ?");
   const insert = revisionInsert(db);
   return {
@@ -67,7 +71,7 @@ export function sqliteRevisionStore(db: Database): RevisionStore {
       return latest.all(caseId).map(fromRow);
     },
     async add(intention, basedOnNumber, made) {
-      return once(intention, Revision, made.createdAt, () => {
+      return once(intention, Revision, () => {
         if (regimenIsThere.get(made.regimenId, made.caseId) === undefined) throw new NotFoundError("regimen");
         const newest = newestNumber.get(made.regimenId)!;
         if (newest !== basedOnNumber) throw new StaleError("regimen", basedOnNumber, newest);
@@ -140,6 +144,12 @@ function fromRow(row: RevisionRow): Revision {
 }
 
 /** Covers what the content hash leaves out: where the revision belongs and what its second opinion was. */
-function outerSeal({ id, caseId, regimenId, contentHash, secondOpinion }: Record<"id" | "caseId" | "regimenId" | "contentHash", string> & Pick<Revision, "secondOpinion">): string {
+function outerSeal({
+  id,
+  caseId,
+  regimenId,
+  contentHash,
+  secondOpinion,
+}: Record<"id" | "caseId" | "regimenId" | "contentHash", string> & Pick<Revision, "secondOpinion">): string {
   return sealOf({ id, caseId, regimenId, contentHash, secondOpinion });
 }

@@ -18,6 +18,12 @@ export function sealOf(value: unknown): string {
 }
 
 /** What a second person checks and signs: the hash of everything that was written down in a revision. */
-export function contentHashOf({ number, createdAt, reason, preparedBy, content }: Pick<Revision, "number" | "createdAt" | "reason" | "preparedBy" | "content">): string {
+export function contentHashOf({
+  number,
+  createdAt,
+  reason,
+  preparedBy,
+  content,
+}: Pick<Revision, "number" | "createdAt" | "reason" | "preparedBy" | "content">): string {
   return sealOf({ number, createdAt, reason, preparedBy, content });
 }

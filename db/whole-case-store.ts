@@ -23,7 +23,7 @@ export function sqliteWholeCaseStore(db: Database): WholeCaseStore {
   const insertRevision = revisionInsert(db);
   return {
     async add(intention, whole) {
-      return once(intention, Case, whole.case.createdAt, () => {
+      return once(intention, Case, () => {
         insertCase(whole.case);
         for (const { regimen, revisions } of whole.regimens) {
           insertRegimen(regimen);

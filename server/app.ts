@@ -1,14 +1,10 @@
-import express, { type Express, Router } from "express";
-import type { Logger } from "pino";
-import type { Stores } from "../db/stores.ts";
-import type { Revision } from "../shared/contract/case.ts";
-import type { Instant } from "../shared/contract/schedule.ts";
+import express, { type Express, type Router } from "express";
+import type { AppNeeds } from "./app-needs.ts";
 import { clientFiles } from "./client-files.ts";
 import { noSuchAddress, problemHandler } from "./problems.ts";
 import { requestIds } from "./request-id.ts";
 import { requestLimit } from "./request-limit.ts";
 import { requestLog } from "./request-log.ts";
-import type { Appraise } from "./revisions/judge-content.ts";
 import { caseFileRoutes } from "./routes/case-file-routes.ts";
 import { caseRoutes } from "./routes/case-routes.ts";
 import { docsRoutes } from "./routes/docs-routes.ts";
@@ -20,26 +16,6 @@ import { securityHeaders } from "./security/headers.ts";
 import { hostCheck } from "./security/host-check.ts";
 import { readablePath } from "./security/readable-path.ts";
 import { sameOriginWrites } from "./security/same-origin.ts";
-import type { Settings } from "./settings.ts";
-
-export type Clock = () => Instant;
-/** Makes a new UUID each time. */
-export type Ids = () => string;
-export type WriteSheet = (revision: Revision, options: { readonly paper: "A4" | "Letter" }) => Promise<Uint8Array>;
-
-export interface AppNeeds {
-  readonly stores: Stores;
-  readonly clock: Clock;
-  readonly ids: Ids;
-  readonly logger: Logger;
-  readonly writeSheet: WriteSheet;
-  readonly appraise: Appraise;
-  readonly settings: Pick<Settings, "host" | "publicNames" | "transport" | "requestsPerMinute">;
-  /** Called when nothing more can be written safely. */
-  readonly giveUp: (why: string) => void;
-  /** Where the built page is; without it only the API answers. */
-  readonly clientFolder?: string;
-}
 
 /** The whole server, not listening yet. Who may ask comes before what is asked. */
 export function createApp(needs: AppNeeds): Express {

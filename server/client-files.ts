@@ -21,7 +21,8 @@ export function clientFiles(folder: string): Router {
       redirect: false,
       cacheControl: false,
       setHeaders(response, path) {
-        if (path.startsWith(join(folder, "assets"))) response.setHeader("Cache-Control", "public, max-age=31536000, immutable");
+        if (path.startsWith(join(folder, "assets")))
+          response.setHeader("Cache-Control", "public, max-age=31536000, immutable");
       },
     }),
   );

@@ -14,7 +14,10 @@ export function fieldProblems(error: z.ZodError, body: unknown): FieldProblem[] 
 function problemsOf(issue: Issue, above: readonly PropertyKey[], body: unknown): FieldProblem[] {
   const path = [...above, ...issue.path];
   if (issue.code === "unrecognized_keys")
-    return issue.keys.map((key) => ({ pointer: pointerTo([...path, key.slice(0, 100)]), detail: "is not a known field" }));
+    return issue.keys.map((key) => ({
+      pointer: pointerTo([...path, key.slice(0, 100)]),
+      detail: "is not a known field",
+    }));
   if (issue.code === "invalid_union" && issue.errors.length > 0)
     return nearest(issue.errors).flatMap((inner) => problemsOf(inner, path, body));
   return [{ pointer: pointerTo(path), detail: `${issue.message}${got(issue, valueAt(body, path))}` }];
@@ -22,12 +25,19 @@ function problemsOf(issue: Issue, above: readonly PropertyKey[], body: unknown):
 
 /** Of the shapes a value might have had, the one it misses by least. */
 function nearest(branches: readonly (readonly Issue[])[]): readonly Issue[] {
-  const miss = (branch: readonly Issue[]) => branch.reduce((total, issue) => total + (issue.code === "unrecognized_keys" ? issue.keys.length : 1), 0);
+  const miss = (branch: readonly Issue[]) =>
+    branch.reduce((total, issue) => total + (issue.code === "unrecognized_keys" ? issue.keys.length : 1), 0);
   return branches.reduce((best, branch) => (miss(branch) < miss(best) ? branch : best));
 }
 
 function valueAt(body: unknown, path: readonly PropertyKey[]): unknown {
-  return path.reduce<unknown>((value, key) => (typeof value === "object" && value !== null && Object.hasOwn(value, key) ? (value as Record<PropertyKey, unknown>)[key] : undefined), body);
+  return path.reduce<unknown>(
+    (value, key) =>
+      typeof value === "object" && value !== null && Object.hasOwn(value, key)
+        ? (value as Record<PropertyKey, unknown>)[key]
+        : undefined,
+    body,
+  );
 }
 
 /** The value that came, unless the message has it already or it is too long to help. */

@@ -1,7 +1,8 @@
 import { DomainError } from "../shared/errors.ts";
 import { RequestError } from "./request-errors.ts";
 
-const kineticsFields = /^(volumeL|clearanceLPerH|eliminationRatePerH|halfLifeH|absorptionRatePerH|bioavailability|saltFactor|lagH)$/;
+const kineticsFields =
+  /^(volumeL|clearanceLPerH|eliminationRatePerH|halfLifeH|absorptionRatePerH|bioavailability|saltFactor|lagH)$/;
 
 /**
  * Where in a request the field stands that the engine named.

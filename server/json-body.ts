@@ -14,7 +14,9 @@ export function jsonBody(limit: keyof typeof bodyLimits): RequestHandler {
   const parse = express.json({ limit: bodyLimits[limit], type: "application/json", inflate: false, strict: false });
   return async (request, response, next) => {
     requireJson(request);
-    await new Promise<void>((resolve, reject) => parse(request, response, (error: unknown) => (error === undefined ? resolve() : reject(error))));
+    await new Promise<void>((resolve, reject) =>
+      parse(request, response, (error: unknown) => (error === undefined ? resolve() : reject(error))),
+    );
     // Express leaves the body undefined where there was none, so that reading a field of it would throw.
     const body: unknown = request.body;
     if (body === undefined) throw missingBody();
@@ -26,7 +28,8 @@ export function jsonBody(limit: keyof typeof bodyLimits): RequestHandler {
 function requireJson(request: Request): void {
   if (!hasBody(request.headers)) throw missingBody();
   const type = request.get("Content-Type") ?? "";
-  if (!/^application\/json\s*(;|$)/i.test(type.trim())) throw new RequestError("not-json", "Content-Type must be application/json");
+  if (!/^application\/json\s*(;|$)/i.test(type.trim()))
+    throw new RequestError("not-json", "Content-Type must be application/json");
 }
 
 function hasBody(headers: IncomingHttpHeaders): boolean {

@@ -22,7 +22,8 @@ export function checkJson(body: unknown): void {
   const errors: FieldProblem[] = [];
   for (let place = open.pop(); place !== undefined && errors.length < 50; place = open.pop()) {
     const { value, depth } = place;
-    if (typeof value === "string" && !isKept(value)) errors.push({ pointer: pointerTo(pathOf(place)), detail: "must not hold a NUL or half a surrogate pair" });
+    if (typeof value === "string" && !isKept(value))
+      errors.push({ pointer: pointerTo(pathOf(place)), detail: "must not hold a NUL or half a surrogate pair" });
     if (typeof value !== "object" || value === null) continue;
     if (depth >= deepest) throw new RequestError("too-deep", `at most ${deepest} levels are read`);
     for (const key of Array.isArray(value) ? value.keys() : Object.keys(value)) {

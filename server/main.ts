@@ -30,7 +30,7 @@ async function start(): Promise<void> {
   const db = openDatabase(settings.database);
   const stores = sqliteStores(db);
   const jobs = jobRunner();
-  await insertDemoCase(stores, jobs.appraise);
+  await insertDemoCase(stores, jobs.appraise, clock());
   await stores.answers.forgetBefore(new Date(Date.now() - rememberAnswersMs).toISOString());
   const built = join(projectFolder(), ".build", "client");
   const app = createApp({
@@ -44,7 +44,14 @@ async function start(): Promise<void> {
     giveUp: (why) => void stop(why, 1),
     ...(existsSync(join(built, "index.html")) && { clientFolder: built }),
   });
-  const serving = await serve(app, settings);
+  const close = async () => {
+    await jobs.stop();
+    closeDatabase(db);
+  };
+  const serving = await serve(app, settings).catch(async (error: unknown) => {
+    await close();
+    throw error;
+  });
 
   let stopping = false;
   const stop = async (why: string, exitCode: number) => {
@@ -52,15 +59,16 @@ async function start(): Promise<void> {
     stopping = true;
     logger.info({ why }, "stopping");
     await serving.stop();
-    await jobs.stop();
-    closeDatabase(db);
+    await close();
     process.exitCode = exitCode;
   };
   process.on("SIGTERM", () => void stop("SIGTERM", 0));
   process.on("SIGINT", () => void stop("SIGINT", 0));
-  process.on("unhandledRejection", (error) => {
-    logger.fatal({ error: silentDescription(error) }, "an error that nobody handled");
-    void stop("unhandled rejection", 1);
-  });
+  // Left to itself, Node would print the error whole, with whatever somebody typed in its message.
+  for (const event of ["unhandledRejection", "uncaughtException"] as const)
+    process.on(event, (error: unknown) => {
+      logger.fatal({ error: silentDescription(error) }, "an error that nobody handled");
+      void stop(event, 1);
+    });
   process.stdout.write(`Ebbline is ready at ${serving.address}\n`);
 }

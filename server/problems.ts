@@ -1,6 +1,12 @@
-import type { ErrorRequestHandler, Request, RequestHandler } from "express";
+import type { ErrorRequestHandler, RequestHandler } from "express";
 import type { Logger } from "pino";
-import type { AlteredRowError, KeyReusedError, NotFoundError, StaleError, TooManyAlternativesError } from "../db/store-errors.ts";
+import type {
+  AlteredRowError,
+  KeyReusedError,
+  NotFoundError,
+  StaleError,
+  TooManyAlternativesError,
+} from "../db/store-errors.ts";
 import type { Problem } from "../shared/contract/problem.ts";
 import { DomainError } from "../shared/errors.ts";
 import { drain } from "./drain.ts";
@@ -8,7 +14,13 @@ import { requestIdOf } from "./request-id.ts";
 import { RequestError, type RequestErrorCode } from "./request-errors.ts";
 import { silentDescription } from "./silent-description.ts";
 
-type StoreErrorCode = (NotFoundError | StaleError | TooManyAlternativesError | KeyReusedError | AlteredRowError)["code"];
+type StoreErrorCode = (
+  | NotFoundError
+  | StaleError
+  | TooManyAlternativesError
+  | KeyReusedError
+  | AlteredRowError
+)["code"];
 type DriverErrorCode = "storage-full" | "storage-busy" | "storage-failed";
 export type ErrorCode = RequestErrorCode | StoreErrorCode | DriverErrorCode | DomainError["code"] | "internal";
 
@@ -59,7 +71,8 @@ export function problemHandler(logger: Logger, giveUp: (why: string) => void): E
   return async (error: unknown, request, response, next) => {
     const { code, detail, errors, headers } = described(error);
     const { status, title } = problemTable[code];
-    if (status >= 500) logger.error({ requestId: requestIdOf(request), code, error: silentDescription(error) }, "request failed");
+    if (status >= 500)
+      logger.error({ requestId: requestIdOf(request), code, error: silentDescription(error) }, "request failed");
     if (code === "storage-failed") giveUp("the disk failed");
     if (response.headersSent) return next(error);
     // Answering before the body was read resets connections that are kept alive.
@@ -128,10 +141,4 @@ function detailOf(code: ErrorCode, error: unknown): string {
   if (code === "too-large") return "send less at once; the limits are listed at /api/docs";
   if (code === "not-json") return "send UTF-8 without compression";
   return "the address has an escape that is not complete or not UTF-8";
-}
-
-/** For tests and logs: the template of the route that took a request, never the address itself. */
-export function routeOf(request: Request): string {
-  const route = request.route as { path?: unknown } | undefined;
-  return typeof route?.path === "string" ? route.path : "none";
 }

@@ -12,7 +12,11 @@ export function read<Schema extends z.ZodType>(schema: Schema, value: unknown): 
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data;
   const errors = fieldProblems(parsed.error, value);
-  throw new RequestError("validation", errors.length === 1 ? "one value is not usable" : `${errors.length} values are not usable`, { errors });
+  throw new RequestError(
+    "validation",
+    errors.length === 1 ? "one value is not usable" : `${errors.length} values are not usable`,
+    { errors },
+  );
 }
 
 /**

@@ -48,5 +48,8 @@ export class RequestError extends Error {
 
 /** "#/doses/0/atH": a JSON Pointer (RFC 6901) as a URI fragment. */
 export function pointerTo(path: readonly PropertyKey[]): string {
-  return ["#", ...path.map((part) => encodeURIComponent(String(part).replaceAll("~", "~0").replaceAll("/", "~1")))].join("/");
+  return [
+    "#",
+    ...path.map((part) => encodeURIComponent(String(part).replaceAll("~", "~0").replaceAll("/", "~1"))),
+  ].join("/");
 }

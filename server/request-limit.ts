@@ -12,7 +12,9 @@ export function requestLimit(perMinute: number): RequestHandler {
     // The proxy headers are not trusted (Express leaves them alone), so that they come is no fault of ours.
     validate: { xForwardedForHeader: false, forwardedHeader: false },
     handler() {
-      throw new RequestError("too-many-requests", `at most ${perMinute} requests a minute`, { headers: { "Retry-After": "60" } });
+      throw new RequestError("too-many-requests", `at most ${perMinute} requests a minute`, {
+        headers: { "Retry-After": "60" },
+      });
     },
   });
 }

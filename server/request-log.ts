@@ -1,7 +1,7 @@
 import type { RequestHandler } from "express";
 import type { Logger } from "pino";
-import { routeOf } from "./problems.ts";
 import { requestIdOf } from "./request-id.ts";
+import { routeOf } from "./route-of.ts";
 
 /**
  * One line a request: when, which route, how it ended, how long it took. No address (its query may hold

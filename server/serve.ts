@@ -13,14 +13,20 @@ export interface Serving {
  * Listens, or rejects with the error of listening: Express's own callback is also called with an error,
  * which is easily taken for success.
  */
-export async function serve(app: Express, { port, host }: { readonly port: number; readonly host: string }): Promise<Serving> {
+export async function serve(
+  app: Express,
+  { port, host }: { readonly port: number; readonly host: string },
+): Promise<Serving> {
   const server = createServer({ requestTimeout: 60_000, headersTimeout: 20_000 }, app);
   await new Promise<void>((resolve, reject) => {
     server.once("error", reject);
     server.listen(port, host, resolve);
   });
   const { address, port: taken } = server.address() as AddressInfo;
-  return { address: `http://${address.includes(":") ? `[${address}]` : address}:${taken}`, stop: () => stopped(server) };
+  return {
+    address: `http://${address.includes(":") ? `[${address}]` : address}:${taken}`,
+    stop: () => stopped(server),
+  };
 }
 
 function stopped(server: Server): Promise<void> {

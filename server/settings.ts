@@ -5,17 +5,29 @@ import { z } from "zod";
 const loopback = /^(localhost|127(\.\d{1,3}){3}|::1)$/;
 const yes = z.literal("yes", { error: 'must be "yes" or left out' }).optional();
 
-const port = z.string().regex(/^\d{1,5}$/, { error: "must be a port number from 0 to 65535" }).transform(Number).pipe(z.number().max(65_535, { error: "must be a port number from 0 to 65535" }));
+const port = z
+  .string()
+  .regex(/^\d{1,5}$/, { error: "must be a port number from 0 to 65535" })
+  .transform(Number)
+  .pipe(z.number().max(65_535, { error: "must be a port number from 0 to 65535" }));
 
 const Environment = z.object({
   PORT: port.default(7317),
-  HOST: z.string().regex(/^[A-Za-z0-9.:_-]+$/, { error: "must be a host name or an address" }).default("127.0.0.1"),
+  HOST: z
+    .string()
+    .regex(/^[A-Za-z0-9.:_-]+$/, { error: "must be a host name or an address" })
+    .default("127.0.0.1"),
   EBBLINE_DATABASE: z.string().min(1, { error: "must be the path of a file" }).optional(),
   EBBLINE_LOG_LEVEL: z
-    .enum(["fatal", "error", "warn", "info", "debug", "trace", "silent"], { error: "must be fatal, error, warn, info, debug, trace or silent" })
+    .enum(["fatal", "error", "warn", "info", "debug", "trace", "silent"], {
+      error: "must be fatal, error, warn, info, debug, trace or silent",
+    })
     .default("info"),
   EBBLINE_BEHIND_TLS: yes,
-  EBBLINE_PUBLIC_NAMES: z.string().regex(/^[A-Za-z0-9.-]+(,[A-Za-z0-9.-]+)*$/, { error: "must be host names with commas between them" }).optional(),
+  EBBLINE_PUBLIC_NAMES: z
+    .string()
+    .regex(/^[A-Za-z0-9.-]+(,[A-Za-z0-9.-]+)*$/, { error: "must be host names with commas between them" })
+    .optional(),
   EBBLINE_REQUESTS_PER_MINUTE: z
     .string()
     .regex(/^[1-9]\d{0,8}$/, { error: "must be a whole number above 0" })
@@ -50,14 +62,23 @@ export class SettingsError extends Error {
  *
  * @throws {SettingsError} naming each variable that cannot be used and what is allowed
  */
-export function readSettings(environment: Readonly<Record<string, string | undefined>>, platform: NodeJS.Platform): Settings {
+export function readSettings(
+  environment: Readonly<Record<string, string | undefined>>,
+  platform: NodeJS.Platform,
+): Settings {
   const read = Environment.safeParse(environment);
   if (!read.success)
-    throw new SettingsError(read.error.issues.map(({ path, message }) => `${path.join(".")} ${message}, got "${environment[String(path[0])]}"`));
+    throw new SettingsError(
+      read.error.issues.map(
+        ({ path, message }) => `${path.join(".")} ${message}, got "${environment[String(path[0])]}"`,
+      ),
+    );
   const { HOST: host, EBBLINE_BEHIND_TLS: behindTls } = read.data;
   // Doses and levels in plain text on a network can be read and changed on the way.
   if (!loopback.test(host) && behindTls !== "yes")
-    throw new SettingsError([`HOST "${host}" can be reached from other machines: allowed only behind a proxy that speaks TLS, with EBBLINE_BEHIND_TLS=yes`]);
+    throw new SettingsError([
+      `HOST "${host}" can be reached from other machines: allowed only behind a proxy that speaks TLS, with EBBLINE_BEHIND_TLS=yes`,
+    ]);
   return {
     port: read.data.PORT,
     host,

@@ -28,5 +28,9 @@ function framesOf({ stack = "", message }: Error): string[] {
   const end = stack.indexOf(message);
   const rest = end < 0 ? "" : stack.slice(end + message.length);
   if (message !== "" && rest.includes(message)) return [];
-  return rest.split("\n").map((line) => line.trim()).filter((line) => line.startsWith("at ")).slice(0, 12);
+  return rest
+    .split("\n")
+    .map((line) => line.trim())
+    .filter((line) => line.startsWith("at "))
+    .slice(0, 12);
 }

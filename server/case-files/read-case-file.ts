@@ -24,8 +24,14 @@ export function readCaseFile(body: unknown): CaseFile {
   const errors = file.regimens.flatMap((regimen, index) => faultsOf(regimen, ["regimens", index]));
   const active = file.regimens.filter(({ retired }) => !retired).length;
   if (active > counts.alternatives)
-    errors.push({ pointer: "#/regimens", detail: `must hold at most ${counts.alternatives} alternatives that are not retired, got ${active}` });
-  if (errors.length > 0) throw new RequestError("case-file", "the file was changed after it was written, or is not whole", { errors: errors.slice(0, 50) });
+    errors.push({
+      pointer: "#/regimens",
+      detail: `must hold at most ${counts.alternatives} alternatives that are not retired, got ${active}`,
+    });
+  if (errors.length > 0)
+    throw new RequestError("case-file", "the file was changed after it was written, or is not whole", {
+      errors: errors.slice(0, 50),
+    });
   return file;
 }
 
@@ -33,9 +39,19 @@ function faultsOf({ revisions }: CaseFile["regimens"][number], path: readonly Pr
   return revisions.flatMap((revision, index) => {
     const at = [...path, "revisions", index];
     if (revision.number !== index + 1)
-      return [{ pointer: pointerTo([...at, "number"]), detail: `must be ${index + 1}, got ${revision.number}: revisions are numbered from 1 without a gap` }];
+      return [
+        {
+          pointer: pointerTo([...at, "number"]),
+          detail: `must be ${index + 1}, got ${revision.number}: revisions are numbered from 1 without a gap`,
+        },
+      ];
     if (contentHashOf(revision) !== revision.contentHash)
-      return [{ pointer: pointerTo([...at, "contentHash"]), detail: "does not belong to what the revision says: it was changed after it was saved" }];
+      return [
+        {
+          pointer: pointerTo([...at, "contentHash"]),
+          detail: "does not belong to what the revision says: it was changed after it was saved",
+        },
+      ];
     return [];
   });
 }

@@ -17,7 +17,14 @@ export function writeCaseFile(
       retired: regimen.retired,
       revisions: [...revisions]
         .sort((one, other) => one.number - other.number)
-        .map(({ number, createdAt, reason, preparedBy, content, contentHash }) => ({ number, createdAt, reason, preparedBy, content, contentHash })),
+        .map(({ number, createdAt, reason, preparedBy, content, contentHash }) => ({
+          number,
+          createdAt,
+          reason,
+          preparedBy,
+          content,
+          contentHash,
+        })),
     })),
   };
 }

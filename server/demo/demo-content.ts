@@ -59,7 +59,11 @@ const lateDose: NonNullable<z.input<typeof Schedule>["records"]> = [
 
 const loadingThenTwiceDaily: z.input<typeof Schedule> = {
   orders: [
-    { id: "loading", give: { kind: "infusion", amountMg: 600, durationH: 1 }, when: { kind: "once", at: "2026-03-27T08:00:00+00:00" } },
+    {
+      id: "loading",
+      give: { kind: "infusion", amountMg: 600, durationH: 1 },
+      when: { kind: "once", at: "2026-03-27T08:00:00+00:00" },
+    },
     {
       id: "morning-and-evening",
       give: { kind: "infusion", amountMg: 600, durationH: 1 },
@@ -89,16 +93,36 @@ const byPump: z.input<typeof Schedule> = {
 };
 
 /** What is saved, in this order, by the label of its alternative. */
-export const demoRevisions: readonly { readonly label: string; readonly reason: string; readonly createdAt: string; readonly schedule: z.input<typeof Schedule> }[] = [
-  { label: "Every 8 h", reason: "First plan (invented)", createdAt: "2026-03-27T07:30:00+00:00", schedule: everyEightHours },
+export const demoRevisions: readonly {
+  readonly label: string;
+  readonly reason: string;
+  readonly createdAt: string;
+  readonly schedule: z.input<typeof Schedule>;
+}[] = [
+  {
+    label: "Every 8 h",
+    reason: "First plan (invented)",
+    createdAt: "2026-03-27T07:30:00+00:00",
+    schedule: everyEightHours,
+  },
   {
     label: "Every 8 h",
     reason: "The second dose was given late (invented)",
     createdAt: "2026-03-27T18:45:00+00:00",
     schedule: { ...everyEightHours, records: lateDose },
   },
-  { label: "Every 12 h after a loading dose", reason: "To compare (invented)", createdAt: "2026-03-27T18:50:00+00:00", schedule: loadingThenTwiceDaily },
-  { label: "Continuous by pump", reason: "To compare (invented)", createdAt: "2026-03-27T18:55:00+00:00", schedule: byPump },
+  {
+    label: "Every 12 h after a loading dose",
+    reason: "To compare (invented)",
+    createdAt: "2026-03-27T18:50:00+00:00",
+    schedule: loadingThenTwiceDaily,
+  },
+  {
+    label: "Continuous by pump",
+    reason: "To compare (invented)",
+    createdAt: "2026-03-27T18:55:00+00:00",
+    schedule: byPump,
+  },
 ];
 
 /** All that one revision of the demo says. */

@@ -1,13 +1,22 @@
 import { standingCaution } from "../../shared/cautions/standing.ts";
 import { isWrite, type Operation } from "../openapi/operation.ts";
 import { operations } from "../openapi/operations.ts";
-import { contractSchemas, type JsonSchema, type NamedSchemas, reachable, schemaOrReference } from "../openapi/schemas.ts";
+import {
+  contractSchemas,
+  type JsonSchema,
+  type NamedSchemas,
+  reachable,
+  schemaOrReference,
+} from "../openapi/schemas.ts";
 import { bodyLimits } from "../json-body.ts";
 import { html, type Markup } from "./markup.ts";
 
 /** The API to read: every operation and every shape, made from the same schemas as the OpenAPI document. */
 export function docsPage(): string {
-  const used = operations.flatMap(({ body, answer }) => [body && schemaOrReference(body, "input"), "schema" in answer && schemaOrReference(answer.schema, "output")]);
+  const used = operations.flatMap(({ body, answer }) => [
+    body && schemaOrReference(body, "input"),
+    "schema" in answer && schemaOrReference(answer.schema, "output"),
+  ]);
   const schemas = reachable(contractSchemas(), used);
   return html`<!doctype html>
 <html lang="en">
@@ -80,7 +89,10 @@ function fieldTable(schema: JsonSchema): Markup {
 <thead><tr><th scope="col">Field</th><th scope="col">Type</th><th scope="col">Needed</th><th scope="col">What it is</th></tr></thead>
 <tbody>
 ${Object.entries(properties).map(
-  ([name, field]) => html`<tr><th scope="row"><code>${name}</code></th><td>${shape(field)}</td><td>${required.includes(name) ? "yes" : "no"}</td><td>${about(field)}</td></tr>
+  ([
+    name,
+    field,
+  ]) => html`<tr><th scope="row"><code>${name}</code></th><td>${shape(field)}</td><td>${required.includes(name) ? "yes" : "no"}</td><td>${about(field)}</td></tr>
 `,
 )}
 </tbody>
@@ -92,18 +104,35 @@ function shape(schema: JsonSchema): Markup {
   const reference = typeof schema["$ref"] === "string" ? schema["$ref"].split("/").at(-1)! : undefined;
   if (reference !== undefined) return html`<a href="#${reference}">${reference}</a>`;
   if (schema["const"] !== undefined) return html`<code>${JSON.stringify(schema["const"])}</code>`;
-  if (Array.isArray(schema["enum"])) return html`<code>${schema["enum"].map((value) => JSON.stringify(value)).join(" | ")}</code>`;
+  if (Array.isArray(schema["enum"]))
+    return html`<code>${schema["enum"].map((value) => JSON.stringify(value)).join(" | ")}</code>`;
   const branches = (schema["oneOf"] ?? schema["anyOf"]) as JsonSchema[] | undefined;
-  if (branches !== undefined) return html`${branches.map((branch, index) => html`${index === 0 ? "" : " or "}${shape(branch)}`)}`;
+  if (branches !== undefined)
+    return html`${branches.map((branch, index) => html`${index === 0 ? "" : " or "}${shape(branch)}`)}`;
   if (schema["type"] === "array") return html`list of ${shape((schema["items"] ?? {}) as JsonSchema)}`;
   return html`${String(schema["type"] ?? "any")}`;
 }
 
 function about(field: JsonSchema): string {
-  const { description, minimum, maximum, default: byDefault, maxItems, maxLength } = field as Record<string, string | number | undefined>;
-  const range = typeof minimum === "number" && typeof maximum === "number" && Math.abs(maximum) < Number.MAX_SAFE_INTEGER ? `from ${minimum} to ${maximum}` : "";
+  const {
+    description,
+    minimum,
+    maximum,
+    default: byDefault,
+    maxItems,
+    maxLength,
+  } = field as Record<string, string | number | undefined>;
+  const range =
+    typeof minimum === "number" && typeof maximum === "number" && Math.abs(maximum) < Number.MAX_SAFE_INTEGER
+      ? `from ${minimum} to ${maximum}`
+      : "";
   const most = maxItems ?? maxLength;
-  return [description ?? "", range, most === undefined ? "" : `at most ${most}`, byDefault === undefined ? "" : `default ${JSON.stringify(byDefault)}`]
+  return [
+    description ?? "",
+    range,
+    most === undefined ? "" : `at most ${most}`,
+    byDefault === undefined ? "" : `default ${JSON.stringify(byDefault)}`,
+  ]
     .filter((part) => part !== "")
     .join("; ");
 }

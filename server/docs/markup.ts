@@ -17,5 +17,10 @@ export function html(fixed: TemplateStringsArray, ...parts: readonly Part[]): Ma
 function write(part: Part): string {
   if (part instanceof Markup) return part.text;
   if (typeof part === "object") return part.map(({ text }) => text).join("");
-  return String(part).replaceAll("&", "&amp;").replaceAll("<", "&lt;").replaceAll(">", "&gt;").replaceAll('"', "&quot;").replaceAll("'", "&#39;");
+  return String(part)
+    .replaceAll("&", "&amp;")
+    .replaceAll("<", "&lt;")
+    .replaceAll(">", "&gt;")
+    .replaceAll('"', "&quot;")
+    .replaceAll("'", "&#39;");
 }

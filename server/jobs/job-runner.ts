@@ -1,5 +1,5 @@
 import { Worker } from "node:worker_threads";
-import type { WriteSheet } from "../app.ts";
+import type { WriteSheet } from "../app-needs.ts";
 import { RequestError } from "../request-errors.ts";
 import type { Appraisal } from "../revisions/appraise.ts";
 import type { Appraise } from "../revisions/judge-content.ts";
@@ -39,7 +39,6 @@ export function jobRunner(): JobRunner {
   };
   const started = (): Worker => {
     const made = new Worker(new URL("./job-thread.js", import.meta.url));
-    made.unref();
     made.on("message", (result: Result) => {
       const job = waiting.get(result.id);
       if (job === undefined) return;
@@ -50,6 +49,8 @@ export function jobRunner(): JobRunner {
     });
     made.on("error", () => fail(new Error("the job thread failed")));
     made.on("exit", () => made === thread && fail(new Error("the job thread ended")));
+    // Last, because listening holds the process open again: a thread without a job must not.
+    made.unref();
     return made;
   };
   const run = (job: Job): Promise<unknown> =>

@@ -11,4 +11,6 @@ export interface Order {
   readonly job: Job;
 }
 
-export type Result = { readonly id: number; readonly ok: true; readonly value: unknown } | { readonly id: number; readonly ok: false; readonly error: SilentDescription };
+export type Result =
+  | { readonly id: number; readonly ok: true; readonly value: unknown }
+  | { readonly id: number; readonly ok: false; readonly error: SilentDescription };

@@ -25,7 +25,8 @@ const statusNames: Readonly<Record<number, string>> = {
 /** The API as an OpenAPI 3.1 document, made from the schemas that requests are really read with. */
 export function openApiDocument(): JsonSchema {
   const paths: Record<string, Record<string, unknown>> = {};
-  for (const operation of operations) (paths[operation.path] ??= {})[operation.method] = describe(operation);
+  for (const operation of operations)
+    paths[operation.path] = { ...paths[operation.path], [operation.method]: describe(operation) };
   return {
     openapi: "3.1.0",
     jsonSchemaDialect: "https://json-schema.org/draft/2020-12/schema",
@@ -48,10 +49,20 @@ function describe(operation: Operation): JsonSchema {
     operationId: operationId(operation),
     ...(description !== undefined && { description }),
     parameters: parametersOf(operation),
-    ...(body !== undefined && { requestBody: { required: true, content: { "application/json": { schema: schemaOrReference(body, "input") } } } }),
+    ...(body !== undefined && {
+      requestBody: { required: true, content: { "application/json": { schema: schemaOrReference(body, "input") } } },
+    }),
     responses: {
       [answer.status]: { description: answer.description, content: contentOf(answer) },
-      ...Object.fromEntries(statuses.map((status) => [status, { description: statusNames[status], content: { "application/problem+json": { schema: schemaOrReference(Problem, "output") } } }])),
+      ...Object.fromEntries(
+        statuses.map((status) => [
+          status,
+          {
+            description: statusNames[status],
+            content: { "application/problem+json": { schema: schemaOrReference(Problem, "output") } },
+          },
+        ]),
+      ),
     },
   };
 }
@@ -62,13 +73,24 @@ function contentOf(answer: Operation["answer"]): JsonSchema {
 }
 
 function parametersOf(operation: Operation): JsonSchema[] {
-  const inPath = [...operation.path.matchAll(/\{(\w+)\}/g)].map(([, name]) => ({ name, in: "path", required: true, schema: { type: "string", format: "uuid" } }));
-  const inQuery = Object.entries(operation.query?.shape ?? {}).map(([name, schema]) => ({ name, in: "query", required: false, schema: schemaOrReference(schema as z.ZodType, "input") }));
+  const inPath = [...operation.path.matchAll(/\{(\w+)\}/g)].map(([, name]) => ({
+    name,
+    in: "path",
+    required: true,
+    schema: { type: "string", format: "uuid" },
+  }));
+  const inQuery = Object.entries(operation.query?.shape ?? {}).map(([name, schema]) => ({
+    name,
+    in: "query",
+    required: false,
+    schema: schemaOrReference(schema as z.ZodType, "input"),
+  }));
   const key = {
     name: "Idempotency-Key",
     in: "header",
     required: true,
-    description: "A new UUID for each write and the same one for each retry of it: a retry answers what the first try answered.",
+    description:
+      "A new UUID for each write and the same one for each retry of it: a retry answers what the first try answered.",
     schema: { type: "string", format: "uuid" },
   };
   return [...inPath, ...inQuery, ...(isWrite(operation) ? [key] : [])];

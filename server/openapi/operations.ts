@@ -1,5 +1,15 @@
 import { z } from "zod";
-import { Case, CaseChange, CaseDraft, CaseFile, Regimen, RegimenChange, RegimenDraft, Revision, RevisionDraft } from "../../shared/contract/case.ts";
+import {
+  Case,
+  CaseChange,
+  CaseDraft,
+  CaseFile,
+  Regimen,
+  RegimenChange,
+  RegimenDraft,
+  Revision,
+  RevisionDraft,
+} from "../../shared/contract/case.ts";
 import { PredictionRequest, PredictionResponse } from "../../shared/contract/prediction.ts";
 import { SteadyStateRequest, SteadyStateResponse } from "../../shared/contract/steady-state.ts";
 import { CaseListQuery } from "../routes/case-routes.ts";
@@ -17,7 +27,8 @@ export const operations: readonly Operation[] = [
     method: "post",
     path: "/predictions",
     summary: "Predict concentrations of a course of doses",
-    description: "Keeps nothing. Concentrations in mg/L at the times asked for, exposure over a window, and what remains of each dose at one time.",
+    description:
+      "Keeps nothing. Concentrations in mg/L at the times asked for, exposure over a window, and what remains of each dose at one time.",
     body: PredictionRequest,
     answer: ok("Concentrations, exposure and cautions", PredictionResponse),
     problems: [413, 415, 422],
@@ -31,7 +42,14 @@ export const operations: readonly Operation[] = [
     answer: ok("Metrics of one cycle at steady state and cautions", SteadyStateResponse),
     problems: [413, 415, 422],
   },
-  { method: "get", path: "/cases", summary: "List cases, newest change first", query: CaseListQuery, answer: ok("Cases", CaseList), problems: [422] },
+  {
+    method: "get",
+    path: "/cases",
+    summary: "List cases, newest change first",
+    query: CaseListQuery,
+    answer: ok("Cases", CaseList),
+    problems: [422],
+  },
   {
     method: "post",
     path: "/cases",
@@ -69,12 +87,19 @@ export const operations: readonly Operation[] = [
     method: "post",
     path: "/case-files",
     summary: "Upload a case file as a new case",
-    description: "At most 20 MB. Every hash is checked and every second opinion computed again; all of it is taken in or nothing.",
+    description:
+      "At most 20 MB. Every hash is checked and every second opinion computed again; all of it is taken in or nothing.",
     body: CaseFile,
     answer: made("The new case", Case),
     problems: [413, 415, 422],
   },
-  { method: "get", path: "/cases/{caseId}/regimens", summary: "List the alternatives of a case", answer: ok("Alternatives, retired ones too", RegimenList), problems: [404] },
+  {
+    method: "get",
+    path: "/cases/{caseId}/regimens",
+    summary: "List the alternatives of a case",
+    answer: ok("Alternatives, retired ones too", RegimenList),
+    problems: [404],
+  },
   {
     method: "post",
     path: "/cases/{caseId}/regimens",
@@ -109,7 +134,13 @@ export const operations: readonly Operation[] = [
     answer: made("The revision with its number, hash and second opinion", Revision),
     problems: [404, 409, 413, 415, 422],
   },
-  { method: "get", path: "/revisions/{revisionId}", summary: "One revision", answer: ok("The revision", Revision), problems: [404] },
+  {
+    method: "get",
+    path: "/revisions/{revisionId}",
+    summary: "One revision",
+    answer: ok("The revision", Revision),
+    problems: [404],
+  },
   {
     method: "get",
     path: "/revisions/{revisionId}/sheet.pdf",
@@ -120,7 +151,13 @@ export const operations: readonly Operation[] = [
     problems: [404, 422],
   },
   { method: "get", path: "/health", summary: "Whether the server lives", answer: ok("It does", Health), problems: [] },
-  { method: "get", path: "/ready", summary: "Whether its database is open and whole", answer: ok("It is", Health), problems: [503] },
+  {
+    method: "get",
+    path: "/ready",
+    summary: "Whether its database is open and whole",
+    answer: ok("It is", Health),
+    problems: [503],
+  },
   {
     method: "get",
     path: "/openapi.json",
@@ -128,6 +165,18 @@ export const operations: readonly Operation[] = [
     answer: ok("OpenAPI document", z.looseObject({ openapi: z.string() })),
     problems: [],
   },
-  { method: "get", path: "/docs", summary: "This description as a readable page", answer: file("A page", "text/html"), problems: [] },
-  { method: "get", path: "/docs.css", summary: "The style of that page", answer: file("A style sheet", "text/css"), problems: [] },
+  {
+    method: "get",
+    path: "/docs",
+    summary: "This description as a readable page",
+    answer: file("A page", "text/html"),
+    problems: [],
+  },
+  {
+    method: "get",
+    path: "/docs.css",
+    summary: "The style of that page",
+    answer: file("A style sheet", "text/css"),
+    problems: [],
+  },
 ];

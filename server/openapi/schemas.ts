@@ -12,7 +12,9 @@ export type NamedSchemas = Readonly<Record<string, JsonSchema>>;
 export function contractSchemas(): NamedSchemas {
   const answers = schemasOf("output", "");
   const requests = schemasOf("input", "Input");
-  return Object.fromEntries(Object.entries({ ...answers, ...requests }).sort(([one], [other]) => (one < other ? -1 : 1)));
+  return Object.fromEntries(
+    Object.entries({ ...answers, ...requests }).sort(([one], [other]) => (one < other ? -1 : 1)),
+  );
 }
 
 /** A reference to a named schema of the contract, or the schema itself where it has no name. */

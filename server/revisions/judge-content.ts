@@ -22,12 +22,17 @@ export async function judgeContent(content: RegimenContent, at: string, appraise
   }
   const { open, secondOpinion } = appraisal;
   if (open.length > 0) {
-    const errors = open.slice(0, 50).map(({ about, code, text }) => ({ pointer: about.startsWith("/") ? at + about : at, detail: `${text} (${code})` }));
+    const errors = open.slice(0, 50).map(({ about, code, text }) => ({
+      pointer: about.startsWith("/") ? at + about : at,
+      detail: `${text} (${code})`,
+    }));
     throw new RequestError("unanswered-cautions", "write a reason for each, or change what raised it", { errors });
   }
   if (!(secondOpinion.relative <= secondOpinionTolerance)) {
     const detail = `largest difference ${secondOpinion.largestDifferenceMgPerL} mg/L at ${secondOpinion.atH} h, ${secondOpinion.relative} of the largest level; allowed ${secondOpinionTolerance}`;
-    throw new RequestError("second-opinion", "nothing was saved, and this plan must not be used", { errors: [{ pointer: at, detail }] });
+    throw new RequestError("second-opinion", "nothing was saved, and this plan must not be used", {
+      errors: [{ pointer: at, detail }],
+    });
   }
   return secondOpinion;
 }

@@ -9,9 +9,11 @@ import { intentionOf } from "../intention.ts";
 import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { read, readId } from "../read.ts";
-import type { Clock, Ids } from "../app.ts";
+import type { Clock, Ids } from "../app-needs.ts";
 
-export const CaseListQuery = z.strictObject({ archived: z.enum(["none", "only"], { error: 'must be "none" or "only"' }).default("none") });
+export const CaseListQuery = z.strictObject({
+  archived: z.enum(["none", "only"], { error: 'must be "none" or "only"' }).default("none"),
+});
 
 interface Needs {
   readonly stores: { readonly cases: CaseStore; readonly regimens: RegimenStore; readonly revisions: RevisionStore };
@@ -28,10 +30,18 @@ export function caseRoutes({ stores: { cases, regimens, revisions }, clock, ids 
       response.json({ cases: await cases.list(archived) });
     })
     .post(jsonBody("usual"), async (request, response) => {
-      const intention = intentionOf(request);
+      const intention = intentionOf(request, clock());
       const draft = read(CaseDraft, request.body);
-      const now = clock();
-      const made = Case.parse({ ...draft, id: ids(), version: 1, archived: false, demo: false, createdAt: now, changedAt: now });
+      const now = intention.at;
+      const made = Case.parse({
+        ...draft,
+        id: ids(),
+        version: 1,
+        archived: false,
+        demo: false,
+        createdAt: now,
+        changedAt: now,
+      });
       const kept = await cases.add(intention, made);
       response.status(201).location(`/api/cases/${kept.id}`).json(kept);
     })
@@ -50,9 +60,9 @@ export function caseRoutes({ stores: { cases, regimens, revisions }, clock, ids 
       response.json({ case: found, regimens: alternatives });
     })
     .patch(jsonBody("usual"), async (request, response) => {
-      const intention = intentionOf(request);
+      const intention = intentionOf(request, clock());
       const id = readId(CaseId, request.params.caseId, "case");
-      response.json(await cases.change(intention, id, read(CaseChange, request.body), clock()));
+      response.json(await cases.change(intention, id, read(CaseChange, request.body)));
     })
     .all(only("GET", "PATCH"));
   return router;

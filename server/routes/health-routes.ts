@@ -7,7 +7,13 @@ import { RequestError } from "../request-errors.ts";
 const checkEveryMs = 60_000;
 
 /** Whether the process lives, and whether its database is open and whole. */
-export function healthRoutes({ stores, nowMs }: { stores: Pick<Stores, "checkWhole" | "milestones">; nowMs: () => number }): Router {
+export function healthRoutes({
+  stores,
+  nowMs,
+}: {
+  stores: Pick<Stores, "checkWhole" | "milestones">;
+  nowMs: () => number;
+}): Router {
   const router = Router();
   let checkedAtMs = Number.NEGATIVE_INFINITY;
   router

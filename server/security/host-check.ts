@@ -9,7 +9,8 @@ export function hostCheck(names: readonly string[]): RequestHandler {
   const known = new Set(["localhost", "127.0.0.1", "[::1]", ...names.map(asHost)]);
   return (request, _response, next) => {
     const name = /^(\[[0-9a-f:.]+\]|[a-z0-9.-]+)(:\d{1,5})?$/.exec(request.headers.host?.toLowerCase() ?? "")?.[1];
-    if (name === undefined || !known.has(name)) throw new RequestError("wrong-host", "the Host header does not name this server");
+    if (name === undefined || !known.has(name))
+      throw new RequestError("wrong-host", "the Host header does not name this server");
     next();
   };
 }

@@ -3,7 +3,11 @@ import { RequestError } from "../request-errors.ts";
 
 /** Refuses addresses with a bad escape or a control character, which would otherwise reach a handler as an id. */
 export const readablePath: RequestHandler = (request, _response, next) => {
-  if (!isReadable(request.path)) throw new RequestError("malformed-path", "the address has an escape that is not complete, not UTF-8, or a control character");
+  if (!isReadable(request.path))
+    throw new RequestError(
+      "malformed-path",
+      "the address has an escape that is not complete, not UTF-8, or a control character",
+    );
   next();
 };
 

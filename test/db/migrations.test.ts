@@ -12,7 +12,9 @@ const folder = () => {
   return made;
 };
 const folders: string[] = [];
-afterEach(() => folders.splice(0).forEach((made) => rmSync(made, { recursive: true })));
+afterEach(() => {
+  for (const made of folders.splice(0)) rmSync(made, { recursive: true });
+});
 
 /** A database that has had the given files. */
 function migrated(files: Record<string, string>) {
@@ -27,7 +29,10 @@ function inFolder(files: Record<string, string>): Migration[] {
 }
 
 const first = { "0001-one.sql": "-- Why: a test.\nCREATE TABLE one (a INTEGER NOT NULL) STRICT;" };
-const second = { "0002-two.sql": "-- Why: a test; with a semicolon.\nCREATE TABLE two (b TEXT NOT NULL DEFAULT ';') STRICT; INSERT INTO two DEFAULT VALUES;" };
+const second = {
+  "0002-two.sql":
+    "-- Why: a test; with a semicolon.\nCREATE TABLE two (b TEXT NOT NULL DEFAULT ';') STRICT; INSERT INTO two DEFAULT VALUES;",
+};
 
 describe("migrations of the program", () => {
   test("are in order, each opening with its reason", () => {
@@ -40,7 +45,14 @@ describe("migrations of the program", () => {
     const db = openDatabase(":memory:");
     const tables = db.pragma("table_list") as { name: string; schema: string; strict: number }[];
     const ours = tables.filter(({ name, schema }) => schema === "main" && !name.startsWith("sqlite_"));
-    expect(ours.map(({ name }) => name).sort()).toEqual(["answered_write", "case_record", "migration", "milestone", "regimen", "revision"]);
+    expect(ours.map(({ name }) => name).sort()).toEqual([
+      "answered_write",
+      "case_record",
+      "migration",
+      "milestone",
+      "regimen",
+      "revision",
+    ]);
     expect(ours.filter(({ strict }) => strict !== 1)).toEqual([]);
   });
 });
@@ -62,7 +74,9 @@ describe("migrate", () => {
 
   test("refuses a file that is missing or renamed, naming it", () => {
     const { db } = migrated({ ...first, ...second });
-    expect(() => migrate(db, inFolder(first))).toThrow("migration 0002-two.sql, which this database has had, is missing from the program");
+    expect(() => migrate(db, inFolder(first))).toThrow(
+      "migration 0002-two.sql, which this database has had, is missing from the program",
+    );
     const renamed = inFolder({ ...first, "0002-other.sql": second["0002-two.sql"] });
     expect(() => migrate(db, renamed)).toThrow("0002-two.sql");
   });
@@ -75,7 +89,10 @@ describe("migrate", () => {
 
   test("leaves a file at the version before, when a migration fails half-way", () => {
     const { db } = migrated(first);
-    const broken = inFolder({ ...first, "0002-broken.sql": "-- Why: a test.\nCREATE TABLE two (b TEXT) STRICT; INSERT INTO nowhere VALUES (1);" });
+    const broken = inFolder({
+      ...first,
+      "0002-broken.sql": "-- Why: a test.\nCREATE TABLE two (b TEXT) STRICT; INSERT INTO nowhere VALUES (1);",
+    });
     expect(() => migrate(db, broken)).toThrow("nowhere");
     expect(db.pragma("user_version", { simple: true })).toBe(1);
     expect(db.prepare("SELECT name FROM sqlite_schema WHERE name = 'two'").get()).toBeUndefined();
@@ -85,10 +102,26 @@ describe("migrate", () => {
 
 describe("readMigrations", () => {
   test.for([
-    { name: "a gap", files: { "0002-two.sql": "-- Why: x" }, message: "migration 0002-two.sql is out of order: number 1 is expected" },
-    { name: "a number twice", files: { "0001-a.sql": "-- Why: x", "0001-b.sql": "-- Why: x" }, message: "migration 0001-b.sql is out of order" },
-    { name: "a name without a number", files: { "one.sql": "-- Why: x" }, message: "migration one.sql is out of order" },
-    { name: "no reason", files: { "0001-a.sql": "CREATE TABLE a (b)" }, message: "migration 0001-a.sql does not open with its reason" },
+    {
+      name: "a gap",
+      files: { "0002-two.sql": "-- Why: x" },
+      message: "migration 0002-two.sql is out of order: number 1 is expected",
+    },
+    {
+      name: "a number twice",
+      files: { "0001-a.sql": "-- Why: x", "0001-b.sql": "-- Why: x" },
+      message: "migration 0001-b.sql is out of order",
+    },
+    {
+      name: "a name without a number",
+      files: { "one.sql": "-- Why: x" },
+      message: "migration one.sql is out of order",
+    },
+    {
+      name: "no reason",
+      files: { "0001-a.sql": "CREATE TABLE a (b)" },
+      message: "migration 0001-a.sql does not open with its reason",
+    },
   ])("refuses $name", ({ files, message }) => {
     expect(() => inFolder(files as Record<string, string>)).toThrow(message);
   });

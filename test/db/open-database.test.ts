@@ -24,15 +24,34 @@ function refusal(open: () => unknown): DatabaseRefused {
 describe("openDatabase", () => {
   test("sets what the record of a patient needs, which the driver does not", () => {
     const db = openDatabase(fileAt("settings.sqlite"));
-    const settings = { journal_mode: "wal", synchronous: 2, foreign_keys: 1, recursive_triggers: 1, trusted_schema: 0, cell_size_check: 1, mmap_size: 0, secure_delete: 1, temp_store: 2, busy_timeout: 5000, wal_autocheckpoint: 1000, journal_size_limit: 67_108_864, application_id: applicationId, user_version: 1 };
-    for (const [name, value] of Object.entries(settings)) expect([name, db.pragma(name, { simple: true })]).toEqual([name, value]);
+    const settings = {
+      journal_mode: "wal",
+      synchronous: 2,
+      foreign_keys: 1,
+      recursive_triggers: 1,
+      trusted_schema: 0,
+      cell_size_check: 1,
+      mmap_size: 0,
+      secure_delete: 1,
+      temp_store: 2,
+      busy_timeout: 5000,
+      wal_autocheckpoint: 1000,
+      journal_size_limit: 67_108_864,
+      application_id: applicationId,
+      user_version: 1,
+    };
+    for (const [name, value] of Object.entries(settings))
+      expect([name, db.pragma(name, { simple: true })]).toEqual([name, value]);
     closeDatabase(db);
   });
 
   test("refuses to go on where a setting does not take", () => {
     const db = openDatabase(":memory:");
     const stubborn = new Proxy(db, {
-      get: (target, key) => (key === "pragma" ? (text: string, options: object) => (text === "synchronous" ? 1 : target.pragma(text, options)) : Reflect.get(target, key)),
+      get: (target, key) =>
+        key === "pragma"
+          ? (text: string, options: object) => (text === "synchronous" ? 1 : target.pragma(text, options))
+          : Reflect.get(target, key),
     });
     const { reason, message } = refusal(() => applyPragmas(stubborn));
     expect([reason, message]).toEqual(["settings", "the database did not take synchronous = FULL, it answers 1"]);

@@ -9,7 +9,7 @@ import { Case, RegimenContent, RegimenId, RevisionId } from "../../shared/contra
 import { caseDraft, content } from "../server/support/samples.ts";
 
 const at = "2026-05-04T09:00:00Z";
-const wish = () => ({ key: randomUUID(), fingerprint: "0".repeat(64) });
+const wish = () => ({ key: randomUUID(), fingerprint: "0".repeat(64), at });
 const secondOpinion = { largestDifferenceMgPerL: 1e-12, atH: 3, largestLevelMgPerL: 12, relative: 1e-13, points: 40 };
 
 let db: Database;
@@ -19,10 +19,33 @@ let next: () => NewRevision;
 beforeEach(async () => {
   db = openDatabase(":memory:");
   stores = sqliteStores(db);
-  const made = Case.parse({ ...caseDraft, id: randomUUID(), version: 1, archived: false, demo: false, createdAt: at, changedAt: at });
+  const made = Case.parse({
+    ...caseDraft,
+    id: randomUUID(),
+    version: 1,
+    archived: false,
+    demo: false,
+    createdAt: at,
+    changedAt: at,
+  });
   await stores.cases.add(wish(), made);
-  const regimen = await stores.regimens.add(wish(), { id: RegimenId.parse(randomUUID()), caseId: made.id, label: "A", retired: false, createdAt: at });
-  next = () => ({ id: RevisionId.parse(randomUUID()), caseId: made.id, regimenId: regimen.id, createdAt: at, reason: "A test", preparedBy: "B", content: RegimenContent.parse(content), secondOpinion });
+  const regimen = await stores.regimens.add(wish(), {
+    id: RegimenId.parse(randomUUID()),
+    caseId: made.id,
+    label: "A",
+    retired: false,
+    createdAt: at,
+  });
+  next = () => ({
+    id: RevisionId.parse(randomUUID()),
+    caseId: made.id,
+    regimenId: regimen.id,
+    createdAt: at,
+    reason: "A test",
+    preparedBy: "B",
+    content: RegimenContent.parse(content),
+    secondOpinion,
+  });
 });
 
 describe("a revision", () => {
@@ -32,14 +55,20 @@ describe("a revision", () => {
     expect(saved.contentHash).toBe(contentHashOf(saved));
   });
 
-  test.for(["UPDATE revision SET reason = 'Another'", "DELETE FROM revision", "UPDATE OR REPLACE revision SET number = 2"])("cannot be changed or deleted: %s", async (sql) => {
+  test.for([
+    "UPDATE revision SET reason = 'Another'",
+    "DELETE FROM revision",
+    "UPDATE OR REPLACE revision SET number = 2",
+  ])("cannot be changed or deleted: %s", async (sql) => {
     await stores.revisions.add(wish(), 0, next());
     expect(() => db.exec(sql)).toThrow(/a revision is never (changed|deleted)/);
   });
 
   test("cannot be replaced either, which a trigger alone would not see", async () => {
     const { id } = await stores.revisions.add(wish(), 0, next());
-    expect(() => db.exec(`INSERT OR REPLACE INTO revision SELECT * FROM revision WHERE id = '${id}'`)).toThrow("a revision is never deleted");
+    expect(() => db.exec(`INSERT OR REPLACE INTO revision SELECT * FROM revision WHERE id = '${id}'`)).toThrow(
+      "a revision is never deleted",
+    );
   });
 
   test.for([
@@ -56,19 +85,29 @@ describe("a revision", () => {
     const { id, regimenId } = await stores.revisions.add(wish(), 0, next());
     db.exec("DROP TRIGGER revision_never_changes");
     db.prepare(`UPDATE revision SET ${column} = ?`).run(value);
-    await expect(stores.revisions.find(id)).rejects.toThrow(`revision 1 of regimen ${regimenId} is not as it was stored`);
+    await expect(stores.revisions.find(id)).rejects.toThrow(
+      `revision 1 of regimen ${regimenId} is not as it was stored`,
+    );
   });
 
   test("that stands under another regimen than it was saved under is refused", async () => {
     const { id, caseId } = await stores.revisions.add(wish(), 0, next());
-    const other = await stores.regimens.add(wish(), { id: RegimenId.parse(randomUUID()), caseId, label: "B", retired: false, createdAt: at });
+    const other = await stores.regimens.add(wish(), {
+      id: RegimenId.parse(randomUUID()),
+      caseId,
+      label: "B",
+      retired: false,
+      createdAt: at,
+    });
     db.exec("DROP TRIGGER revision_never_changes");
     db.prepare("UPDATE revision SET regimen_id = ?").run(other.id);
     await expect(stores.revisions.find(id)).rejects.toThrow("is not as it was stored");
   });
 
   test("cannot name a regimen of another case", async () => {
-    await expect(stores.revisions.add(wish(), 0, { ...next(), caseId: Case.shape.id.parse(randomUUID()) })).rejects.toThrow("there is no regimen");
+    await expect(
+      stores.revisions.add(wish(), 0, { ...next(), caseId: Case.shape.id.parse(randomUUID()) }),
+    ).rejects.toThrow("there is no regimen");
   });
 });
 
@@ -112,10 +151,17 @@ describe("a write and the record of its answer", () => {
     let saved = 0;
     const { regimenId } = next();
     for (let round = 0; round < 200; round++) {
-      const outcome = await stores.revisions.add(wish(), saved, next()).then(() => "saved", (error: { code: string }) => error.code);
+      const outcome = await stores.revisions.add(wish(), saved, next()).then(
+        () => "saved",
+        (error: { code: string }) => error.code,
+      );
       if (outcome === "saved") saved++;
       else expect(outcome).toBe("SQLITE_FULL");
-      const kept = db.prepare("SELECT (SELECT COUNT(*) FROM revision) AS revisions, (SELECT COUNT(*) FROM answered_write) - 2 AS answers").get();
+      const kept = db
+        .prepare(
+          "SELECT (SELECT COUNT(*) FROM revision) AS revisions, (SELECT COUNT(*) FROM answered_write) - 2 AS answers",
+        )
+        .get();
       expect(kept).toEqual({ revisions: saved, answers: saved });
       if (outcome !== "saved") break;
     }

@@ -6,11 +6,18 @@ describe("canonicalJson", () => {
   test.for([
     // RFC 8785, 3.2.2: the example of serialised numbers, strings and literals.
     {
-      value: { numbers: [333333333.33333329, 1e30, 4.5, 2e-3, 0.000000000000000000000000001], string: '€$\u000f\nA\'B"\\\\"/', literals: [null, true, false] },
+      value: {
+        numbers: [333333333.33333329, 1e30, 4.5, 2e-3, 0.000000000000000000000000001],
+        string: '€$\u000f\nA\'B"\\\\"/',
+        literals: [null, true, false],
+      },
       text: '{"literals":[null,true,false],"numbers":[333333333.3333333,1e+30,4.5,0.002,1e-27],"string":"€$\\u000f\\nA\'B\\"\\\\\\\\\\"/"}',
     },
     // RFC 8785, 3.2.3: keys are sorted by UTF-16 code units.
-    { value: { "€": 1, "\r": 2, "\ufb33": 3, "1": 4, "😀": 5, "\u0080": 6, ö: 7 }, text: '{"\\r":2,"1":4,"\u0080":6,"ö":7,"€":1,"😀":5,"\ufb33":3}' },
+    {
+      value: { "€": 1, "\r": 2, "\ufb33": 3, "1": 4, "😀": 5, "\u0080": 6, ö: 7 },
+      text: '{"\\r":2,"1":4,"\u0080":6,"ö":7,"€":1,"😀":5,"\ufb33":3}',
+    },
     { value: { b: -0, a: [] }, text: '{"a":[],"b":0}' },
   ])("is $text", ({ value, text }) => {
     expect(canonicalJson(value)).toBe(text);

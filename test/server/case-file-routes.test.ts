@@ -7,7 +7,11 @@ import { draft } from "./support/samples.ts";
 
 async function download(app: Parameters<typeof makeRevision>[0]): Promise<CaseFile> {
   const { caseId, regimenId } = await makeRevision(app);
-  await write(app, "post", `/api/cases/${caseId}/regimens/${regimenId}/revisions`, { ...draft, basedOnNumber: 1, reason: "Second plan" }).expect(201);
+  await write(app, "post", `/api/cases/${caseId}/regimens/${regimenId}/revisions`, {
+    ...draft,
+    basedOnNumber: 1,
+    reason: "Second plan",
+  }).expect(201);
   const { body, headers } = await request(app).get(`/api/cases/${caseId}/file`).expect(200);
   expect(headers["content-disposition"]).toBe(`attachment; filename="ebbline-case-${caseId.slice(0, 8)}.json"`);
   return CaseFile.parse(body);
@@ -20,7 +24,9 @@ describe("a case file", () => {
     const { body: made } = await write(app, "post", "/api/case-files", file).expect(201);
     const { body } = await request(app).get(`/api/cases/${made.id}`).expect(200);
     expect(body.regimens[0].latestRevisionNumber).toBe(2);
-    const { body: list } = await request(app).get(`/api/cases/${made.id}/regimens/${body.regimens[0].id}/revisions`).expect(200);
+    const { body: list } = await request(app)
+      .get(`/api/cases/${made.id}/regimens/${body.regimens[0].id}/revisions`)
+      .expect(200);
     const hashes = list.revisions.map((revision: unknown) => Revision.parse(revision).contentHash);
     expect(hashes.reverse()).toEqual(file.regimens[0]!.revisions.map(({ contentHash }) => contentHash));
     const { body: again } = await request(app).get(`/api/cases/${made.id}/file`).expect(200);
@@ -47,7 +53,9 @@ describe("a case file", () => {
     if (order?.give.kind !== "infusion") throw new Error("the sample has an infusion");
     order.give.amountMg = 401;
     const { body } = await write(app, "post", "/api/case-files", changed).expect(422);
-    expect(body.errors.map((error: { pointer: string }) => error.pointer)).toEqual(["#/regimens/0/revisions/1/contentHash"]);
+    expect(body.errors.map((error: { pointer: string }) => error.pointer)).toEqual([
+      "#/regimens/0/revisions/1/contentHash",
+    ]);
     expect((await request(app).get("/api/cases")).body.cases).toHaveLength(before);
   });
 
@@ -56,7 +64,10 @@ describe("a case file", () => {
     const file = await download(app);
     const gap = { ...file, regimens: [{ ...file.regimens[0]!, revisions: [file.regimens[0]!.revisions[1]!] }] };
     const { body } = await write(app, "post", "/api/case-files", gap).expect(422);
-    expect(body.errors[0]).toEqual({ pointer: "#/regimens/0/revisions/0/number", detail: "must be 1, got 2: revisions are numbered from 1 without a gap" });
+    expect(body.errors[0]).toEqual({
+      pointer: "#/regimens/0/revisions/0/number",
+      detail: "must be 1, got 2: revisions are numbered from 1 without a gap",
+    });
   });
 
   test("with a stop that nobody answered is refused even when its hash is right", async () => {
@@ -67,7 +78,10 @@ describe("a case file", () => {
     if (order?.give.kind !== "infusion") throw new Error("the sample has an infusion");
     order.give.amountMg = 30_000;
     forged.contentHash = contentHashOf(forged);
-    const { body } = await write(app, "post", "/api/case-files", { ...file, regimens: [{ label: "x", retired: false, revisions: [forged] }] }).expect(422);
+    const { body } = await write(app, "post", "/api/case-files", {
+      ...file,
+      regimens: [{ label: "x", retired: false, revisions: [forged] }],
+    }).expect(422);
     expect(body.type).toBe("/problems/unanswered-cautions");
   });
 
@@ -84,8 +98,18 @@ describe("a case file", () => {
     const file = await download(app);
     const one = file.regimens[0]!.revisions[0]!;
     // Retired alternatives with the same revision over and over: about 3 MB.
-    const regimens = Array.from({ length: 100 }, () => ({ label: "old", retired: true, revisions: [1, 2, 3, 4, 5, 6, 7, 8].map((number) => ({ ...one, number, reason: "x".repeat(2_000), contentHash: "" })) }));
-    for (const { revisions } of regimens) for (const revision of revisions) revision.contentHash = contentHashOf(revision);
+    const regimens = Array.from({ length: 100 }, () => ({
+      label: "old",
+      retired: true,
+      revisions: [1, 2, 3, 4, 5, 6, 7, 8].map((number) => ({
+        ...one,
+        number,
+        reason: "x".repeat(2_000),
+        contentHash: "",
+      })),
+    }));
+    for (const { revisions } of regimens)
+      for (const revision of revisions) revision.contentHash = contentHashOf(revision);
     const big = { ...file, regimens };
     expect(JSON.stringify(big).length).toBeGreaterThan(2 * 1024 * 1024);
     await write(app, "post", "/api/case-files", big).expect(201);

@@ -10,7 +10,13 @@ describe("POST /api/cases", () => {
   test("makes a case and says where it is", async () => {
     const { app } = makeApp();
     const { body, headers } = await write(app, "post", "/api/cases", caseDraft).expect(201);
-    expect(Case.parse(body)).toMatchObject({ label: "Bed 4", version: 1, archived: false, demo: false, createdAt: now });
+    expect(Case.parse(body)).toMatchObject({
+      label: "Bed 4",
+      version: 1,
+      archived: false,
+      demo: false,
+      createdAt: now,
+    });
     expect(headers["location"]).toBe(`/api/cases/${body.id}`);
     await request(app).get(headers["location"]!).expect(200);
   });
@@ -23,7 +29,11 @@ describe("POST /api/cases", () => {
 
   test("names each bad field with its value and what is allowed", async () => {
     const { app } = makeApp();
-    const bad = { ...caseDraft, timeZone: "Mars/Base", setting: { ...setting, kinetics: { ...setting.kinetics, volumeL: { value: 0.001, origin: { kind: "typed" } } } } };
+    const bad = {
+      ...caseDraft,
+      timeZone: "Mars/Base",
+      setting: { ...setting, kinetics: { ...setting.kinetics, volumeL: { value: 0.001, origin: { kind: "typed" } } } },
+    };
     const { body } = await write(app, "post", "/api/cases", bad).expect(422);
     expect(body.errors).toEqual([
       { pointer: "#/timeZone", detail: 'must be an IANA time zone such as Europe/London, got "Mars/Base"' },
@@ -31,11 +41,14 @@ describe("POST /api/cases", () => {
     ]);
   });
 
-  test.for(["a\u0000b", "a\ud800"])("refuses text that the database would not give back as it came (%j)", async (label) => {
-    const { app } = makeApp();
-    const { body } = await write(app, "post", "/api/cases", { ...caseDraft, label }).expect(422);
-    expect(body.errors[0].pointer).toBe("#/label");
-  });
+  test.for(["a\u0000b", "a\ud800"])(
+    "refuses text that the database would not give back as it came (%j)",
+    async (label) => {
+      const { app } = makeApp();
+      const { body } = await write(app, "post", "/api/cases", { ...caseDraft, label }).expect(422);
+      expect(body.errors[0].pointer).toBe("#/label");
+    },
+  );
 
   test("gives markup, quotes and other scripts back as they came", async () => {
     const { app } = makeApp();
@@ -59,10 +72,13 @@ describe("GET /api/cases", () => {
     expect(await ids("/api/cases?archived=only")).toEqual([first.id]);
   });
 
-  test.for(["?archived=yes", "?archived=only&archived=none", "?sort=label", "?archived[a]=only"])("refuses the query %s", async (query) => {
-    const { app } = makeApp();
-    await request(app).get(`/api/cases${query}`).expect(422);
-  });
+  test.for(["?archived=yes", "?archived=only&archived=none", "?sort=label", "?archived[a]=only"])(
+    "refuses the query %s",
+    async (query) => {
+      const { app } = makeApp();
+      await request(app).get(`/api/cases${query}`).expect(422);
+    },
+  );
 });
 
 describe("GET /api/cases/:id", () => {
@@ -72,7 +88,10 @@ describe("GET /api/cases/:id", () => {
     await write(app, "post", `/api/cases/${revision.caseId}/regimens`, { label: "Empty one" }).expect(201);
     const { body } = await request(app).get(`/api/cases/${revision.caseId}`).expect(200);
     const { regimens } = WholeCase.parse(body);
-    expect(regimens.map(({ label, latestRevisionNumber }) => [label, latestRevisionNumber])).toEqual([["Every 8 h", 1], ["Empty one", 0]]);
+    expect(regimens.map(({ label, latestRevisionNumber }) => [label, latestRevisionNumber])).toEqual([
+      ["Every 8 h", 1],
+      ["Empty one", 0],
+    ]);
     expect(regimens[0]!.latest).toEqual(revision);
     expect(regimens[1]!.latest).toBeUndefined();
   });

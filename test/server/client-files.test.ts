@@ -33,14 +33,23 @@ describe("the built page", () => {
     expect((await request(app).get("/icon.svg").expect(200)).headers["cache-control"]).toBe("no-store");
   });
 
-  test.for(["/nowhere", "/cases", "/cases/x/y", "/assets/", "/assets/other.js", "/index.html/", "/.env", "/../secret.txt", "/..%2fsecret.txt", "/%2e%2e/secret.txt", "/assets/..%5c..%5csecret.txt"])(
-    "%s is a 404 problem",
-    async (path) => {
-      const { text, headers } = await request(app).get(path).expect(404);
-      expect(headers["content-type"]).toMatch(/^application\/problem\+json/);
-      expect(text).not.toContain("secret");
-    },
-  );
+  test.for([
+    "/nowhere",
+    "/cases",
+    "/cases/x/y",
+    "/assets/",
+    "/assets/other.js",
+    "/index.html/",
+    "/.env",
+    "/../secret.txt",
+    "/..%2fsecret.txt",
+    "/%2e%2e/secret.txt",
+    "/assets/..%5c..%5csecret.txt",
+  ])("%s is a 404 problem", async (path) => {
+    const { text, headers } = await request(app).get(path).expect(404);
+    expect(headers["content-type"]).toMatch(/^application\/problem\+json/);
+    expect(text).not.toContain("secret");
+  });
 
   test("takes no writes", async () => {
     const { headers } = await request(app).post("/").expect(405);

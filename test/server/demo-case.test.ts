@@ -3,7 +3,7 @@ import { describe, expect, test } from "vitest";
 import { insertDemoCase } from "../../server/demo/demo-case.ts";
 import { WholeCase } from "../../server/openapi/answers.ts";
 import { givenDoses } from "../../shared/schedule/doses-given.ts";
-import { makeApp } from "./support/make-app.ts";
+import { makeApp, now } from "./support/make-app.ts";
 
 const demo = async (app: Parameters<typeof request>[0]) => {
   const { body: list } = await request(app).get("/api/cases");
@@ -14,7 +14,7 @@ const demo = async (app: Parameters<typeof request>[0]) => {
 describe("the demo case", () => {
   test("says that it is invented and has what there is to see", async () => {
     const { app, needs } = makeApp();
-    await insertDemoCase(needs.stores, needs.appraise);
+    await insertDemoCase(needs.stores, needs.appraise, now);
     const { case: kase, regimens } = await demo(app);
     expect(kase.demo).toBe(true);
     expect(`${kase.label} ${kase.notes}`).toMatch(/invented.*invented/is);
@@ -28,20 +28,24 @@ describe("the demo case", () => {
 
   test("is the same everywhere and is put in once, also when somebody archived it", async () => {
     const { app, needs } = makeApp();
-    await insertDemoCase(needs.stores, needs.appraise);
+    await insertDemoCase(needs.stores, needs.appraise, now);
     const first = await demo(app);
     const other = makeApp();
-    await insertDemoCase(other.needs.stores, other.needs.appraise);
+    await insertDemoCase(other.needs.stores, other.needs.appraise, now);
     expect(await demo(other.app)).toEqual(first);
     const { id } = first.case;
-    await request(app).patch(`/api/cases/${id}`).set("Idempotency-Key", crypto.randomUUID()).send({ version: 1, archived: true }).expect(200);
-    await insertDemoCase(needs.stores, needs.appraise);
+    await request(app)
+      .patch(`/api/cases/${id}`)
+      .set("Idempotency-Key", crypto.randomUUID())
+      .send({ version: 1, archived: true })
+      .expect(200);
+    await insertDemoCase(needs.stores, needs.appraise, now);
     expect((await request(app).get("/api/cases")).body.cases).toEqual([]);
   });
 
   test("is completed by the next start when the first one was cut short at any step", async () => {
     const whole = makeApp();
-    await insertDemoCase(whole.needs.stores, whole.needs.appraise);
+    await insertDemoCase(whole.needs.stores, whole.needs.appraise, now);
     for (let cut = 1; cut <= 4; cut++) {
       const { app, needs } = makeApp();
       let left = cut;
@@ -49,8 +53,8 @@ describe("the demo case", () => {
         if (--left === 0) throw new Error("cut short");
         return needs.appraise(content);
       };
-      await expect(insertDemoCase(needs.stores, failing)).rejects.toThrow("cut short");
-      await insertDemoCase(needs.stores, needs.appraise);
+      await expect(insertDemoCase(needs.stores, failing, now)).rejects.toThrow("cut short");
+      await insertDemoCase(needs.stores, needs.appraise, now);
       expect(await demo(app)).toEqual(await demo(whole.app));
     }
   });

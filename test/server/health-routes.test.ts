@@ -17,7 +17,12 @@ describe("health", () => {
     let checks = 0;
     const made = makeApp({ clock: () => `2026-05-04T09:0${minute}:00Z` });
     const { checkWhole } = made.needs.stores;
-    Object.assign(made.needs.stores, { checkWhole: () => (checks++, checkWhole()) });
+    Object.assign(made.needs.stores, {
+      checkWhole: () => {
+        checks++;
+        return checkWhole();
+      },
+    });
     await request(made.app).get("/api/ready").expect(200);
     await request(made.app).get("/api/ready").expect(200);
     expect(checks).toBe(1);

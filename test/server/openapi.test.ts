@@ -15,7 +15,9 @@ interface Layer {
 function routesOf(routers: readonly Router[]): string[] {
   return routers
     .flatMap((router) => router.stack as readonly Layer[])
-    .flatMap(({ route }) => (route?.stack ?? []).filter(({ method }) => method !== undefined).map(({ method }) => `${method} ${route!.path}`));
+    .flatMap(({ route }) =>
+      (route?.stack ?? []).filter(({ method }) => method !== undefined).map(({ method }) => `${method} ${route!.path}`),
+    );
 }
 
 const document = async () => (await request(makeApp().app).get("/api/openapi.json").expect(200)).body;
@@ -31,7 +33,9 @@ describe("/api/openapi.json", () => {
 
   test("has every route of the server, and the server has every route of it", async () => {
     const { paths } = await document();
-    const described = Object.entries(paths).flatMap(([path, methods]) => Object.keys(methods as object).map((method) => `${method} ${expressPath(path)}`));
+    const described = Object.entries(paths).flatMap(([path, methods]) =>
+      Object.keys(methods as object).map((method) => `${method} ${expressPath(path)}`),
+    );
     const there = [...new Set(routesOf(apiRouters(makeApp().needs)))];
     expect(described.sort()).toEqual(there.sort());
     expect(there.length).toBeGreaterThan(15);
@@ -39,10 +43,15 @@ describe("/api/openapi.json", () => {
 
   test("refers only to schemas that it has, each with its limits and units", async () => {
     const whole = await document();
-    const names = [...JSON.stringify(whole).matchAll(/"\$ref":"#\/components\/schemas\/(\w+)"/g)].map(([, name]) => name!);
+    const names = [...JSON.stringify(whole).matchAll(/"\$ref":"#\/components\/schemas\/(\w+)"/g)].map(
+      ([, name]) => name!,
+    );
     expect([...new Set(names)].sort()).toEqual(Object.keys(whole.components.schemas).sort());
     expect(JSON.stringify(whole)).not.toMatch(/"\$ref":"(?!#\/components\/schemas\/)/);
-    expect(whole.components.schemas.PredictionRequestInput.properties.horizonH).toMatchObject({ maximum: 17_568, description: "Length of the plan, h" });
+    expect(whole.components.schemas.PredictionRequestInput.properties.horizonH).toMatchObject({
+      maximum: 17_568,
+      description: "Length of the plan, h",
+    });
     expect(whole.components.schemas.PredictionRequestInput.additionalProperties).toBe(false);
     // A request may leave out what has a default; an answer always has it.
     expect(whole.components.schemas.ScheduleInput.required).toEqual(["orders"]);
@@ -55,7 +64,9 @@ describe("/api/openapi.json", () => {
     for (const [path, methods] of Object.entries<Record<string, { parameters: { name: string }[] }>>(paths))
       for (const method of ["post", "patch"] as const) {
         if (methods[method] === undefined) continue;
-        const { body } = await request(app)[method](`/api${path.replaceAll(/\{\w+\}/g, "x")}`).send({});
+        const { body } = await request(app)
+          [method](`/api${path.replaceAll(/\{\w+\}/g, "x")}`)
+          .send({});
         const described = methods[method].parameters.some(({ name }) => name === "Idempotency-Key");
         expect([path, body.type === "/problems/key-missing"]).toEqual([path, described]);
       }

@@ -5,7 +5,10 @@ import { SteadyStateResponse } from "../../shared/contract/steady-state.ts";
 import { makeApp } from "./support/make-app.ts";
 import { prediction } from "./support/samples.ts";
 
-const post = (path: string, body: unknown) => request(makeApp().app).post(path).send(body as object);
+const post = (path: string, body: unknown) =>
+  request(makeApp().app)
+    .post(path)
+    .send(body as object);
 
 describe("POST /api/predictions", () => {
   test("answers its contract, and keeps nothing so needs no key", async () => {
@@ -19,27 +22,76 @@ describe("POST /api/predictions", () => {
 
   test("answers a grid, a window, a range and what remains", async () => {
     const { sampleTimesH: _, ...rest } = prediction;
-    const asked = { ...rest, sampleEveryH: 0.5, window: { fromH: 0, toH: 12 }, rangeMgPerL: { low: 5, high: 15 }, remainsAtH: 6 };
+    const asked = {
+      ...rest,
+      sampleEveryH: 0.5,
+      window: { fromH: 0, toH: 12 },
+      rangeMgPerL: { low: 5, high: 15 },
+      remainsAtH: 6,
+    };
     const { body } = await post("/api/predictions", asked).expect(200);
     const answer = PredictionResponse.parse(body);
     expect(answer.timesH).toHaveLength(49);
-    expect(answer.exposure.hoursAbove! + answer.exposure.hoursWithin! + answer.exposure.hoursBelow!).toBeCloseTo(12, 10);
+    expect(answer.exposure.hoursAbove! + answer.exposure.hoursWithin! + answer.exposure.hoursBelow!).toBeCloseTo(
+      12,
+      10,
+    );
     expect(answer.remains).toMatchObject([{ dose: 0, percent: 100 }]);
   });
 
   test.for([
-    { name: "a volume of 0", change: { parameters: { volumeL: 0, eliminationRatePerH: 0.1 } }, pointer: "#/parameters/volumeL" },
-    { name: "a volume of 0.001 L", change: { parameters: { volumeL: 0.001, eliminationRatePerH: 0.1 } }, pointer: "#/parameters/volumeL" },
-    { name: "a half-life of 3 years", change: { parameters: { volumeL: 10, halfLifeH: 26_280 } }, pointer: "#/parameters/halfLifeH" },
+    {
+      name: "a volume of 0",
+      change: { parameters: { volumeL: 0, eliminationRatePerH: 0.1 } },
+      pointer: "#/parameters/volumeL",
+    },
+    {
+      name: "a volume of 0.001 L",
+      change: { parameters: { volumeL: 0.001, eliminationRatePerH: 0.1 } },
+      pointer: "#/parameters/volumeL",
+    },
+    {
+      name: "a half-life of 3 years",
+      change: { parameters: { volumeL: 10, halfLifeH: 26_280 } },
+      pointer: "#/parameters/halfLifeH",
+    },
     { name: "a horizon of 50 years", change: { horizonH: 438_000 }, pointer: "#/horizonH" },
-    { name: "a negative amount", change: { doses: [{ kind: "bolus", atH: 0, amountMg: -1 }] }, pointer: "#/doses/0/amountMg" },
-    { name: "an amount in words", change: { doses: [{ kind: "bolus", atH: 0, amountMg: "100" }] }, pointer: "#/doses/0/amountMg" },
-    { name: "a dose before the start", change: { doses: [{ kind: "bolus", atH: -1, amountMg: 1 }] }, pointer: "#/doses/0/atH" },
-    { name: "an unknown kind of dose", change: { doses: [{ kind: "patch", atH: 0, amountMg: 1 }] }, pointer: "#/doses/0/kind" },
-    { name: "10,001 doses", change: { doses: Array.from({ length: 10_001 }, () => ({ kind: "bolus", atH: 0, amountMg: 1 })) }, pointer: "#/doses" },
+    {
+      name: "a negative amount",
+      change: { doses: [{ kind: "bolus", atH: 0, amountMg: -1 }] },
+      pointer: "#/doses/0/amountMg",
+    },
+    {
+      name: "an amount in words",
+      change: { doses: [{ kind: "bolus", atH: 0, amountMg: "100" }] },
+      pointer: "#/doses/0/amountMg",
+    },
+    {
+      name: "a dose before the start",
+      change: { doses: [{ kind: "bolus", atH: -1, amountMg: 1 }] },
+      pointer: "#/doses/0/atH",
+    },
+    {
+      name: "an unknown kind of dose",
+      change: { doses: [{ kind: "patch", atH: 0, amountMg: 1 }] },
+      pointer: "#/doses/0/kind",
+    },
+    {
+      name: "10,001 doses",
+      change: { doses: Array.from({ length: 10_001 }, () => ({ kind: "bolus", atH: 0, amountMg: 1 })) },
+      pointer: "#/doses",
+    },
     { name: "an unknown field", change: { weight: 70 }, pointer: "#/weight" },
-    { name: "a dose with a field of another kind", change: { doses: [{ kind: "bolus", atH: 0, amountMg: 1, durationH: 1 }] }, pointer: "#/doses/0/durationH" },
-    { name: "an added clearance that ends before it starts", change: { eliminationChanges: [{ fromH: 4, toH: 2, addedClearanceLPerH: 1 }] }, pointer: "#/eliminationChanges/0/toH" },
+    {
+      name: "a dose with a field of another kind",
+      change: { doses: [{ kind: "bolus", atH: 0, amountMg: 1, durationH: 1 }] },
+      pointer: "#/doses/0/durationH",
+    },
+    {
+      name: "an added clearance that ends before it starts",
+      change: { eliminationChanges: [{ fromH: 4, toH: 2, addedClearanceLPerH: 1 }] },
+      pointer: "#/eliminationChanges/0/toH",
+    },
   ])("refuses $name, naming the field", async ({ change, pointer }) => {
     const { body } = await post("/api/predictions", { ...prediction, ...change }).expect(422);
     expect(body.errors.map((error: { pointer: string }) => error.pointer)).toContain(pointer);
@@ -50,12 +102,18 @@ describe("POST /api/predictions", () => {
     expect(body.errors).toEqual([{ pointer: "#/horizonH", detail: "must be from 0.1 to 17568 h, got 438000" }]);
     const { horizonH: _, ...without } = prediction;
     const missing = await post("/api/predictions", without).expect(422);
-    expect(missing.body.errors[0]).toEqual({ pointer: "#/horizonH", detail: "must be a number, must be from 0.1 to 17568 h, is missing" });
+    expect(missing.body.errors[0]).toEqual({
+      pointer: "#/horizonH",
+      detail: "must be a number, must be from 0.1 to 17568 h, is missing",
+    });
   });
 
   test.for(["1e999", "NaN", "-Infinity"])("refuses the number %s", async (text) => {
     const body = JSON.stringify(prediction).replace('"horizonH":24', `"horizonH":${text}`);
-    const answer = await request(makeApp().app).post("/api/predictions").set("Content-Type", "application/json").send(body);
+    const answer = await request(makeApp().app)
+      .post("/api/predictions")
+      .set("Content-Type", "application/json")
+      .send(body);
     expect([400, 422]).toContain(answer.status);
     expect(answer.headers["content-type"]).toMatch(/^application\/problem\+json/);
   });
@@ -68,7 +126,11 @@ describe("POST /api/predictions", () => {
 });
 
 describe("POST /api/steady-states", () => {
-  const cycle = { parameters: { volumeL: 10, eliminationRatePerH: 0.1 }, cycleH: 8, doses: [{ kind: "bolus", atH: 0, amountMg: 100 }] };
+  const cycle = {
+    parameters: { volumeL: 10, eliminationRatePerH: 0.1 },
+    cycleH: 8,
+    doses: [{ kind: "bolus", atH: 0, amountMg: 100 }],
+  };
 
   test("answers its contract", async () => {
     const { body } = await post("/api/steady-states", { ...cycle, sampleEveryH: 1 }).expect(200);
@@ -80,9 +142,15 @@ describe("POST /api/steady-states", () => {
   });
 
   test("refuses a dose after the end of the cycle and a cycle in which nothing is eliminated", async () => {
-    const late = await post("/api/steady-states", { ...cycle, doses: [{ kind: "bolus", atH: 9, amountMg: 100 }] }).expect(422);
+    const late = await post("/api/steady-states", {
+      ...cycle,
+      doses: [{ kind: "bolus", atH: 9, amountMg: 100 }],
+    }).expect(422);
     expect(late.body.errors[0].pointer).toBe("#/doses/0/atH");
-    const stopped = await post("/api/steady-states", { ...cycle, eliminationChanges: [{ fromH: 0, eliminationRatePerH: 0 }] }).expect(422);
+    const stopped = await post("/api/steady-states", {
+      ...cycle,
+      eliminationChanges: [{ fromH: 0, eliminationRatePerH: 0 }],
+    }).expect(422);
     expect(stopped.body.errors[0].pointer).toBe("#/parameters/eliminationRatePerH");
   });
 });

@@ -18,12 +18,16 @@ function expectProblem(answer: request.Response, status: number): Problem {
   return problem;
 }
 
-const json = (app: Parameters<typeof request>[0], text: string) => request(app).post("/api/predictions").set("Content-Type", "application/json").send(text);
+const json = (app: Parameters<typeof request>[0], text: string) =>
+  request(app).post("/api/predictions").set("Content-Type", "application/json").send(text);
 
 describe("what Express would answer in HTML", () => {
-  test.for(["/api/nothing", "/api", "/nothing", "/api/cases/x/y/z", "/api/__proto__", "//api/cases"])("an address that is not there: %s", async (path) => {
-    expectProblem(await request(makeApp().app).get(path), 404);
-  });
+  test.for(["/api/nothing", "/api", "/nothing", "/api/cases/x/y/z", "/api/__proto__", "//api/cases"])(
+    "an address that is not there: %s",
+    async (path) => {
+      expectProblem(await request(makeApp().app).get(path), 404);
+    },
+  );
 
   test.for(["{", '{"a":1', "[1,]", "nothing", '"\\x"', "\u0000"])("a body that is not JSON: %j", async (text) => {
     expect(expectProblem(await json(makeApp().app, text), 400).type).toBe("/problems/malformed-json");
@@ -39,16 +43,22 @@ describe("what Express would answer in HTML", () => {
     expectProblem(await request(app).post("/api/predictions").set("Content-Type", "application/json"), 422);
   });
 
-  test.for(["text/plain", "application/x-www-form-urlencoded", "multipart/form-data; boundary=x", "application/jsonx", "application/merge-patch+json"])(
-    "another media type: %s",
-    async (type) => {
-      expectProblem(await request(makeApp().app).post("/api/predictions").set("Content-Type", type).send("{}"), 415);
-    },
-  );
+  test.for([
+    "text/plain",
+    "application/x-www-form-urlencoded",
+    "multipart/form-data; boundary=x",
+    "application/jsonx",
+    "application/merge-patch+json",
+  ])("another media type: %s", async (type) => {
+    expectProblem(await request(makeApp().app).post("/api/predictions").set("Content-Type", type).send("{}"), 415);
+  });
 
   test("a body in another character set or compressed", async () => {
     const { app } = makeApp();
-    expectProblem(await request(app).post("/api/predictions").set("Content-Type", "application/json; charset=koi8-r").send("{}"), 415);
+    expectProblem(
+      await request(app).post("/api/predictions").set("Content-Type", "application/json; charset=koi8-r").send("{}"),
+      415,
+    );
     expectProblem(await json(app, "{}").set("Content-Encoding", "gzip"), 415);
   });
 
@@ -99,7 +109,12 @@ describe("hostile JSON", () => {
     const { app } = makeApp();
     for (const text of ["a".repeat(100_000), "2026-05-04T".repeat(10_000), " ".repeat(100_000)]) {
       const startedAt = performance.now();
-      await write(app, "post", "/api/cases", { ...caseDraft, label: text, timeZone: text, setting: { ...caseDraft.setting, plan: { start: text, horizonH: 1 } } }).expect(422);
+      await write(app, "post", "/api/cases", {
+        ...caseDraft,
+        label: text,
+        timeZone: text,
+        setting: { ...caseDraft.setting, plan: { start: text, horizonH: 1 } },
+      }).expect(422);
       expect(performance.now() - startedAt).toBeLessThan(200);
     }
   });
@@ -114,7 +129,10 @@ describe("a fault of our own", () => {
       throw new TypeError(secret);
     };
     const answer = await request(app).get("/api/cases");
-    expect(expectProblem(answer, 500)).toMatchObject({ type: "/problems/internal", title: "Something went wrong in the server" });
+    expect(expectProblem(answer, 500)).toMatchObject({
+      type: "/problems/internal",
+      title: "Something went wrong in the server",
+    });
     expect(answer.text).not.toContain(secret);
   });
 
@@ -153,14 +171,18 @@ describe("a refusal while the sender is still sending", () => {
     const agent = new Agent({ keepAlive: true, maxSockets: 1 });
     const post = (path: string) =>
       new Promise<number>((resolve, reject) => {
-        const sending = send({ port, agent, path, method: "POST", headers: { "Content-Type": "application/json" } }, (answer) => {
-          answer.resume().on("end", () => resolve(answer.statusCode!));
-        });
+        const sending = send(
+          { port, agent, path, method: "POST", headers: { "Content-Type": "application/json" } },
+          (answer) => {
+            answer.resume().on("end", () => resolve(answer.statusCode!));
+          },
+        );
         sending.on("error", reject);
         for (let chunk = 0; chunk < 50; chunk++) sending.write("x".repeat(100_000));
         sending.end();
       });
-    for (let round = 0; round < 20; round++) expect(await post(round % 2 === 0 ? "/api/predictions" : "/api/nothing")).toBe(round % 2 === 0 ? 413 : 404);
+    for (let round = 0; round < 20; round++)
+      expect(await post(round % 2 === 0 ? "/api/predictions" : "/api/nothing")).toBe(round % 2 === 0 ? 413 : 404);
     agent.destroy();
   });
 });

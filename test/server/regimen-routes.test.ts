@@ -10,8 +10,11 @@ describe("alternatives of a case", () => {
     const { id } = await makeCase(app);
     const path = `/api/cases/${id}/regimens`;
     const made: Regimen[] = [];
-    for (const label of ["A", "B", "C", "D", "E", "F"]) made.push(Regimen.parse((await write(app, "post", path, { label }).expect(201)).body));
-    expect((await write(app, "post", path, { label: "G" }).expect(422)).body.type).toBe("/problems/too-many-alternatives");
+    for (const label of ["A", "B", "C", "D", "E", "F"])
+      made.push(Regimen.parse((await write(app, "post", path, { label }).expect(201)).body));
+    expect((await write(app, "post", path, { label: "G" }).expect(422)).body.type).toBe(
+      "/problems/too-many-alternatives",
+    );
     await write(app, "patch", `${path}/${made[1]!.id}`, { retired: true }).expect(200);
     await write(app, "post", path, { label: "G" }).expect(201);
     // Taking a retired one up again needs room too.

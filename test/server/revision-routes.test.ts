@@ -11,7 +11,9 @@ const path = ({ id, caseId }: { id: string; caseId: string }) => `/api/cases/${c
 /** 30,000 mg at once is above what the limits call usual: a caution that stops. */
 const hugeDose = {
   ...content,
-  schedule: { orders: [{ ...content.schedule.orders[0]!, give: { kind: "infusion" as const, amountMg: 30_000, durationH: 1 } }] },
+  schedule: {
+    orders: [{ ...content.schedule.orders[0]!, give: { kind: "infusion" as const, amountMg: 30_000, durationH: 1 } }],
+  },
 };
 
 describe("POST .../revisions", () => {
@@ -19,7 +21,12 @@ describe("POST .../revisions", () => {
     const { app } = makeApp();
     const revision = Revision.parse(await makeRevision(app));
     const { number, createdAt, reason, preparedBy } = revision;
-    expect({ number, createdAt, reason, preparedBy }).toEqual({ number: 1, createdAt: now, reason: "First plan", preparedBy: "A. Pharmacist" });
+    expect({ number, createdAt, reason, preparedBy }).toEqual({
+      number: 1,
+      createdAt: now,
+      reason: "First plan",
+      preparedBy: "A. Pharmacist",
+    });
     // The definition of the contract, worked out anew: SHA-256 over the RFC 8785 form.
     const said = canonicalJson({ content: revision.content, createdAt, number, preparedBy, reason });
     expect(revision.contentHash).toBe(createHash("sha256").update(said).digest("hex"));
@@ -34,7 +41,10 @@ describe("POST .../revisions", () => {
     const regimen = await makeRegimen(app);
     await write(app, "post", path(regimen), draft).expect(201);
     const { body } = await write(app, "post", path(regimen), { ...draft, reason: "Somebody else" }).expect(409);
-    expect(body).toMatchObject({ type: "/problems/stale", detail: "the regimen has changed: you had seen 0, the newest is 1" });
+    expect(body).toMatchObject({
+      type: "/problems/stale",
+      detail: "the regimen has changed: you had seen 0, the newest is 1",
+    });
     await write(app, "post", path(regimen), { ...draft, basedOnNumber: 2 }).expect(409);
     await write(app, "post", path(regimen), { ...draft, basedOnNumber: 1 }).expect(201);
   });
@@ -55,8 +65,16 @@ describe("POST .../revisions", () => {
     const parsed = Revision.shape.content.parse(hugeDose);
     const appraisal = await needs.appraise(parsed);
     if (!appraisal.ok) throw new Error(appraisal.problem);
-    const cautionReasons = appraisal.open.map(({ code, about, text }) => ({ code, about, text, reason: "A test of the limit" }));
-    const { body } = await write(app, "post", path(regimen), { ...draft, content: { ...hugeDose, cautionReasons } }).expect(201);
+    const cautionReasons = appraisal.open.map(({ code, about, text }) => ({
+      code,
+      about,
+      text,
+      reason: "A test of the limit",
+    }));
+    const { body } = await write(app, "post", path(regimen), {
+      ...draft,
+      content: { ...hugeDose, cautionReasons },
+    }).expect(201);
     expect(body.content.cautionReasons).toEqual(cautionReasons);
   });
 
@@ -75,12 +93,22 @@ describe("POST .../revisions", () => {
   test.for([
     {
       name: "a dose before the start of the plan",
-      schedule: { orders: [{ ...content.schedule.orders[0]!, when: { kind: "once", at: "2026-05-04T07:00:00+01:00" } }] },
+      schedule: {
+        orders: [{ ...content.schedule.orders[0]!, when: { kind: "once", at: "2026-05-04T07:00:00+01:00" } }],
+      },
       pointer: "#/content/schedule/orders/0/when/at",
     },
     {
       name: "an absorbed dose without an absorption rate",
-      schedule: { orders: [{ id: "a", give: { kind: "absorbed", amountMg: 100 }, when: { kind: "once", at: "2026-05-04T08:00:00+01:00" } }] },
+      schedule: {
+        orders: [
+          {
+            id: "a",
+            give: { kind: "absorbed", amountMg: 100 },
+            when: { kind: "once", at: "2026-05-04T08:00:00+01:00" },
+          },
+        ],
+      },
       pointer: "#/content/setting/kinetics/absorptionRatePerH",
     },
     {
@@ -94,7 +122,13 @@ describe("POST .../revisions", () => {
         orders: [
           {
             id: "a",
-            give: { kind: "pump", steps: [{ afterH: 2, rateMgPerH: 5 }, { afterH: 1, rateMgPerH: 0 }] },
+            give: {
+              kind: "pump",
+              steps: [
+                { afterH: 2, rateMgPerH: 5 },
+                { afterH: 1, rateMgPerH: 0 },
+              ],
+            },
             when: { kind: "once", at: "2026-05-04T08:00:00+01:00" },
           },
         ],
@@ -104,7 +138,9 @@ describe("POST .../revisions", () => {
   ])("refuses $name, naming the field", async ({ schedule, pointer }) => {
     const { app } = makeApp();
     const regimen = await makeRegimen(app);
-    const { body } = await write(app, "post", path(regimen), { ...draft, content: { ...content, schedule } }).expect(422);
+    const { body } = await write(app, "post", path(regimen), { ...draft, content: { ...content, schedule } }).expect(
+      422,
+    );
     expect(body.errors.map((error: { pointer: string }) => error.pointer)).toContain(pointer);
   });
 
@@ -123,8 +159,12 @@ describe("POST .../revisions", () => {
     const one = await makeRegimen(app);
     const other = await makeRegimen(app);
     await write(app, "post", path({ id: one.id, caseId: other.caseId }), draft).expect(404);
-    await request(app).get(path({ id: one.id, caseId: other.caseId })).expect(404);
-    await request(app).get(path({ id: randomUUID(), caseId: one.caseId })).expect(404);
+    await request(app)
+      .get(path({ id: one.id, caseId: other.caseId }))
+      .expect(404);
+    await request(app)
+      .get(path({ id: randomUUID(), caseId: one.caseId }))
+      .expect(404);
   });
 });
 
@@ -132,7 +172,8 @@ describe("GET /api/revisions/:id/sheet.pdf", () => {
   test("gives the same bytes each time, under a name of our own", async () => {
     const { app } = makeApp();
     const { id, contentHash } = await makeRevision(app);
-    const sheet = async (query: string) => request(app).get(`/api/revisions/${id}/sheet.pdf${query}`).buffer().expect(200);
+    const sheet = async (query: string) =>
+      request(app).get(`/api/revisions/${id}/sheet.pdf${query}`).buffer().expect(200);
     const first = await sheet("");
     expect(first.headers).toMatchObject({
       "content-type": "application/pdf",

@@ -29,7 +29,8 @@ describe("headers (OWASP ASVS 5.0.0, 3.4)", () => {
       "object-src 'none'",
       "frame-ancestors 'none'",
     ]);
-    for (const absent of ["x-powered-by", "strict-transport-security", "access-control-allow-origin", "etag"]) expect(headers).not.toHaveProperty(absent);
+    for (const absent of ["x-powered-by", "strict-transport-security", "access-control-allow-origin", "etag"])
+      expect(headers).not.toHaveProperty(absent);
   });
 
   test("ask for https only where a proxy speaks it", async () => {
@@ -56,7 +57,8 @@ describe("writes from another site (ASVS 3.5)", () => {
 
   test("are taken from our own page and from a program that is no browser", async () => {
     const { server, port } = await listening(makeApp().app);
-    const ask = (headers: Record<string, string>) => request(server).post("/api/predictions").set(headers).send(prediction);
+    const ask = (headers: Record<string, string>) =>
+      request(server).post("/api/predictions").set(headers).send(prediction);
     await ask({ "Sec-Fetch-Site": "same-origin", Origin: `http://127.0.0.1:${port}` }).expect(200);
     await ask({ Origin: `http://127.0.0.1:${port}` }).expect(200);
     await ask({}).expect(200);
@@ -64,25 +66,45 @@ describe("writes from another site (ASVS 3.5)", () => {
 });
 
 describe("the Host header (DNS rebinding)", () => {
-  test.for(["evil.example", "evil.example:7317", "127.0.0.1.evil.example", "localhost.evil.example", "[::2]", "127.0.0.1, evil.example"])("%j is refused", async (host) => {
+  test.for([
+    "evil.example",
+    "evil.example:7317",
+    "127.0.0.1.evil.example",
+    "localhost.evil.example",
+    "[::2]",
+    "127.0.0.1, evil.example",
+  ])("%j is refused", async (host) => {
     const { port } = await listening(makeApp().app);
     const status = await new Promise((resolve, reject) => {
-      send({ port, host: "127.0.0.1", path: "/api/cases", headers: { Host: host } }, (answer) => resolve(answer.resume().statusCode)).on("error", reject).end();
+      send({ port, host: "127.0.0.1", path: "/api/cases", headers: { Host: host } }, (answer) =>
+        resolve(answer.resume().statusCode),
+      )
+        .on("error", reject)
+        .end();
     });
     expect(status).toBe(421);
   });
 
-  test.for(["127.0.0.1:7317", "localhost", "LOCALHOST:80", "[::1]:7317", "plan.example"])("%s is taken", async (host) => {
-    const settings = { host: "127.0.0.1", publicNames: ["plan.example"], transport: "plain", requestsPerMinute: 100 } as const;
-    await request(makeApp({ settings }).app).get("/api/health").set("Host", host).expect(200);
-  });
+  test.for(["127.0.0.1:7317", "localhost", "LOCALHOST:80", "[::1]:7317", "plan.example"])(
+    "%s is taken",
+    async (host) => {
+      const settings = {
+        host: "127.0.0.1",
+        publicNames: ["plan.example"],
+        transport: "plain",
+        requestsPerMinute: 100,
+      } as const;
+      await request(makeApp({ settings }).app).get("/api/health").set("Host", host).expect(200);
+    },
+  );
 });
 
 describe("limits", () => {
   test("too many requests are refused with a time to wait, whatever address they claim to come from", async () => {
     const settings = { host: "127.0.0.1", publicNames: [], transport: "plain", requestsPerMinute: 3 } as const;
     const { app } = makeApp({ settings });
-    for (let round = 0; round < 3; round++) await request(app).get("/api/health").set("X-Forwarded-For", `10.0.0.${round}`).expect(200);
+    for (let round = 0; round < 3; round++)
+      await request(app).get("/api/health").set("X-Forwarded-For", `10.0.0.${round}`).expect(200);
     const { body, headers } = await request(app).get("/api/health").set("X-Forwarded-For", "10.0.0.9").expect(429);
     expect(body.type).toBe("/problems/too-many-requests");
     expect(headers["retry-after"]).toBe("60");

@@ -5,7 +5,8 @@ import type { Express } from "express";
 import request from "supertest";
 import { openDatabase } from "../../../db/open-database.ts";
 import { sqliteStores } from "../../../db/stores.ts";
-import { type AppNeeds, createApp } from "../../../server/app.ts";
+import { createApp } from "../../../server/app.ts";
+import type { AppNeeds } from "../../../server/app-needs.ts";
 import { makeLogger } from "../../../server/logger.ts";
 import { appraise } from "../../../server/revisions/appraise.ts";
 import { writeSheet } from "../../../server/sheet/sheet.ts";
@@ -50,8 +51,17 @@ export function makeApp(changes: Partial<AppNeeds> = {}): Made {
 }
 
 /** A write with a key of its own, or with the given one. */
-export function write(app: Express, method: "post" | "patch", path: string, body: unknown, key: string = randomUUID()): request.Test {
-  return request(app)[method](path).set("Idempotency-Key", key).send(body as object);
+export function write(
+  app: Express,
+  method: "post" | "patch",
+  path: string,
+  body: unknown,
+  key: string = randomUUID(),
+): request.Test {
+  return request(app)
+    [method](path)
+    .set("Idempotency-Key", key)
+    .send(body as object);
 }
 
 export async function makeCase(app: Express): Promise<Case> {

@@ -30,7 +30,12 @@ export const content: z.input<typeof RegimenContent> = {
   },
 };
 
-export const draft: z.input<typeof RevisionDraft> = { basedOnNumber: 0, reason: "First plan", preparedBy: "A. Pharmacist", content };
+export const draft: z.input<typeof RevisionDraft> = {
+  basedOnNumber: 0,
+  reason: "First plan",
+  preparedBy: "A. Pharmacist",
+  content,
+};
 
 export const caseDraft = { label: "Bed 4", timeZone: "Europe/London", notes: "", setting };
 
