@@ -1,6 +1,9 @@
 import { computed, signal } from "@preact/signals";
 
-export type Route = { readonly page: "cases" } | { readonly page: "case"; readonly id: string } | { readonly page: "nowhere" };
+export type Route =
+  | { readonly page: "cases" }
+  | { readonly page: "case"; readonly id: string }
+  | { readonly page: "nowhere" };
 
 const path = signal(location.pathname);
 

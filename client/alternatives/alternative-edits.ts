@@ -9,7 +9,13 @@ export function hasRoom(document: CaseDocument): boolean {
 
 /** The document with an empty alternative at the end; unchanged where all letters are taken. */
 export function withNewAlternative(document: CaseDocument, key: string): CaseDocument {
-  const added: Alternative = { key, label: freeLabel(document, "Another plan"), schedule: emptySchedule, savedNumber: 0, cautionReasons: [] };
+  const added: Alternative = {
+    key,
+    label: freeLabel(document, "Another plan"),
+    schedule: emptySchedule,
+    savedNumber: 0,
+    cautionReasons: [],
+  };
   return appended(document, added);
 }
 

@@ -20,7 +20,9 @@ export function AlternativesPart({ page }: { page: CasePage }) {
   const failure = useSignal<Failure | undefined>(undefined);
   const document = page.settled.value;
   const selected = page.selected.value;
-  const label = useComputed(() => model.document.value.alternatives.find(({ key }) => key === page.selected.value?.key)?.label ?? "").value;
+  const label = useComputed(
+    () => model.document.value.alternatives.find(({ key }) => key === page.selected.value?.key)?.label ?? "",
+  ).value;
   if (selected === undefined) return null;
   const letter = letterOf(document, selected.key);
   const room = hasRoom(document);
@@ -73,7 +75,9 @@ export function AlternativesPart({ page }: { page: CasePage }) {
               `name ${selected.key}`,
             )
           }
-          problem={label.trim() === "" ? `Name of alternative ${letter} is empty` : refusedAt(page, "alternative-label")}
+          problem={
+            label.trim() === "" ? `Name of alternative ${letter} is empty` : refusedAt(page, "alternative-label")
+          }
           longest={counts.labelCharacters}
         />
       </div>
@@ -81,7 +85,12 @@ export function AlternativesPart({ page }: { page: CasePage }) {
         <button type="button" class="button" disabled={!room} onClick={() => add("alternative added", undefined)}>
           Add an alternative
         </button>
-        <button type="button" class="button" disabled={!room} onClick={() => add(`alternative ${letter} copied`, selected.key)}>
+        <button
+          type="button"
+          class="button"
+          disabled={!room}
+          onClick={() => add(`alternative ${letter} copied`, selected.key)}
+        >
           Copy {letter}
         </button>
         <button type="button" class="button" disabled={document.alternatives.length === 1} onClick={remove}>
@@ -98,5 +107,7 @@ export function AlternativesPart({ page }: { page: CasePage }) {
 function sayState(page: CasePage, alternative: Alternative): string {
   const state = savedStateOf(page, alternative);
   if (state === "never") return "not saved yet";
-  return state === "saved" ? `saved as revision ${alternative.savedNumber}` : `changed since revision ${alternative.savedNumber}`;
+  return state === "saved"
+    ? `saved as revision ${alternative.savedNumber}`
+    : `changed since revision ${alternative.savedNumber}`;
 }

@@ -23,7 +23,11 @@ export async function bringBack(page: CasePage, regimen: LatestOfRegimen): Promi
   return failure;
 }
 
-async function changeRetired(page: CasePage, regimenId: LatestOfRegimen["id"], state: "retired" | "in use"): Promise<Failure | undefined> {
+async function changeRetired(
+  page: CasePage,
+  regimenId: LatestOfRegimen["id"],
+  state: "retired" | "in use",
+): Promise<Failure | undefined> {
   const { changeRegimen } = await import("../http/cases-api.ts");
   const whole = page.stored.peek();
   const retired = state === "retired";

@@ -1,4 +1,4 @@
-import { type ReadonlySignal, type Signal, computed, signal } from "@preact/signals";
+import { computed, type ReadonlySignal, type Signal, signal } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { CaseSetting } from "../../shared/contract/setting.ts";
 import { type CaseDocument, contentOf } from "./case-document.ts";
@@ -76,7 +76,10 @@ export function createCaseModel(opening: CaseDocument, readSetting: ReadSetting)
     },
     rewrite(edit) {
       const { past, now, future, ...rest } = history.peek();
-      const over = (step: Step): Step => ({ ...step, document: resettle(step.document, edit(step.document), readSetting) });
+      const over = (step: Step): Step => ({
+        ...step,
+        document: resettle(step.document, edit(step.document), readSetting),
+      });
       history.value = { ...rest, past: past.map(over), now: over(now), future: future.map(over) };
     },
   };
@@ -117,8 +120,7 @@ function contentsOf(document: ReadonlySignal<CaseDocument>): ReadonlySignal<Read
   let made: ReadonlyMap<string, RegimenContent> = new Map();
   return computed(() => {
     const now = document.value;
-    const shared =
-      before?.label === now.label && before.timeZone === now.timeZone && before.setting === now.setting;
+    const shared = before?.label === now.label && before.timeZone === now.timeZone && before.setting === now.setting;
     const known = new Map(before?.alternatives.map((alternative) => [alternative.key, alternative]));
     const next = new Map<string, RegimenContent>();
     for (const alternative of now.alternatives) {

@@ -1,15 +1,15 @@
-import { type ReadonlySignal, type Signal, computed, signal } from "@preact/signals";
+import { computed, type ReadonlySignal, type Signal, signal } from "@preact/signals";
 import { cautionsForContent } from "../../shared/cautions/gather.ts";
 import { standingCaution } from "../../shared/cautions/standing.ts";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { Caution } from "../../shared/contract/caution.ts";
-import { sayClock } from "../../shared/schedule/clock.ts";
 import { DomainError } from "../../shared/errors.ts";
+import { sayClock } from "../../shared/schedule/clock.ts";
 import type { WholeCase } from "../http/cases-api.ts";
 import { type Alternative, type CaseDocument, contentOf } from "./case-document.ts";
 import { type CaseModel, createCaseModel } from "./case-model.ts";
 import { documentOfCase } from "./document-of-case.ts";
-import { type Drafts, type DraftsByName, createDrafts } from "./drafts.ts";
+import { createDrafts, type Drafts, type DraftsByName } from "./drafts.ts";
 import { readSetting, readSettingForm, type SettingReading } from "./read-setting.ts";
 import { same } from "./same.ts";
 import type { SettingForm } from "./setting-form.ts";

@@ -8,12 +8,26 @@ export function CaseTools({ page, keeping }: { page: CasePage; keeping: Keeping 
     <div class="case-tools">
       <span class="soft">
         {page.unsaved.value ? "Unsaved" : "All saved"}
-        {page.unsaved.value && <span class={keeping === "kept" ? "kept-words" : undefined}>{keepingWords[keeping]}</span>}
+        {page.unsaved.value && (
+          <span class={keeping === "kept" ? "kept-words" : undefined}>{keepingWords[keeping]}</span>
+        )}
       </span>
-      <button type="button" class="button" disabled={!model.canUndo.value} onClick={model.undo} aria-keyshortcuts="Control+Z">
+      <button
+        type="button"
+        class="button"
+        disabled={!model.canUndo.value}
+        onClick={model.undo}
+        aria-keyshortcuts="Control+Z"
+      >
         Undo
       </button>
-      <button type="button" class="button" disabled={!model.canRedo.value} onClick={model.redo} aria-keyshortcuts="Control+Shift+Z">
+      <button
+        type="button"
+        class="button"
+        disabled={!model.canRedo.value}
+        onClick={model.redo}
+        aria-keyshortcuts="Control+Shift+Z"
+      >
         Redo
       </button>
     </div>

@@ -1,6 +1,11 @@
 import { type LimitName, limits } from "../../shared/contract/limits.ts";
 import type { CaseSetting, StatedKinetics } from "../../shared/contract/setting.ts";
-import { type KineticName, type KineticValues, type Kinetics, resolveKinetics } from "../../shared/kinetics/disposition.ts";
+import {
+  type KineticName,
+  type Kinetics,
+  type KineticValues,
+  resolveKinetics,
+} from "../../shared/kinetics/disposition.ts";
 import { formatPercent, formatQuantity } from "../../shared/units/format.ts";
 import { readMoment } from "../controls/moment.ts";
 import { readLimited, readOptional, unitOf } from "../controls/read-field.ts";
@@ -28,7 +33,13 @@ export const shortNames: Readonly<Record<KineticName, string>> = {
 };
 
 const kineticNames = Object.keys(shortNames) as KineticName[];
-const statedNames: readonly StatedName[] = [...kineticNames, "absorptionRatePerH", "lagH", "bioavailability", "saltFactor"];
+const statedNames: readonly StatedName[] = [
+  ...kineticNames,
+  "absorptionRatePerH",
+  "lagH",
+  "bioavailability",
+  "saltFactor",
+];
 
 /** Reads a whole form: every field strictly, nothing guessed, all problems at once. */
 export function readSettingForm(form: SettingForm, timeZone: string): SettingReading {
@@ -41,7 +52,13 @@ export function readSettingForm(form: SettingForm, timeZone: string): SettingRea
   const stated = readStated(form, note);
   const kinetics = readKinetics(stated, problems, note, missing);
   const range = readRange(form, note);
-  const startConcentration = numberIn("concentrationMgPerL", form.startConcentration.text, "startConcentration", note, "Start concentration");
+  const startConcentration = numberIn(
+    "concentrationMgPerL",
+    form.startConcentration.text,
+    "startConcentration",
+    note,
+    "Start concentration",
+  );
   const partial = { problems, missing, ...(kinetics !== undefined && { kinetics }) };
   if (plan === undefined || kinetics === undefined || Object.keys(problems).length > 0) return partial;
   const setting: CaseSetting = {
@@ -86,7 +103,9 @@ function readKinetics(
   note: Note,
   missing: string[],
 ): Kinetics | undefined {
-  const values: KineticValues = Object.fromEntries(kineticNames.flatMap((name) => (stated[name] ? [[name, stated[name].value]] : [])));
+  const values: KineticValues = Object.fromEntries(
+    kineticNames.flatMap((name) => (stated[name] ? [[name, stated[name].value]] : [])),
+  );
   const resolved = resolveKinetics(values);
   if (resolved.ok) return derivedProblems(resolved.kinetics, note) ? undefined : resolved.kinetics;
   const { field } = resolved;
@@ -129,7 +148,8 @@ function readRange(form: SettingForm, note: Note): CaseSetting["rangeMgPerL"] | 
   const high = numberIn("concentrationMgPerL", form.rangeHigh, "rangeHigh", note, "High end of the range");
   const lowEmpty = form.rangeLow.trim() === "";
   const highEmpty = form.rangeHigh.trim() === "";
-  if (lowEmpty && !highEmpty) note("rangeLow", "Low end of the range is empty while the high end is given; write 0 mg/L for no low end");
+  if (lowEmpty && !highEmpty)
+    note("rangeLow", "Low end of the range is empty while the high end is given; write 0 mg/L for no low end");
   if (highEmpty && !lowEmpty) note("rangeHigh", "High end of the range is empty while the low end is given");
   if (low === undefined || high === undefined) return undefined;
   if (high > low) return { low, high };

@@ -1,4 +1,4 @@
-import { type ReadonlySignal, effect, signal } from "@preact/signals";
+import { effect, type ReadonlySignal, signal } from "@preact/signals";
 
 /** While something moves, what is long to draw waits until it has rested for so long. */
 const restMs = 80;

@@ -13,7 +13,11 @@ interface CaseListProps {
 export function CaseList({ cases, sought, onMove }: CaseListProps) {
   if (cases === undefined) return <p role="status">Loading …</p>;
   if (cases.length === 0)
-    return <p role="status">{sought.trim() === "" ? "No case here yet." : `No case has “${sought}” in its label or notes.`}</p>;
+    return (
+      <p role="status">
+        {sought.trim() === "" ? "No case here yet." : `No case has “${sought}” in its label or notes.`}
+      </p>
+    );
   return (
     <ul class="case-list">
       {cases.map((each) => (

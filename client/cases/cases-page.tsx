@@ -47,7 +47,14 @@ export function CasesPage() {
     <PageFrame cautions={[standingCaution]}>
       <h1 id="cases-title">Cases</h1>
       <div class="cases-find">
-        <TextField id="find" label="Find by label or notes" text={find.value} onText={(text) => { find.value = text; }} />
+        <TextField
+          id="find"
+          label="Find by label or notes"
+          text={find.value}
+          onText={(text) => {
+            find.value = text;
+          }}
+        />
         <ChoiceField
           id="shelf"
           legend="Which cases"
@@ -74,5 +81,8 @@ export function CasesPage() {
 /** Every word must be somewhere in the label or the notes. */
 function matches({ label, notes }: Case, sought: string): boolean {
   const text = `${label} ${notes}`.toLowerCase();
-  return sought.toLowerCase().split(/\s+/).every((word) => text.includes(word));
+  return sought
+    .toLowerCase()
+    .split(/\s+/)
+    .every((word) => text.includes(word));
 }

@@ -93,7 +93,9 @@ function readTyped(): Typed {
   try {
     const read: unknown = JSON.parse(readKept(kept) ?? "{}");
     if (typeof read !== "object" || read === null) return fresh;
-    const texts = Object.entries(read).filter(([name, text]) => fields.includes(name as never) && typeof text === "string");
+    const texts = Object.entries(read).filter(
+      ([name, text]) => fields.includes(name as never) && typeof text === "string",
+    );
     return { ...fresh, ...Object.fromEntries(texts) };
   } catch {
     return fresh;

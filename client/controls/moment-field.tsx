@@ -47,7 +47,10 @@ export function MomentField(props: MomentFieldProps) {
             { value: "second", label: "the second, after the clock went back" },
           ]}
           onChoice={(which) =>
-            onMoment(which === "second" && read.second ? { text: moment.text, instant: read.second } : { text: moment.text }, "settled")
+            onMoment(
+              which === "second" && read.second ? { text: moment.text, instant: read.second } : { text: moment.text },
+              "settled",
+            )
           }
         />
       )}

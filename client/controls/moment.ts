@@ -21,11 +21,13 @@ export type ReadMoment =
  */
 export function readMoment(moment: MomentText, timeZone: string, label: string): ReadMoment {
   const text = moment.text.trim();
-  if (text === "") return { ok: false, problem: `${label} is empty; write a date and 24-hour time such as 2026-03-29 08:00` };
+  if (text === "")
+    return { ok: false, problem: `${label} is empty; write a date and 24-hour time such as 2026-03-29 08:00` };
   try {
     const { instant, resolution } = toInstant(text, timeZone);
     const second = resolution === "repeated" ? secondInstant(text, timeZone) : undefined;
-    const kept = moment.instant !== undefined && fieldText(moment.instant, timeZone) === text.replace("T", " ").slice(0, 16);
+    const kept =
+      moment.instant !== undefined && fieldText(moment.instant, timeZone) === text.replace("T", " ").slice(0, 16);
     return { ok: true, instant: kept ? moment.instant : instant, resolution, ...(second !== undefined && { second }) };
   } catch (error) {
     if (error instanceof DomainError) return { ok: false, problem: `${label} must be ${error.allowed}, got ${text}` };

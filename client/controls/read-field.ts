@@ -3,7 +3,9 @@ import { formatQuantity } from "../../shared/units/format.ts";
 import { readNumber } from "../../shared/units/read-number.ts";
 
 /** What a field says, or why it cannot be used: field, value and what is allowed. */
-export type ReadField = { readonly ok: true; readonly value: number } | { readonly ok: false; readonly problem: string };
+export type ReadField =
+  | { readonly ok: true; readonly value: number }
+  | { readonly ok: false; readonly problem: string };
 
 /** A unit as it stands beside a field: a slash before h in a rate of doses can be read as a 1. */
 export function unitOf(name: LimitName): string {

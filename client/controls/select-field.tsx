@@ -1,4 +1,4 @@
-import { Field, type FieldWords, describedBy } from "./field.tsx";
+import { describedBy, Field, type FieldWords } from "./field.tsx";
 
 interface SelectFieldProps extends FieldWords {
   readonly value: string;

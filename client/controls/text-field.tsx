@@ -1,5 +1,5 @@
 import { useSignal } from "@preact/signals";
-import { Field, type FieldWords, describedBy } from "./field.tsx";
+import { describedBy, Field, type FieldWords } from "./field.tsx";
 
 /** "typing": every key; "settled": the person left the field or pressed Enter. */
 export type TypingStage = "typing" | "settled";

@@ -57,11 +57,7 @@ export function readDoseDraft(draft: Draft, { orderId, occurrence, give }: Order
 }
 
 /** A dose as its editor shows it. */
-export function draftOfDose(
-  exception: Exception | undefined,
-  record: DoseRecord | undefined,
-  timeZone: string,
-): Draft {
+export function draftOfDose(exception: Exception | undefined, record: DoseRecord | undefined, timeZone: string): Draft {
   const left = exception !== undefined && "skip" in exception;
   return {
     plan: exception === undefined ? "as-rest" : left ? "left-out" : "changed",
@@ -79,11 +75,18 @@ interface Parts {
 }
 
 /** Empty fields stay as they are; a pump log can only be moved. */
-function readParts(draft: Draft, prefix: string, give: Give, timeZone: string, problems: Record<string, string>): Parts {
+function readParts(
+  draft: Draft,
+  prefix: string,
+  give: Give,
+  timeZone: string,
+  problems: Record<string, string>,
+): Parts {
   const moment = momentIn(draft, `${prefix}-at`);
   const at = moment.text.trim() === "" ? undefined : readMoment(moment, timeZone, "Time");
   const amount = give.kind === "pump" ? undefined : readOptional("amountMg", textIn(draft, `${prefix}-amount`));
-  const duration = give.kind === "infusion" ? readOptional("durationH", textIn(draft, `${prefix}-duration`)) : undefined;
+  const duration =
+    give.kind === "infusion" ? readOptional("durationH", textIn(draft, `${prefix}-duration`)) : undefined;
   if (at?.ok === false) problems[`${prefix}-at`] = at.problem;
   if (amount?.ok === false) problems[`${prefix}-amount`] = amount.problem;
   if (duration?.ok === false) problems[`${prefix}-duration`] = duration.problem;

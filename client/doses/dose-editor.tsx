@@ -1,14 +1,14 @@
 import { useSignal } from "@preact/signals";
 import { counts } from "../../shared/contract/limits.ts";
 import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
+import { plainText } from "../case/form-of-setting.ts";
 import { ChoiceField } from "../controls/choice-field.tsx";
 import { MomentField } from "../controls/moment-field.tsx";
 import { TextField } from "../controls/text-field.tsx";
 import { AmountField, DurationField } from "../orders/give-fields.tsx";
-import { plainText } from "../case/form-of-setting.ts";
 import { focusOn } from "../shell/focus.ts";
 import { ProblemSummary } from "../shell/problem-summary.tsx";
-import { type DoseEdit, type OrderedDose, givenChoiceOf, planChoiceOf, readDoseDraft } from "./dose-draft.ts";
+import { type DoseEdit, givenChoiceOf, type OrderedDose, planChoiceOf, readDoseDraft } from "./dose-draft.ts";
 
 interface DoseEditorProps {
   readonly dose: OrderedDose;

@@ -42,7 +42,11 @@ export function DoseRow({ dose, schedule, note, timeZone, onEdit, children }: Do
         </td>
         <td>
           <button type="button" class="button" id={doseButtonId(dose.key)} onClick={onEdit}>
-            Record or change<span class="unseen"> {name}, {sayClock(dose.plannedAt ?? dose.at, timeZone)}</span>
+            Record or change
+            <span class="unseen">
+              {" "}
+              {name}, {sayClock(dose.plannedAt ?? dose.at, timeZone)}
+            </span>
           </button>
         </td>
       </tr>

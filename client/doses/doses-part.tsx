@@ -3,16 +3,18 @@ import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { type Alternative, letterOf, withSchedule } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { newId } from "../case/new-id.ts";
+import { CsvButton } from "../reading/csv-button.tsx";
+import { nameOfDose } from "../reading/dose-words.ts";
 import { focusOn } from "../shell/focus.ts";
 import { datedDoses } from "./dated-doses.ts";
-import { type OrderedDose, draftOfDose } from "./dose-draft.ts";
+import { draftOfDose, type OrderedDose } from "./dose-draft.ts";
 import { DoseEditor } from "./dose-editor.tsx";
 import { DoseRow, doseButtonId } from "./dose-row.tsx";
+import { doseTable } from "./dose-table.ts";
 import { draftOfExtra } from "./extra-draft.ts";
 import { ExtraEditor } from "./extra-editor.tsx";
 import { LostRecords } from "./lost-records.tsx";
 import { withDoseEdit, withExtra, withoutExtra } from "./record-edits.ts";
-import { nameOfDose } from "../reading/dose-words.ts";
 import "./doses-part.css";
 
 /** A long plan has thousands of doses; so many are shown until more are asked for. */
@@ -148,6 +150,14 @@ export function DosesPart({ page }: { page: CasePage }) {
           >
             Show {Math.min(shownAtOnce, doses.length - shown.value)} more of {doses.length} doses
           </button>
+        )}
+        {doses.length > 0 && (
+          <CsvButton
+            fileName={`${document.label} ${selected.label} doses`}
+            table={() => doseTable(doses, selected.schedule, timeZone)}
+          >
+            Doses as CSV
+          </CsvButton>
         )}
         {drafts.all.value[draftName("new")] === undefined && (
           <button

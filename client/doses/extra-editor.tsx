@@ -47,7 +47,13 @@ export function ExtraEditor({ id, title, draft, timeZone, onDraft, onApply, onCa
         />
       </div>
       <GiveFields name={name} draft={draft} problems={problems} onDraft={onDraft} />
-      <TextField id={name("note")} label="Note" text={textIn(draft, "note")} onText={(note) => onDraft({ note })} longest={counts.noteCharacters} />
+      <TextField
+        id={name("note")}
+        label="Note"
+        text={textIn(draft, "note")}
+        onText={(note) => onDraft({ note })}
+        longest={counts.noteCharacters}
+      />
       <div class="button-row">
         <button type="submit" class="button button-main">
           Apply

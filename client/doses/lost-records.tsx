@@ -30,7 +30,9 @@ export function LostRecords({ page, alternative, lost }: LostRecordsProps) {
                 class="button"
                 onClick={() => {
                   page.model.change(`record of ${name} taken out`, (now) =>
-                    withSchedule(now, alternative.key, (schedule) => withoutRecord(schedule, record.orderId, record.occurrence)),
+                    withSchedule(now, alternative.key, (schedule) =>
+                      withoutRecord(schedule, record.orderId, record.occurrence),
+                    ),
                   );
                   focusOn("doses-title");
                 }}

@@ -4,7 +4,11 @@ import { withException } from "../orders/order-edits.ts";
 import type { DoseEdit, OrderedDose } from "./dose-draft.ts";
 
 /** The schedule with what the editor of one dose says about its plan and about what was given. */
-export function withDoseEdit(schedule: Schedule, { orderId, occurrence }: Pick<OrderedDose, "orderId" | "occurrence">, edit: DoseEdit): Schedule {
+export function withDoseEdit(
+  schedule: Schedule,
+  { orderId, occurrence }: Pick<OrderedDose, "orderId" | "occurrence">,
+  edit: DoseEdit,
+): Schedule {
   const planned = withException(schedule, orderId, occurrence, edit.exception);
   const others = withoutRecord(planned, orderId, occurrence).records;
   return { ...planned, records: edit.record === undefined ? others : [...others, edit.record] };
@@ -19,7 +23,10 @@ export function withoutRecord(schedule: Schedule, orderId: string, occurrence: n
 /** The schedule with an extra dose replaced, or added at the end where it is new. */
 export function withExtra(schedule: Schedule, extra: ExtraDose): Schedule {
   const known = schedule.extras.some(({ id }) => id === extra.id);
-  return { ...schedule, extras: known ? schedule.extras.map((each) => (each.id === extra.id ? extra : each)) : [...schedule.extras, extra] };
+  return {
+    ...schedule,
+    extras: known ? schedule.extras.map((each) => (each.id === extra.id ? extra : each)) : [...schedule.extras, extra],
+  };
 }
 
 export function withoutExtra(schedule: Schedule, id: string): Schedule {

@@ -1,4 +1,4 @@
-import { type Signal, effect } from "@preact/signals";
+import { effect, type Signal } from "@preact/signals";
 import { type CasePage, hasUnsaved } from "../case/case-page.ts";
 import { holdAlone } from "./hold-alone.ts";
 import { dropKept, keptName, writeKept } from "./kept-text.ts";
@@ -59,6 +59,10 @@ function keepNow(page: CasePage, name: string): Keeping {
     dropKept(name);
     return "kept";
   }
-  const work = { document: page.model.document.peek(), drafts: page.drafts.all.peek(), baseVersion: page.baseVersion.peek() };
+  const work = {
+    document: page.model.document.peek(),
+    drafts: page.drafts.all.peek(),
+    baseVersion: page.baseVersion.peek(),
+  };
   return writeKept(name, writeUnsaved(work, new Date())) ? "kept" : "refused";
 }

@@ -43,7 +43,11 @@ function Readable({ whole, kept }: { whole: WholeCase; kept: KeptWork }) {
         {alternatives.length === 1 ? "one alternative" : `${alternatives.length} alternatives`}:{" "}
         {alternatives.map(({ label }) => label).join(", ")}.
       </p>
-      {newer && <p>The case was saved again since then. When you save, you are shown what differs before anything is replaced.</p>}
+      {newer && (
+        <p>
+          The case was saved again since then. When you save, you are shown what differs before anything is replaced.
+        </p>
+      )}
     </>
   );
 }

@@ -28,7 +28,11 @@ export interface GiveSetting {
  *
  * @param problems takes what is wrong, by field
  */
-export function readGive(draft: Draft, { timeZone, startsAt }: GiveSetting, problems: Record<string, string>): Give | undefined {
+export function readGive(
+  draft: Draft,
+  { timeZone, startsAt }: GiveSetting,
+  problems: Record<string, string>,
+): Give | undefined {
   const kind = giveKindOf(draft);
   if (kind === "pump") return startsAt === undefined ? undefined : readPump(draft, timeZone, startsAt, problems);
   const amount = readLimited("amountMg", textIn(draft, "amount"));
@@ -47,7 +51,12 @@ export function draftOfGive(give: Give): Draft {
   return give.kind === "infusion" ? { ...amount, duration: plainText(give.durationH) } : amount;
 }
 
-function readPump(draft: Draft, timeZone: string, startsAt: string, problems: Record<string, string>): Give | undefined {
+function readPump(
+  draft: Draft,
+  timeZone: string,
+  startsAt: string,
+  problems: Record<string, string>,
+): Give | undefined {
   const read = pumpLogReader();
   if (read === undefined) {
     problems["pump"] = "Pump log cannot be read yet: the page is still fetching its reader. Apply again in a moment";

@@ -18,12 +18,29 @@ export function GiveFields({ name, draft, problems, onDraft }: GiveFieldsProps) 
   const kind = giveKindOf(draft);
   return (
     <>
-      <ChoiceField id={name("kind")} legend="What is given" value={kind} choices={giveKinds} onChoice={(value) => onDraft({ kind: value })} />
+      <ChoiceField
+        id={name("kind")}
+        legend="What is given"
+        value={kind}
+        choices={giveKinds}
+        onChoice={(value) => onDraft({ kind: value })}
+      />
       {kind === "pump" ? (
-        <PumpLogField id={name("pump")} text={textIn(draft, "pump")} problem={problems["pump"]} onText={(pump) => onDraft({ pump })} />
+        <PumpLogField
+          id={name("pump")}
+          text={textIn(draft, "pump")}
+          problem={problems["pump"]}
+          onText={(pump) => onDraft({ pump })}
+        />
       ) : (
         <div class="fields">
-          <AmountField id={name("amount")} label="Amount" text={textIn(draft, "amount")} problem={problems["amount"]} onText={(amount) => onDraft({ amount })} />
+          <AmountField
+            id={name("amount")}
+            label="Amount"
+            text={textIn(draft, "amount")}
+            problem={problems["amount"]}
+            onText={(amount) => onDraft({ amount })}
+          />
           {kind === "infusion" && (
             <DurationField
               id={name("duration")}
@@ -60,5 +77,12 @@ export function DurationField({ amountText, ...props }: PartProps & { readonly a
   const read = readLimited("durationH", props.text);
   const amount = readLimited("amountMg", amountText);
   const rate = read.ok && amount.ok ? `, ${formatRate(amount.value / read.value)}` : "";
-  return <TextField {...props} unit="h" mode="decimal" reading={read.ok ? `${formatDuration(read.value)}${rate}` : undefined} />;
+  return (
+    <TextField
+      {...props}
+      unit="h"
+      mode="decimal"
+      reading={read.ok ? `${formatDuration(read.value)}${rate}` : undefined}
+    />
+  );
 }

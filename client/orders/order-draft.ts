@@ -47,7 +47,10 @@ export function readOrderDraft(draft: Draft, kept: Pick<Order, "id" | "exception
   const give = readGive(draft, { timeZone, startsAt }, problems);
   const read = readWhen(draft, when, startsAt, timeZone, problems);
   if (give === undefined || read === undefined || Object.keys(problems).length > 0) return { ok: false, problems };
-  return { ok: true, order: { ...kept, exceptions: [...kept.exceptions], give, when: read, note: textIn(draft, "note") } };
+  return {
+    ok: true,
+    order: { ...kept, exceptions: [...kept.exceptions], give, when: read, note: textIn(draft, "note") },
+  };
 }
 
 /** An order as its editor shows it. */
@@ -83,19 +86,27 @@ function readWhen(
   return from && end && times ? { kind, from, times, end } : undefined;
 }
 
-function readEnd(draft: Draft, from: string | undefined, timeZone: string, problems: Record<string, string>): End | undefined {
+function readEnd(
+  draft: Draft,
+  from: string | undefined,
+  timeZone: string,
+  problems: Record<string, string>,
+): End | undefined {
   const kind = endKindOf(draft);
   if (kind === "open") return { kind };
   if (kind === "count") {
     const doses = readNumber(textIn(draft, "doses"));
-    if (doses.ok && Number.isInteger(doses.value) && doses.value >= 1 && doses.value <= counts.doses) return { kind, doses: doses.value };
-    problems["doses"] = `Number of doses must be a whole number from 1 to 10,000, got ${textIn(draft, "doses").trim() || "nothing"}`;
+    if (doses.ok && Number.isInteger(doses.value) && doses.value >= 1 && doses.value <= counts.doses)
+      return { kind, doses: doses.value };
+    problems["doses"] =
+      `Number of doses must be a whole number from 1 to 10,000, got ${textIn(draft, "doses").trim() || "nothing"}`;
     return undefined;
   }
   const until = readMoment(momentIn(draft, "until"), timeZone, "Until");
   if (!until.ok) problems["until"] = until.problem;
   else if (from !== undefined && !(Date.parse(until.instant) > Date.parse(from)))
-    problems["until"] = `Until must be later than From (${textIn(draft, "at").trim()}), got ${textIn(draft, "until").trim()}`;
+    problems["until"] =
+      `Until must be later than From (${textIn(draft, "at").trim()}), got ${textIn(draft, "until").trim()}`;
   else return { kind, at: until.instant };
   return undefined;
 }
@@ -111,7 +122,8 @@ function readTimes(draft: Draft, problems: Record<string, string>): Times | unde
     if (time === "" && amountText.trim() === "") continue;
     if (!/^([01]\d|2[0-3]):[0-5]\d$/.test(time))
       problems[`time.${row}`] = `Clock time ${row + 1} must be a 24-hour time such as 08:00, got ${time || "nothing"}`;
-    else if (times.some((other) => other.time === time)) problems[`time.${row}`] = `Clock time ${row + 1} must not name ${time} twice`;
+    else if (times.some((other) => other.time === time))
+      problems[`time.${row}`] = `Clock time ${row + 1} must not name ${time} twice`;
     const amount = readOptional("amountMg", amountText, `Amount at clock time ${row + 1}`);
     if (amount?.ok === false) problems[`amount.${row}`] = amount.problem;
     times.push({ time, ...(amount?.ok && { amountMg: amount.value }) });

@@ -48,8 +48,10 @@ export function OrderEditor({ id, title, draft, kept, timeZone, onDraft, onApply
       />
       {kept.exceptions.length > 0 && (
         <p class="soft">
-          {kept.exceptions.length === 1 ? "One dose of this order is" : `${kept.exceptions.length} doses of this order are`} planned
-          otherwise; that stays with the number of the dose, counted from the order's first.
+          {kept.exceptions.length === 1
+            ? "One dose of this order is"
+            : `${kept.exceptions.length} doses of this order are`}{" "}
+          planned otherwise; that stays with the number of the dose, counted from the order's first.
         </p>
       )}
       <div class="button-row">

@@ -4,7 +4,9 @@ import type { Order } from "../../shared/contract/schedule.ts";
 /** The schedule with an order replaced, or added at the end where it is new. */
 export function withOrder(schedule: Schedule, order: Order): Schedule {
   const known = schedule.orders.some(({ id }) => id === order.id);
-  const orders = known ? schedule.orders.map((each) => (each.id === order.id ? order : each)) : [...schedule.orders, order];
+  const orders = known
+    ? schedule.orders.map((each) => (each.id === order.id ? order : each))
+    : [...schedule.orders, order];
   return { ...schedule, orders };
 }
 

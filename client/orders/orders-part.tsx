@@ -1,8 +1,8 @@
-import { type LimitName, counts, limits } from "../../shared/contract/limits.ts";
+import { counts, type LimitName, limits } from "../../shared/contract/limits.ts";
 import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
-import { newId } from "../case/new-id.ts";
 import { momentFields } from "../case/drafts.ts";
+import { newId } from "../case/new-id.ts";
 import { refusedAt } from "../saving/refused.ts";
 import { focusOn } from "../shell/focus.ts";
 import { ExceptionsList } from "./exceptions-list.tsx";
@@ -102,7 +102,9 @@ export function OrdersPart({ page }: { page: CasePage }) {
               timeZone={timeZone}
               onPutBack={(occurrence) => {
                 model.change(`dose ${occurrence + 1} of order ${index + 1} as the rest`, (now) =>
-                  withSchedule(now, selected.key, (schedule) => withException(schedule, order.id, occurrence, undefined)),
+                  withSchedule(now, selected.key, (schedule) =>
+                    withException(schedule, order.id, occurrence, undefined),
+                  ),
                 );
                 focusOn(`order-edit-${order.id}`);
               }}
@@ -119,7 +121,10 @@ export function OrdersPart({ page }: { page: CasePage }) {
           id="order-add"
           disabled={orders.length >= counts.ordersPerAlternative}
           onClick={() => {
-            drafts.open(draftName("new"), { ...emptyOrderDraft, ...momentFields("at", model.document.peek().form.start) });
+            drafts.open(draftName("new"), {
+              ...emptyOrderDraft,
+              ...momentFields("at", model.document.peek().form.start),
+            });
             focusOn("order-new-amount");
           }}
         >

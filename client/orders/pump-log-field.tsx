@@ -17,7 +17,8 @@ export function PumpLogField({ id, text, problem, onText }: PumpLogFieldProps) {
   const take = async (file: File | undefined) => {
     if (file === undefined) return;
     const read = await readText(file);
-    unread.value = read === undefined ? `${file.name} must be text encoded in UTF-8; save it anew as CSV in UTF-8` : undefined;
+    unread.value =
+      read === undefined ? `${file.name} must be text encoded in UTF-8; save it anew as CSV in UTF-8` : undefined;
     if (read !== undefined) onText(read);
   };
   return (

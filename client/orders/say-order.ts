@@ -26,7 +26,9 @@ function sayWhen(when: When, timeZone: string): string {
 }
 
 function sayTimes(times: Extract<When, { kind: "clock-times" }>["times"]): string {
-  return times.map(({ time, amountMg }) => (amountMg === undefined ? time : `${time} (${formatDose(amountMg)})`)).join(" and ");
+  return times
+    .map(({ time, amountMg }) => (amountMg === undefined ? time : `${time} (${formatDose(amountMg)})`))
+    .join(" and ");
 }
 
 function sayEnd(end: Extract<When, { kind: "every" }>["end"], timeZone: string): string {

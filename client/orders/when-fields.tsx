@@ -54,7 +54,11 @@ export function WhenFields(props: WhenFieldsProps) {
             text={textIn(draft, "interval")}
             onText={(text) => onDraft({ interval: text })}
             problem={problems["interval"]}
-            reading={interval.ok ? `every ${formatDuration(interval.value)} of elapsed time, whatever the clock does` : undefined}
+            reading={
+              interval.ok
+                ? `every ${formatDuration(interval.value)} of elapsed time, whatever the clock does`
+                : undefined
+            }
           />
         )}
       </div>

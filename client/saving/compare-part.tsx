@@ -1,4 +1,4 @@
-import { useSignal } from "@preact/signals";
+import { useComputed, useSignal } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import { contentOf, letterOf } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
@@ -28,6 +28,7 @@ export function ComparePart({ page }: { page: CasePage }) {
     const own = pageSides(page).find(({ value }) => value === `page ${page.selected.peek()?.key}`);
     chosen.value = { before: sides[0]?.value ?? "", after: own?.value ?? sides.at(-1)?.value ?? "" };
   };
+  const onPage = useComputed(() => pageSides(page)).value;
   if (saved.value === undefined)
     return (
       <div class="compare">
@@ -37,7 +38,7 @@ export function ComparePart({ page }: { page: CasePage }) {
         {failure.value && <FailureNote failure={failure.value} />}
       </div>
     );
-  const sides = [...saved.value, ...pageSides(page)];
+  const sides = [...saved.value, ...onPage];
   const find = (value: string) => sides.find((side) => side.value === value);
   const before = find(chosen.value.before);
   const after = find(chosen.value.after);
@@ -71,7 +72,11 @@ export function ComparePart({ page }: { page: CasePage }) {
       </div>
       {before && after && (
         <>
-          <DifferencesTable before={before.content} after={after.content} names={{ before: before.label, after: after.label }} />
+          <DifferencesTable
+            before={before.content}
+            after={after.content}
+            names={{ before: before.label, after: after.label }}
+          />
           <CurveComparison before={before.content} after={after.content} />
         </>
       )}
@@ -85,7 +90,9 @@ async function savedSides(page: CasePage): Promise<Gathered> {
   const { listRevisions } = await import("../http/cases-api.ts");
   const { case: stored, regimens } = page.stored.peek();
   const answers = await Promise.all(
-    regimens.filter(({ latestRevisionNumber }) => latestRevisionNumber > 0).map(({ id }) => listRevisions(stored.id, id)),
+    regimens
+      .filter(({ latestRevisionNumber }) => latestRevisionNumber > 0)
+      .map(({ id }) => listRevisions(stored.id, id)),
   );
   const sides: Side[] = [];
   for (const answer of answers) {
@@ -101,6 +108,8 @@ function pageSides(page: CasePage): Side[] {
   return document.alternatives.flatMap((alternative) => {
     const { key, label } = alternative;
     const content = contentOf(document, alternative);
-    return content === undefined ? [] : [{ value: `page ${key}`, label: `${letterOf(document, key)} ${label}, as on this page`, content }];
+    return content === undefined
+      ? []
+      : [{ value: `page ${key}`, label: `${letterOf(document, key)} ${label}, as on this page`, content }];
   });
 }

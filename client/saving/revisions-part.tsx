@@ -62,7 +62,11 @@ export function RevisionsPart({ page }: { page: CasePage }) {
                 <td class="hash">{revision.contentHash.slice(0, 12)}</td>
                 <td>
                   <SheetLinks revision={revision} />
-                  <TakeUp page={page} revision={revision} onTaken={() => announce(`Revision ${revision.number} is taken up; save it as a new revision`)} />
+                  <TakeUp
+                    page={page}
+                    revision={revision}
+                    onTaken={() => announce(`Revision ${revision.number} is taken up; save it as a new revision`)}
+                  />
                 </td>
               </tr>
             ))}

@@ -3,7 +3,7 @@ import type { Caution } from "../../shared/contract/caution.ts";
 import { type Alternative, contentOf, withAlternative } from "../case/case-document.ts";
 import { type CasePage, judge } from "../case/case-page.ts";
 import type { LatestOfRegimen } from "../http/cases-api.ts";
-import { type Outcome, failedWith, saveDetails, staleWith } from "./save-details.ts";
+import { failedWith, type Outcome, saveDetails, staleWith } from "./save-details.ts";
 import { isAbout } from "./stop-reasons.tsx";
 
 export interface SaveWords {
@@ -28,7 +28,11 @@ export async function saveAlternative(page: CasePage, key: string, words: SaveWo
   const alternative = document.alternatives.find((each) => each.key === key);
   const content = alternative && contentOf(document, alternative);
   if (alternative?.regimenId === undefined || content === undefined) return known;
-  const draft = { basedOnNumber: alternative.savedNumber, ...words, content: readyContent(content, judge(content).cautions) };
+  const draft = {
+    basedOnNumber: alternative.savedNumber,
+    ...words,
+    content: readyContent(content, judge(content).cautions),
+  };
   const answer = await saveRevision(page.stored.peek().case.id, alternative.regimenId, draft);
   if (!answer.ok) {
     const { failure } = answer;
@@ -41,7 +45,8 @@ export async function saveAlternative(page: CasePage, key: string, words: SaveWo
 
 /** Only reasons that answer a caution of this content go with it; labels lose the spaces around them. */
 function readyContent(content: RegimenContent, cautions: readonly Caution[]): RegimenContent {
-  const applies = (reason: CautionReason) => reason.reason.trim() !== "" && cautions.some((caution) => isAbout(caution, reason));
+  const applies = (reason: CautionReason) =>
+    reason.reason.trim() !== "" && cautions.some((caution) => isAbout(caution, reason));
   return {
     ...content,
     caseLabel: content.caseLabel.trim(),
@@ -58,7 +63,8 @@ async function knownToServer(page: CasePage, key: string): Promise<Outcome> {
   const { makeRegimen, changeRegimen } = await import("../http/cases-api.ts");
   const known = page.stored.peek().regimens.find(({ id }) => id === alternative.regimenId);
   if (known?.label === label) return { kind: "done" };
-  const answer = known === undefined ? await makeRegimen(caseId, { label }) : await changeRegimen(caseId, known.id, { label });
+  const answer =
+    known === undefined ? await makeRegimen(caseId, { label }) : await changeRegimen(caseId, known.id, { label });
   if (!answer.ok) return failedWith(page, answer.failure);
   store(page, { ...known, ...answer.value });
   page.model.rewrite((document) => withAlternative(document, key, (each) => ({ ...each, regimenId: answer.value.id })));

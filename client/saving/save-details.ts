@@ -19,9 +19,18 @@ export async function saveDetails(page: CasePage): Promise<Outcome> {
   const { label, timeZone, notes, setting } = page.model.document.peek();
   const { changeCase } = await import("../http/cases-api.ts");
   const { id } = page.stored.peek().case;
-  const change = { version: page.baseVersion.peek(), label: label.trim(), timeZone, notes, ...(setting !== undefined && { setting }) };
+  const change = {
+    version: page.baseVersion.peek(),
+    label: label.trim(),
+    timeZone,
+    notes,
+    ...(setting !== undefined && { setting }),
+  };
   const answer = await changeCase(id, change);
-  if (!answer.ok) return answer.failure.kind === "stale" ? staleWith(page, "details", answer.failure) : failedWith(page, answer.failure);
+  if (!answer.ok)
+    return answer.failure.kind === "stale"
+      ? staleWith(page, "details", answer.failure)
+      : failedWith(page, answer.failure);
   if (label !== label.trim()) page.model.rewrite((document) => ({ ...document, label: document.label.trim() }));
   page.baseVersion.value = answer.value.version;
   page.stored.value = { ...page.stored.peek(), case: answer.value };

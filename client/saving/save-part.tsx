@@ -1,6 +1,6 @@
 import { useSignal } from "@preact/signals";
-import { counts } from "../../shared/contract/limits.ts";
 import { unanswered } from "../../shared/cautions/gather.ts";
+import { counts } from "../../shared/contract/limits.ts";
 import { letterOf } from "../case/case-document.ts";
 import { type CasePage, savedStateOf } from "../case/case-page.ts";
 import { textIn } from "../case/drafts.ts";
@@ -14,7 +14,7 @@ import { RevisionsPart } from "./revisions-part.tsx";
 import { type SaveOutcome, saveAlternative } from "./save-alternative.ts";
 import { SavedNote } from "./saved-note.tsx";
 import { StaleNote } from "./stale-note.tsx";
-import { StopReasons, isAbout, reasonField, stopsOf } from "./stop-reasons.tsx";
+import { isAbout, reasonField, StopReasons, stopsOf } from "./stop-reasons.tsx";
 import "./save-part.css";
 
 /** Saves the alternative being edited as a revision that never changes, and shows the earlier ones. */
@@ -54,8 +54,8 @@ export function SavePart({ page }: { page: CasePage }) {
       <p class="soft">
         {state === "never" && "Not saved yet. "}
         {state === "saved" && `Nothing has changed since revision ${selected.savedNumber}. `}
-        {state === "changed" && `Changed since revision ${selected.savedNumber}. `}A revision never changes; saving again makes the
-        next one. Kinetics and plan are saved with it.
+        {state === "changed" && `Changed since revision ${selected.savedNumber}. `}A revision never changes; saving
+        again makes the next one. Kinetics and plan are saved with it.
       </p>
       <StopReasons page={page} problems={shown} />
       <form
@@ -125,8 +125,10 @@ function problemsOf(page: CasePage, reason: string, preparedBy: string): Record<
   const { problem, cautions } = page.judged.value;
   if (label.trim() === "") problems["label"] = "Label of the case is empty";
   if (selected?.label.trim() === "") problems["regimenLabel"] = "Name of the alternative is empty";
-  if (page.selectedContent.value === undefined) problems["setting"] = "Kinetics and plan are not complete: see “Who and what drug”";
-  if (problem !== undefined) problems["schedule"] = "The alternative cannot be computed: see what stands with its orders";
+  if (page.selectedContent.value === undefined)
+    problems["setting"] = "Kinetics and plan are not complete: see “Who and what drug”";
+  if (problem !== undefined)
+    problems["schedule"] = "The alternative cannot be computed: see what stands with its orders";
   const reasons = (selected?.cautionReasons ?? []).filter((each) => each.reason.trim().length >= 3);
   const open = unanswered(cautions, reasons);
   stopsOf(cautions).forEach((stop, index) => {

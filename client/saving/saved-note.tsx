@@ -1,6 +1,6 @@
 import type { Revision } from "../../shared/contract/case.ts";
-import { SheetLinks } from "./sheet-links.tsx";
 import { sayOpinion } from "./say-opinion.ts";
+import { SheetLinks } from "./sheet-links.tsx";
 
 /** What was just saved, and its sheet. */
 export function SavedNote({ revision }: { revision: Revision }) {

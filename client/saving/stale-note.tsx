@@ -22,7 +22,8 @@ export function StaleNote({ page, stale, onSettled }: StaleNoteProps) {
   const agree = () => {
     page.stored.value = newest;
     if (what === "details") page.baseVersion.value = newest.case.version;
-    else if (latest !== undefined) page.model.rewrite((document) => basedOn(document, page.selected.peek()?.key, latest.number));
+    else if (latest !== undefined)
+      page.model.rewrite((document) => basedOn(document, page.selected.peek()?.key, latest.number));
   };
   return (
     <div class="failure" role="alert">

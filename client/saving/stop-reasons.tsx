@@ -60,7 +60,10 @@ export function reasonField(index: number): string {
 }
 
 /** A reason answers one caution as it was worded: given for one value, it does not answer for the next. */
-export function isAbout(one: Pick<Caution, "code" | "about" | "text">, other: Pick<Caution, "code" | "about" | "text">): boolean {
+export function isAbout(
+  one: Pick<Caution, "code" | "about" | "text">,
+  other: Pick<Caution, "code" | "about" | "text">,
+): boolean {
   return one.code === other.code && one.about === other.about && one.text === other.text;
 }
 

@@ -15,7 +15,8 @@ export function TakeUp({ page, revision, onTaken }: TakeUpProps) {
   const { model } = page;
   const { content, number } = revision;
   const key = page.selected.value?.key ?? "";
-  const sameSetting = same(page.settled.value.setting, content.setting) && page.settled.value.timeZone === content.timeZone;
+  const sameSetting =
+    same(page.settled.value.setting, content.setting) && page.settled.value.timeZone === content.timeZone;
   const takeUp = (part: "orders" | "everything") => {
     model.change(`revision ${number} taken up again`, (document) => {
       const withOrders = withAlternative(document, key, (each) => ({

@@ -1,12 +1,12 @@
 import { useComputed } from "@preact/signals";
+import { counts } from "../../shared/contract/limits.ts";
+import type { CaseDocument } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
-import { PageContents } from "../case/page-contents.tsx";
 import { textIn } from "../case/drafts.ts";
+import { PageContents } from "../case/page-contents.tsx";
 import { TimeZoneField, timeZoneProblem } from "../cases/time-zone-field.tsx";
 import { momentText, readMoment } from "../controls/moment.ts";
 import { TextField } from "../controls/text-field.tsx";
-import { counts } from "../../shared/contract/limits.ts";
-import type { CaseDocument } from "../case/case-document.ts";
 import { refusedAt } from "../saving/refused.ts";
 import { SaveDetails } from "../saving/save-details-button.tsx";
 
@@ -24,7 +24,9 @@ export function CaseDetails({ page }: { page: CasePage }) {
   return (
     <section class="case-title" aria-label="Case">
       <h1>{label || "Case without a label"}</h1>
-      {page.stored.value.case.archived && <p class="missing">This case is archived. It can be brought back from the list of cases.</p>}
+      {page.stored.value.case.archived && (
+        <p class="missing">This case is archived. It can be brought back from the list of cases.</p>
+      )}
       <PageContents />
       <div class="fields">
         <TextField
@@ -33,7 +35,9 @@ export function CaseDetails({ page }: { page: CasePage }) {
           text={label}
           onText={(text) => model.change("label of the case", (document) => ({ ...document, label: text }), "label")}
           hint="enter no names and nothing else that identifies a person"
-          problem={label.trim() === "" ? "Label is empty; give the case a label without names" : refusedAt(page, "case-label")}
+          problem={
+            label.trim() === "" ? "Label is empty; give the case a label without names" : refusedAt(page, "case-label")
+          }
           longest={counts.labelCharacters}
         />
         <TimeZoneField

@@ -9,7 +9,9 @@ import { readLimited } from "../controls/read-field.ts";
 export type ChangeKind = DatedEliminationChange["kind"];
 
 /** What each kind of change is called, and the quantity it states. */
-export const changeKinds: Readonly<Record<ChangeKind, { readonly label: string; readonly limit: LimitName; readonly value: string }>> = {
+export const changeKinds: Readonly<
+  Record<ChangeKind, { readonly label: string; readonly limit: LimitName; readonly value: string }>
+> = {
   rate: { label: "k becomes another value", limit: "changedRatePerH", value: "New elimination rate constant k" },
   clearance: { label: "CL becomes another value", limit: "changedClearanceLPerH", value: "New clearance CL" },
   "added-clearance": { label: "clearance is added for a span", limit: "addedClearanceLPerH", value: "Added clearance" },

@@ -6,8 +6,8 @@ import { ChoiceField } from "../controls/choice-field.tsx";
 import { MomentField } from "../controls/moment-field.tsx";
 import { unitOf } from "../controls/read-field.ts";
 import { TextField } from "../controls/text-field.tsx";
-import { ProblemSummary } from "../shell/problem-summary.tsx";
 import { focusOn } from "../shell/focus.ts";
+import { ProblemSummary } from "../shell/problem-summary.tsx";
 import { type ChangeKind, changeKinds, kindOfChange, readChangeDraft } from "./change-draft.ts";
 
 interface ChangeEditorProps {
@@ -41,7 +41,10 @@ export function ChangeEditor({ id, draft, timeZone, title, onDraft, onApply, onC
         id={name("kind")}
         legend="What changes"
         value={kind}
-        choices={(Object.keys(changeKinds) as ChangeKind[]).map((value) => ({ value, label: changeKinds[value].label }))}
+        choices={(Object.keys(changeKinds) as ChangeKind[]).map((value) => ({
+          value,
+          label: changeKinds[value].label,
+        }))}
         onChoice={(value) => onDraft({ kind: value })}
       />
       <div class="fields">

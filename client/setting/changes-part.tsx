@@ -18,7 +18,10 @@ export function ChangesPart({ page }: { page: CasePage }) {
   const open = drafts.all.value;
   const refused = refusedAt(page, "changes-title");
   const changeList = (what: string, edit: (changes: readonly DatedEliminationChange[]) => DatedEliminationChange[]) =>
-    model.change(what, (document) => ({ ...document, form: { ...document.form, changes: edit(document.form.changes) } }));
+    model.change(what, (document) => ({
+      ...document,
+      form: { ...document.form, changes: edit(document.form.changes) },
+    }));
   const editor = (key: string, id: string, title: string, known: boolean) => {
     const draft = open[draftName(key)];
     if (draft === undefined) return null;

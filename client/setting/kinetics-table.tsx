@@ -47,7 +47,9 @@ export function KineticsTable({ page }: { page: CasePage }) {
     <>
       <h3>Kinetics</h3>
       <p class="soft">Give any two of these four; the other two are derived. A third is accepted where it agrees.</p>
-      <div class="stated-list">{disposition.map((name) => row(name, undefined, sayDerived(name, reading, form.kinetics[name].text)))}</div>
+      <div class="stated-list">
+        {disposition.map((name) => row(name, undefined, sayDerived(name, reading, form.kinetics[name].text)))}
+      </div>
       <h3>Absorption and salt</h3>
       <div class="stated-list">{absorption.map(({ name, hint }) => row(name, hint, undefined))}</div>
     </>
@@ -64,5 +66,7 @@ function sayDerived(name: KineticName, { kinetics }: SettingReading, text: strin
   if (kinetics === undefined || kinetics.given.includes(name)) return undefined;
   const value = formatQuantity(kinetics[name], unitOf(name));
   const from = kinetics.given.map((each) => shortNames[each]).join(" and ");
-  return text.trim() === "" ? `derived from ${from}: ${value}` : `agrees with ${from}, which give ${value} and are used`;
+  return text.trim() === ""
+    ? `derived from ${from}: ${value}`
+    : `agrees with ${from}, which give ${value} and are used`;
 }

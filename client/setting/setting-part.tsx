@@ -1,3 +1,4 @@
+import { instantAt, toLocal } from "../../shared/schedule/clock.ts";
 import type { CasePage } from "../case/case-page.ts";
 import type { SettingField } from "../case/read-setting.ts";
 import type { SettingForm } from "../case/setting-form.ts";
@@ -6,7 +7,6 @@ import { MomentField, sayInstant } from "../controls/moment-field.tsx";
 import { readLimited } from "../controls/read-field.ts";
 import { TextField } from "../controls/text-field.tsx";
 import { refusedAt } from "../saving/refused.ts";
-import { instantAt, toLocal } from "../../shared/schedule/clock.ts";
 import { KineticsTable } from "./kinetics-table.tsx";
 import { StatedRow } from "./stated-row.tsx";
 import "./setting-part.css";
@@ -23,8 +23,14 @@ export function SettingPart({ page }: { page: CasePage }) {
   return (
     <section class="part" aria-labelledby="setting-title">
       <h2 id="setting-title">Who and what drug</h2>
-      <p class="soft">All alternatives of the case share what stands here. It is saved with the next revision or with the case.</p>
-      {missing.length > 0 && <p role="note" class="missing">Still needed before anything can be computed: {missing.join("; ")}.</p>}
+      <p class="soft">
+        All alternatives of the case share what stands here. It is saved with the next revision or with the case.
+      </p>
+      {missing.length > 0 && (
+        <p role="note" class="missing">
+          Still needed before anything can be computed: {missing.join("; ")}.
+        </p>
+      )}
       <h3>The plan</h3>
       <div class="fields">
         <div>
@@ -101,7 +107,9 @@ export function SettingPart({ page }: { page: CasePage }) {
 function sayEnd(form: SettingForm, timeZone: string): string | undefined {
   const start = readMoment(form.start, timeZone, "");
   const length = readLimited("horizonH", form.horizonH);
-  return start.ok && length.ok ? `ends ${sayInstant(instantAt(start.instant, length.value, timeZone), timeZone)}` : undefined;
+  return start.ok && length.ok
+    ? `ends ${sayInstant(instantAt(start.instant, length.value, timeZone), timeZone)}`
+    : undefined;
 }
 
 function todayAtEight(timeZone: string): string {

@@ -1,5 +1,5 @@
-import type { StatedText } from "../case/setting-form.ts";
 import { counts } from "../../shared/contract/limits.ts";
+import type { StatedText } from "../case/setting-form.ts";
 import { TextField } from "../controls/text-field.tsx";
 
 interface StatedRowProps {

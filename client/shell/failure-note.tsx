@@ -20,7 +20,12 @@ export function FailureNote({ failure, onRetry, fieldOf }: FailureNoteProps) {
             const field = fieldOf?.(pointer);
             return (
               <li key={`${pointer} ${detail}`}>
-                {field ? <a href={`#${field.id}`}>{field.label}</a> : <code>{pointer.replace(/^#\/?/, "") || "the whole"}</code>}: {detail}
+                {field ? (
+                  <a href={`#${field.id}`}>{field.label}</a>
+                ) : (
+                  <code>{pointer.replace(/^#\/?/, "") || "the whole"}</code>
+                )}
+                : {detail}
               </li>
             );
           })}

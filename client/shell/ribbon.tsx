@@ -32,7 +32,13 @@ export function Ribbon({ cautions }: { cautions: readonly Caution[] }) {
             <span aria-hidden="true">{unfolded.value ? "▾" : "▸"}</span> {sayCounts(others)}
           </button>
           {/* Scrolls when long, so it must be reachable by the keyboard. */}
-          <ul id="ribbon-list" class="ribbon-list" hidden={!unfolded.value} tabIndex={0} aria-label="Cautions, gravest first">
+          <ul
+            id="ribbon-list"
+            class="ribbon-list"
+            hidden={!unfolded.value}
+            tabIndex={0}
+            aria-label="Cautions, gravest first"
+          >
             {others.map((caution, index) => (
               <li key={`${caution.code} ${caution.about} ${index}`} class={`ribbon-${caution.severity}`}>
                 <strong>{severityWords[caution.severity]}:</strong> {caution.text}
@@ -47,7 +53,8 @@ export function Ribbon({ cautions }: { cautions: readonly Caution[] }) {
 
 function sayCounts(cautions: readonly Caution[]): string {
   const count = (severity: Caution["severity"]) => cautions.filter((caution) => caution.severity === severity).length;
-  const say = (number: number, one: string, many: string) => (number === 0 ? [] : [`${number} ${number === 1 ? one : many}`]);
+  const say = (number: number, one: string, many: string) =>
+    number === 0 ? [] : [`${number} ${number === 1 ? one : many}`];
   return [
     ...say(count("stop"), "caution to answer before saving", "cautions to answer before saving"),
     ...say(count("warn"), "warning", "warnings"),

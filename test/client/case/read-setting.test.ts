@@ -29,21 +29,38 @@ describe("readSettingForm", () => {
   });
 
   test("refuses three values that disagree, with how far they are apart", () => {
-    const { setting, problems } = readSettingForm(typedSetting({ volumeL: "40", clearanceLPerH: "5", halfLifeH: "8" }), zone);
+    const { setting, problems } = readSettingForm(
+      typedSetting({ volumeL: "40", clearanceLPerH: "5", halfLifeH: "8" }),
+      zone,
+    );
     expect(setting).toBeUndefined();
     // 5.545 h by hand; (8 - 5.545) / 5.545 = 44.3 percent.
     expect(problems.halfLifeH).toContain("disagrees with V and CL, which give 5.545\u00a0h: 44.3\u00a0percent apart");
   });
 
   test("accepts a third value that agrees", () => {
-    expect(readSettingForm(typedSetting({ volumeL: "40", clearanceLPerH: "5", halfLifeH: "5.55" }), zone).problems).toEqual({});
+    expect(
+      readSettingForm(typedSetting({ volumeL: "40", clearanceLPerH: "5", halfLifeH: "5.55" }), zone).problems,
+    ).toEqual({});
   });
 
   test.for([
-    { name: "volumeL", text: "0.001", says: "Volume of distribution must be from 0.01\u00a0L to 50,000\u00a0L, got 0.001\u00a0L" },
+    {
+      name: "volumeL",
+      text: "0.001",
+      says: "Volume of distribution must be from 0.01\u00a0L to 50,000\u00a0L, got 0.001\u00a0L",
+    },
     { name: "halfLifeH", text: "26280", says: "Half-life must be from 0.01\u00a0h to 9,900\u00a0h, got 26,280\u00a0h" },
-    { name: "clearanceLPerH", text: "0,5", says: "Clearance must be written without a comma, such as 0.5 or 1000, got 0,5" },
-    { name: "clearanceLPerH", text: "-5", says: "Clearance must be from 0.00001\u00a0L/h to 5,000\u00a0L/h, got -5\u00a0L/h" },
+    {
+      name: "clearanceLPerH",
+      text: "0,5",
+      says: "Clearance must be written without a comma, such as 0.5 or 1000, got 0,5",
+    },
+    {
+      name: "clearanceLPerH",
+      text: "-5",
+      says: "Clearance must be from 0.00001\u00a0L/h to 5,000\u00a0L/h, got -5\u00a0L/h",
+    },
     { name: "clearanceLPerH", text: "NaN", says: "Clearance must be a plain number, such as 0.5 or 12, got NaN" },
   ] as const)("refuses $name $text, naming field, value and what is allowed", ({ name, text, says }) => {
     const { setting, problems } = readSettingForm(typedSetting({ volumeL: "40", [name]: text }), zone);
@@ -57,7 +74,10 @@ describe("readSettingForm", () => {
   });
 
   test("an unfinished form has nothing wrong, only something missing", () => {
-    const { setting, problems, missing } = readSettingForm(typedSetting({ volumeL: "40" }, { start: { text: "" } }), zone);
+    const { setting, problems, missing } = readSettingForm(
+      typedSetting({ volumeL: "40" }, { start: { text: "" } }),
+      zone,
+    );
     expect(setting).toBeUndefined();
     expect(problems).toEqual({});
     expect(missing).toEqual(["the start of the plan", "two independent values of V, CL, k and half-life"]);
@@ -68,7 +88,10 @@ describe("readSettingForm", () => {
     { rangeLow: "", rangeHigh: "15", field: "rangeLow" },
     { rangeLow: "15", rangeHigh: "15", field: "rangeHigh" },
   ] as const)("refuses a range of $rangeLow to $rangeHigh at $field", ({ rangeLow, rangeHigh, field }) => {
-    const { setting, problems } = readSettingForm(typedSetting({ volumeL: "40", clearanceLPerH: "5" }, { rangeLow, rangeHigh }), zone);
+    const { setting, problems } = readSettingForm(
+      typedSetting({ volumeL: "40", clearanceLPerH: "5" }, { rangeLow, rangeHigh }),
+      zone,
+    );
     expect(setting).toBeUndefined();
     expect(problems[field]).toBeDefined();
   });

@@ -26,19 +26,26 @@ describe("readMoment", () => {
     expect(first).toMatchObject({ resolution: "repeated", instant: "2026-10-25T01:30:00+01:00" });
     const second = first.ok ? first.second : undefined;
     expect(second && Date.parse(second)).toBe(Date.parse("2026-10-25T01:30:00Z"));
-    expect(readMoment({ text: "2026-10-25 01:30", instant: second! }, london, "From")).toMatchObject({ instant: second });
+    expect(readMoment({ text: "2026-10-25 01:30", instant: second! }, london, "From")).toMatchObject({
+      instant: second,
+    });
   });
 
   test("a kept instant keeps its seconds while its text stays, and goes when the text is changed", () => {
     const moment = momentText("2026-03-28T08:00:45Z", london);
     expect(moment.text).toBe("2026-03-28 08:00");
     expect(readMoment(moment, london, "From")).toMatchObject({ instant: "2026-03-28T08:00:45Z" });
-    expect(readMoment({ ...moment, text: "2026-03-28 08:01" }, london, "From")).toMatchObject({ instant: "2026-03-28T08:01:00Z" });
+    expect(readMoment({ ...moment, text: "2026-03-28 08:01" }, london, "From")).toMatchObject({
+      instant: "2026-03-28T08:01:00Z",
+    });
   });
 
-  test.for(["2026-03-28", "28.03.2026 08:00", "2026-02-30 08:00", "2026-03-28 24:00", "8 am"])("refuses %s with what is allowed", (text) => {
-    const read = readMoment({ text }, london, "From");
-    expect(read).toMatchObject({ ok: false });
-    expect(!read.ok && read.problem).toMatch(/^From must be a date and 24-hour time such as .*, got /);
-  });
+  test.for(["2026-03-28", "28.03.2026 08:00", "2026-02-30 08:00", "2026-03-28 24:00", "8 am"])(
+    "refuses %s with what is allowed",
+    (text) => {
+      const read = readMoment({ text }, london, "From");
+      expect(read).toMatchObject({ ok: false });
+      expect(!read.ok && read.problem).toMatch(/^From must be a date and 24-hour time such as .*, got /);
+    },
+  );
 });

@@ -24,9 +24,15 @@ describe("unsaved work", () => {
 
   test.for([
     { what: "cut short", damage: (text: string) => text.slice(0, -20) },
-    { what: "of another version", damage: (text: string) => text.replace('"formatVersion":1,"keptAt"', '"formatVersion":2,"keptAt"') },
+    {
+      what: "of another version",
+      damage: (text: string) => text.replace('"formatVersion":1,"keptAt"', '"formatVersion":2,"keptAt"'),
+    },
     { what: "of another program", damage: (text: string) => text.replace("ebbline-unsaved", "other") },
-    { what: "with a dose that the contract refuses", damage: (text: string) => text.replace('"amountMg":500', '"amountMg":"500"') },
+    {
+      what: "with a dose that the contract refuses",
+      damage: (text: string) => text.replace('"amountMg":500', '"amountMg":"500"'),
+    },
     { what: "with a field nobody knows", damage: (text: string) => text.replace('"horizonH"', '"length"') },
   ])("is refused when it is $what", ({ damage }) => {
     const text = writeUnsaved(work, keptAt);

@@ -39,7 +39,14 @@ const orders: Order[] = [
   },
   {
     id: "one",
-    give: { kind: "pump", steps: [{ afterH: 0, rateMgPerH: 50 }, { afterH: 3.5, rateMgPerH: 12.5 }, { afterH: 6, rateMgPerH: 0 }] },
+    give: {
+      kind: "pump",
+      steps: [
+        { afterH: 0, rateMgPerH: 50 },
+        { afterH: 3.5, rateMgPerH: 12.5 },
+        { afterH: 6, rateMgPerH: 0 },
+      ],
+    },
     when: { kind: "once", at: "2026-03-28T08:00:00Z" },
     exceptions: [],
     note: "",
@@ -54,12 +61,27 @@ describe("readOrderDraft", () => {
   });
 
   test("tells every problem at once, by field", () => {
-    const read = readOrderDraft({ kind: "infusion", when: "every", end: "count", amount: "0,5", doses: "1.5" }, kept, zone);
+    const read = readOrderDraft(
+      { kind: "infusion", when: "every", end: "count", amount: "0,5", doses: "1.5" },
+      kept,
+      zone,
+    );
     expect(read.ok ? [] : Object.keys(read.problems).sort()).toEqual(["amount", "at", "doses", "duration", "interval"]);
   });
 
   test("refuses a clock time named twice, one that is none, and an end before the start", () => {
-    const draft = { kind: "bolus", amount: "5", when: "clock-times", at: "2026-03-28 08:00", times: "3", "time.0": "8:00", "time.1": "20:00", "time.2": "20:00", end: "until", until: "2026-03-28 07:00" };
+    const draft = {
+      kind: "bolus",
+      amount: "5",
+      when: "clock-times",
+      at: "2026-03-28 08:00",
+      times: "3",
+      "time.0": "8:00",
+      "time.1": "20:00",
+      "time.2": "20:00",
+      end: "until",
+      until: "2026-03-28 07:00",
+    };
     const read = readOrderDraft(draft, kept, zone);
     expect(read.ok ? {} : read.problems).toEqual({
       "time.0": "Clock time 1 must be a 24-hour time such as 08:00, got 8:00",

@@ -24,7 +24,10 @@ function halved() {
 
 function halvedContent() {
   const content = inventedContent();
-  const orders = content.schedule.orders.map((order) => ({ ...order, give: { kind: "bolus" as const, amountMg: 250 } }));
+  const orders = content.schedule.orders.map((order) => ({
+    ...order,
+    give: { kind: "bolus" as const, amountMg: 250 },
+  }));
   return { ...content, schedule: { ...content.schedule, orders } };
 }
 
@@ -44,7 +47,12 @@ describe("saveAlternative", () => {
     const outcome = await saveAlternative(page, regimenId, words);
     expect(outcome.kind).toBe("saved");
     expect(asked).toEqual([
-      { method: "POST", path: revisions, key: expect.stringMatching(/^[0-9a-f-]{36}$/), body: { basedOnNumber: 1, ...words, content: halvedContent() } },
+      {
+        method: "POST",
+        path: revisions,
+        key: expect.stringMatching(/^[0-9a-f-]{36}$/),
+        body: { basedOnNumber: 1, ...words, content: halvedContent() },
+      },
     ]);
     expect(hasUnsaved(page)).toBe(false);
     page.model.undo();
@@ -56,7 +64,10 @@ describe("saveAlternative", () => {
     const page = halved();
     const revision = { status: 201, body: inventedRevision(2, halvedContent()) };
     const asked = stubNetwork(["no answer", revision, problem(409), { status: 200, body: inventedWholeCase() }]);
-    expect(await saveAlternative(page, regimenId, words)).toMatchObject({ kind: "failed", failure: { kind: "unreachable" } });
+    expect(await saveAlternative(page, regimenId, words)).toMatchObject({
+      kind: "failed",
+      failure: { kind: "unreachable" },
+    });
     expect(hasUnsaved(page)).toBe(true);
     await saveAlternative(page, regimenId, words);
     expect(asked[1]?.key).toBe(asked[0]?.key);
@@ -69,7 +80,13 @@ describe("saveAlternative", () => {
     const typed = page.model.document.value;
     const newest = inventedWholeCase();
     const [regimen] = newest.regimens;
-    stubNetwork([problem(409), { status: 200, body: { ...newest, regimens: [{ ...regimen, latestRevisionNumber: 2, latest: inventedRevision(2) }] } }]);
+    stubNetwork([
+      problem(409),
+      {
+        status: 200,
+        body: { ...newest, regimens: [{ ...regimen, latestRevisionNumber: 2, latest: inventedRevision(2) }] },
+      },
+    ]);
     const outcome = await saveAlternative(page, regimenId, words);
     expect(outcome).toMatchObject({ kind: "stale", what: "revision" });
     expect(page.model.document.value).toBe(typed);
@@ -91,7 +108,10 @@ describe("saveAlternative", () => {
       { status: 201, body: inventedRevision(2) },
     ]);
     await saveAlternative(page, regimenId, words);
-    expect(asked.map(({ method, path }) => `${method} ${path}`)).toEqual([`PATCH /api/cases/${caseId}`, `POST ${revisions}`]);
+    expect(asked.map(({ method, path }) => `${method} ${path}`)).toEqual([
+      `PATCH /api/cases/${caseId}`,
+      `POST ${revisions}`,
+    ]);
     expect(asked[0]?.body).toMatchObject({ version: 1, notes: "new" });
     expect(page.baseVersion.value).toBe(2);
     expect(hasUnsaved(page)).toBe(false);
@@ -100,18 +120,33 @@ describe("saveAlternative", () => {
   test("a new alternative is made known once, even when its revision is refused at first", async () => {
     const page = createCasePage(inventedWholeCase());
     page.model.change("added", (document) => withNewAlternative(document, "fresh"));
-    const made = { ...inventedWholeCase().regimens[0], id: "00000000-0000-4000-8000-000000000003", label: "Another plan", latestRevisionNumber: 0 };
+    const made = {
+      ...inventedWholeCase().regimens[0],
+      id: "00000000-0000-4000-8000-000000000003",
+      label: "Another plan",
+      latestRevisionNumber: 0,
+    };
     const { latest: _, ...regimen } = made;
-    const asked = stubNetwork([{ status: 201, body: regimen }, problem(422), { status: 201, body: { ...inventedRevision(1), regimenId: made.id } }]);
+    const asked = stubNetwork([
+      { status: 201, body: regimen },
+      problem(422),
+      { status: 201, body: { ...inventedRevision(1), regimenId: made.id } },
+    ]);
     await saveAlternative(page, "fresh", words);
     await saveAlternative(page, "fresh", words);
-    expect(asked.map(({ path }) => path.split("/").slice(4).join("/"))).toEqual(["regimens", `regimens/${made.id}/revisions`, `regimens/${made.id}/revisions`]);
+    expect(asked.map(({ path }) => path.split("/").slice(4).join("/"))).toEqual([
+      "regimens",
+      `regimens/${made.id}/revisions`,
+      `regimens/${made.id}/revisions`,
+    ]);
   });
 
   test("a reason whose caution is gone is not sent", async () => {
     const page = halved();
     const reason = { code: "unusual", about: "/x", text: "of another value", reason: "meant so" };
-    page.model.change("reason", (document) => withAlternative(document, regimenId, (each) => ({ ...each, cautionReasons: [reason] })));
+    page.model.change("reason", (document) =>
+      withAlternative(document, regimenId, (each) => ({ ...each, cautionReasons: [reason] })),
+    );
     const asked = stubNetwork([{ status: 201, body: inventedRevision(2, halvedContent()) }]);
     await saveAlternative(page, regimenId, words);
     expect(asked[0]?.body).toMatchObject({ content: { cautionReasons: [] } });

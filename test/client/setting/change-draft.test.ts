@@ -9,7 +9,14 @@ const origin = { kind: "typed" as const, note: "invented" };
 const changes: DatedEliminationChange[] = [
   { id: "a", kind: "rate", from: "2026-03-28T08:00:00Z", origin, eliminationRatePerH: 0.00001 },
   { id: "a", kind: "clearance", from: "2026-03-28T08:00:00Z", origin, clearanceLPerH: 0 },
-  { id: "a", kind: "added-clearance", from: "2026-03-28T14:00:00Z", until: "2026-03-28T18:00:00Z", origin, addedClearanceLPerH: 3.5 },
+  {
+    id: "a",
+    kind: "added-clearance",
+    from: "2026-03-28T14:00:00Z",
+    until: "2026-03-28T18:00:00Z",
+    origin,
+    addedClearanceLPerH: 3.5,
+  },
 ];
 
 describe("readChangeDraft", () => {
