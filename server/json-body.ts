@@ -11,7 +11,14 @@ export const bodyLimits = { usual: 2 * 1024 * 1024, caseFile: 20 * 1024 * 1024 }
  * without asking first, and nothing else is ever guessed at.
  */
 export function jsonBody(limit: keyof typeof bodyLimits): RequestHandler {
-  const parse = express.json({ limit: bodyLimits[limit], type: "application/json", inflate: false, strict: false });
+  const texts = new WeakMap<object, Buffer>();
+  const parse = express.json({
+    limit: bodyLimits[limit],
+    type: "application/json",
+    inflate: false,
+    strict: false,
+    verify: (request, _response, text) => texts.set(request, text),
+  });
   return async (request, response, next) => {
     requireJson(request);
     await new Promise<void>((resolve, reject) =>
@@ -19,8 +26,9 @@ export function jsonBody(limit: keyof typeof bodyLimits): RequestHandler {
     );
     // Express leaves the body undefined where there was none, so that reading a field of it would throw.
     const body: unknown = request.body;
-    if (body === undefined) throw missingBody();
-    checkJson(body);
+    const text = texts.get(request);
+    if (body === undefined || text === undefined) throw missingBody();
+    checkJson(body, text);
     next();
   };
 }
@@ -28,8 +36,9 @@ export function jsonBody(limit: keyof typeof bodyLimits): RequestHandler {
 function requireJson(request: Request): void {
   if (!hasBody(request.headers)) throw missingBody();
   const type = request.get("Content-Type") ?? "";
-  if (!/^application\/json\s*(;|$)/i.test(type.trim()))
-    throw new RequestError("not-json", "Content-Type must be application/json");
+  // JSON between systems is UTF-8 (RFC 8259, 8.1); another encoding could bring in half a surrogate pair.
+  if (!/^application\/json(\s*;\s*charset="?utf-8"?)?$/i.test(type.trim()))
+    throw new RequestError("not-json", "Content-Type must be application/json, in UTF-8");
 }
 
 function hasBody(headers: IncomingHttpHeaders): boolean {

@@ -7,7 +7,7 @@ export function requestLimit(perMinute: number): RequestHandler {
   return rateLimit({
     windowMs: 60_000,
     limit: perMinute,
-    standardHeaders: "draft-8",
+    standardHeaders: false,
     legacyHeaders: false,
     // The proxy headers are not trusted (Express leaves them alone), so that they come is no fault of ours.
     validate: { xForwardedForHeader: false, forwardedHeader: false },

@@ -93,6 +93,39 @@ describe("what Express would answer in HTML", () => {
 });
 
 describe("hostile JSON", () => {
+  test.for([
+    { name: "brackets in its text", text: `${'["]]",'.repeat(30)}1${"]".repeat(30)}` },
+    { name: "a quote escaped in its text", text: `["\\"",${"[".repeat(30)}${"]".repeat(30)}]` },
+    { name: "a backslash at the end of its text", text: `["\\\\",${"[".repeat(30)}${"]".repeat(30)}]` },
+  ])("does not hide its depth behind $name", async ({ text }) => {
+    expect(JSON.parse(text)).toBeInstanceOf(Array);
+    expect(expectProblem(await json(makeApp().app, text), 400).type).toBe("/problems/too-deep");
+  });
+
+  test("may hold brackets in its text", async () => {
+    expect(
+      expectProblem(await json(makeApp().app, JSON.stringify({ text: "[".repeat(100) })), 422).errors,
+    ).toContainEqual({
+      pointer: "#/text",
+      detail: "is not a known field",
+    });
+  });
+
+  test.for(["koi8-r", "utf-16", "utf-16le", "utf-32"])("in %s is refused", async (charset) => {
+    const { app } = makeApp();
+    expectProblem(
+      await request(app)
+        .post("/api/predictions")
+        .set("Content-Type", `application/json; charset=${charset}`)
+        .send("{}"),
+      415,
+    );
+  });
+
+  test("that writes a forbidden name with an escape is refused all the same", async () => {
+    expectProblem(await json(makeApp().app, '{"\\u005f_proto__":{"polluted":true}}'), 422);
+  });
+
   test.for([25, 40_000, 1_000_000])("of %i levels is refused", async (depth) => {
     const answer = await json(makeApp().app, "[".repeat(depth) + "]".repeat(depth));
     expectProblem(answer, 400);
