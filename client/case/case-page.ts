@@ -10,6 +10,7 @@ import { type Alternative, type CaseDocument, contentOf } from "./case-document.
 import { type CaseModel, createCaseModel } from "./case-model.ts";
 import { documentOfCase } from "./document-of-case.ts";
 import { createDrafts, type Drafts, type DraftsByName } from "./drafts.ts";
+import { liveDrafts } from "./live-drafts.ts";
 import { readSetting, readSettingForm, type SettingReading } from "./read-setting.ts";
 import { same } from "./same.ts";
 import type { SettingForm } from "./setting-form.ts";
@@ -128,7 +129,9 @@ function selectedIn({ alternatives }: CaseDocument, key: string | undefined): Al
 }
 
 function differs(now: CaseDocument, opened: CaseDocument, drafts: DraftsByName): boolean {
-  return Object.keys(drafts).length > 0 || !sameDetails(now, opened) || !same(unkeyed(now), unkeyed(opened));
+  return (
+    Object.keys(liveDrafts(drafts, now)).length > 0 || !sameDetails(now, opened) || !same(unkeyed(now), unkeyed(opened))
+  );
 }
 
 /** A new alternative keeps its key on the page when the server gives it an id. */

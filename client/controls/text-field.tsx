@@ -1,5 +1,6 @@
 import { useSignal } from "@preact/signals";
 import { describedBy, Field, type FieldWords } from "./field.tsx";
+import { lengthProblem } from "./text-length.ts";
 
 /** "typing": every key; "settled": the person left the field or pressed Enter. */
 export type TypingStage = "typing" | "settled";
@@ -13,6 +14,7 @@ export interface TextFieldProps extends FieldWords {
   readonly lines?: number;
   /** Id of a datalist. */
   readonly suggestions?: string;
+  /** A longer text is refused, never cut off. */
   readonly longest?: number;
   readonly required?: boolean;
 }
@@ -24,14 +26,15 @@ export interface TextFieldProps extends FieldWords {
 export function TextField(props: TextFieldProps) {
   const typed = useSignal<string | undefined>(undefined);
   const typing = typed.value !== undefined;
-  const words = typing ? { ...props, problem: undefined } : props;
+  const tooLong =
+    props.longest === undefined ? undefined : lengthProblem(props.label, typed.value ?? props.text, props.longest);
+  const words = { ...props, problem: typing ? tooLong : (props.problem ?? tooLong) };
   const shared = {
     id: props.id,
     value: typed.value ?? props.text,
     "aria-invalid": Boolean(words.problem),
     "aria-describedby": describedBy(words),
     required: props.required,
-    maxLength: props.longest,
     autocomplete: "off",
     onInput: (event: { currentTarget: { value: string } }) => {
       typed.value = event.currentTarget.value;

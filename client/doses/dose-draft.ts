@@ -1,9 +1,11 @@
+import { counts } from "../../shared/contract/limits.ts";
 import type { DoseRecord, Give, Order } from "../../shared/contract/schedule.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
 import { plainText } from "../case/form-of-setting.ts";
 import { momentText, readMoment } from "../controls/moment.ts";
 import { readOptional } from "../controls/read-field.ts";
+import { lengthProblem } from "../controls/text-length.ts";
 
 type Exception = Order["exceptions"][number];
 type Outcome = DoseRecord["outcome"];
@@ -47,6 +49,8 @@ export function readDoseDraft(draft: Draft, { orderId, occurrence, give }: Order
     problems["given-at"] = "What was given otherwise must name another time, amount or duration";
   if (plan === "changed" && Object.keys(planned).length === 0 && Object.keys(problems).length === 0)
     problems["plan-at"] = "What is planned otherwise must name another time, amount or duration";
+  const long = lengthProblem("Note on what was given", textIn(draft, "note"), counts.noteCharacters);
+  if (long !== undefined) problems["note"] = long;
   if (Object.keys(problems).length > 0) return { ok: false, problems };
   const exception: Exception | undefined =
     plan === "left-out" ? { occurrence, skip: true } : plan === "changed" ? { occurrence, ...planned } : undefined;

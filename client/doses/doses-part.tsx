@@ -34,7 +34,7 @@ export function DosesPart({ page }: { page: CasePage }) {
   const draftName = (key: string) => `dose:${selected.key}:${key}`;
   const close = (key: string, backTo: string) => {
     drafts.close(draftName(key));
-    focusOn(backTo);
+    focusOn(backTo, "doses-title");
   };
   const editor = (dose: ScheduledDose) => {
     const draft = drafts.all.value[draftName(dose.key)];

@@ -1,6 +1,8 @@
+import { counts } from "../../shared/contract/limits.ts";
 import type { ExtraDose } from "../../shared/contract/schedule.ts";
 import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
 import { momentText, readMoment } from "../controls/moment.ts";
+import { lengthProblem } from "../controls/text-length.ts";
 import { draftOfGive, readGive } from "../orders/give-draft.ts";
 
 export type ReadExtra =
@@ -13,7 +15,9 @@ export function readExtraDraft(draft: Draft, id: string, timeZone: string): Read
   const at = readMoment(momentIn(draft, "at"), timeZone, "Given at");
   if (!at.ok) problems["at"] = at.problem;
   const give = readGive(draft, { timeZone, startsAt: at.ok ? at.instant : undefined }, problems);
-  if (!at.ok || give === undefined) return { ok: false, problems };
+  const long = lengthProblem("Note", textIn(draft, "note"), counts.noteCharacters);
+  if (long !== undefined) problems["note"] = long;
+  if (!at.ok || give === undefined || long !== undefined) return { ok: false, problems };
   return { ok: true, extra: { id, at: at.instant, give, note: textIn(draft, "note") } };
 }
 

@@ -1,5 +1,6 @@
 import { effect, type Signal } from "@preact/signals";
 import { type CasePage, hasUnsaved } from "../case/case-page.ts";
+import { liveDrafts } from "../case/live-drafts.ts";
 import { holdAlone } from "./hold-alone.ts";
 import { dropKept, keptName, writeKept } from "./kept-text.ts";
 import { writeUnsaved } from "./write-unsaved.ts";
@@ -59,10 +60,8 @@ function keepNow(page: CasePage, name: string): Keeping {
     dropKept(name);
     return "kept";
   }
-  const work = {
-    document: page.model.document.peek(),
-    drafts: page.drafts.all.peek(),
-    baseVersion: page.baseVersion.peek(),
-  };
+  const document = page.model.document.peek();
+  const drafts = liveDrafts(page.drafts.all.peek(), document);
+  const work = { document, drafts, baseVersion: page.baseVersion.peek() };
   return writeKept(name, writeUnsaved(work, new Date())) ? "kept" : "refused";
 }

@@ -5,6 +5,7 @@ import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
 import { plainText } from "../case/form-of-setting.ts";
 import { momentText, readMoment } from "../controls/moment.ts";
 import { readLimited, readOptional } from "../controls/read-field.ts";
+import { lengthProblem } from "../controls/text-length.ts";
 import { draftOfGive, giveKindOf, readGive } from "./give-draft.ts";
 
 export type WhenKind = When["kind"];
@@ -46,6 +47,8 @@ export function readOrderDraft(draft: Draft, kept: Pick<Order, "id" | "exception
   const startsAt = at.ok ? at.instant : undefined;
   const give = readGive(draft, { timeZone, startsAt }, problems);
   const read = readWhen(draft, when, startsAt, timeZone, problems);
+  const long = lengthProblem("Note", textIn(draft, "note"), counts.noteCharacters);
+  if (long !== undefined) problems["note"] = long;
   if (give === undefined || read === undefined || Object.keys(problems).length > 0) return { ok: false, problems };
   return {
     ok: true,

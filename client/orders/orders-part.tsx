@@ -41,11 +41,11 @@ export function OrdersPart({ page }: { page: CasePage }) {
           const applied = known ? order : { ...order, id: newId() };
           const what = known ? `order of alternative ${letter} changed` : `order added to alternative ${letter}`;
           model.change(what, (now) => withSchedule(now, selected.key, (schedule) => withOrder(schedule, applied)));
-          focusOn(backTo);
+          focusOn(backTo, "orders-title");
         }}
         onCancel={() => {
           drafts.close(draftName(id));
-          focusOn(backTo);
+          focusOn(backTo, "orders-title");
         }}
       />
     );
@@ -90,7 +90,7 @@ export function OrdersPart({ page }: { page: CasePage }) {
                     model.change(`order ${index + 1} of alternative ${letter} deleted`, (now) =>
                       withSchedule(now, selected.key, (schedule) => withoutOrder(schedule, order.id)),
                     );
-                    focusOn("order-add");
+                    focusOn("order-add", "orders-title");
                   }}
                 >
                   Delete<span class="unseen"> order {index + 1}</span>

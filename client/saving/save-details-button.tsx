@@ -29,7 +29,7 @@ export function SaveDetails({ page }: { page: CasePage }) {
           Save the case's details
         </button>
         <a class="button" href={`/api/cases/${page.stored.value.case.id}/file`} download>
-          Download the case as JSON
+          Download the case as JSON, as saved
         </a>
         <span class="soft">
           {changed

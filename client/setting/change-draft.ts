@@ -1,10 +1,11 @@
-import type { LimitName } from "../../shared/contract/limits.ts";
+import { counts, type LimitName } from "../../shared/contract/limits.ts";
 import type { DatedEliminationChange } from "../../shared/contract/setting.ts";
 import { hoursBetween } from "../../shared/schedule/clock.ts";
 import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
 import { plainText } from "../case/form-of-setting.ts";
 import { momentText, readMoment } from "../controls/moment.ts";
 import { readLimited } from "../controls/read-field.ts";
+import { lengthProblem } from "../controls/text-length.ts";
 
 export type ChangeKind = DatedEliminationChange["kind"];
 
@@ -36,6 +37,8 @@ export function readChangeDraft(draft: Draft, id: string, timeZone: string): Rea
   const until = kind === "added-clearance" ? readMoment(momentIn(draft, "until"), timeZone, "Until") : undefined;
   const value = readLimited(limit, textIn(draft, "value"), label);
   const problems: Record<string, string> = {};
+  const long = lengthProblem("Where it came from", textIn(draft, "note"), counts.noteCharacters);
+  if (long !== undefined) problems["note"] = long;
   if (!from.ok) problems["from"] = from.problem;
   if (until?.ok === false) problems["until"] = until.problem;
   if (!value.ok) problems["value"] = value.problem;

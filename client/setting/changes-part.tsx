@@ -37,11 +37,11 @@ export function ChangesPart({ page }: { page: CasePage }) {
           drafts.close(draftName(key));
           if (known) changeList("change of elimination", (all) => all.map((each) => (each.id === id ? change : each)));
           else changeList("change of elimination added", (all) => [...all, { ...change, id: newId() }]);
-          focusOn(backTo);
+          focusOn(backTo, "changes-title");
         }}
         onCancel={() => {
           drafts.close(draftName(key));
-          focusOn(backTo);
+          focusOn(backTo, "changes-title");
         }}
       />
     );
@@ -77,7 +77,7 @@ export function ChangesPart({ page }: { page: CasePage }) {
                   onClick={() => {
                     drafts.close(draftName(change.id));
                     changeList("change of elimination deleted", (all) => all.filter((each) => each.id !== change.id));
-                    focusOn("change-add");
+                    focusOn("change-add", "changes-title");
                   }}
                 >
                   Delete<span class="unseen"> change {index + 1}</span>

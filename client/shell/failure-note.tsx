@@ -1,4 +1,5 @@
 import type { Failure } from "../http/answer.ts";
+import { focusOn } from "./focus.ts";
 import "./failure-note.css";
 
 interface FailureNoteProps {
@@ -21,7 +22,9 @@ export function FailureNote({ failure, onRetry, fieldOf }: FailureNoteProps) {
             return (
               <li key={`${pointer} ${detail}`}>
                 {field ? (
-                  <a href={`#${field.id}`}>{field.label}</a>
+                  <a href={`#${field.id}`} onClick={goTo(field.id)}>
+                    {field.label}
+                  </a>
                 ) : (
                   <code>{pointer.replace(/^#\/?/, "") || "the whole"}</code>
                 )}
@@ -38,4 +41,11 @@ export function FailureNote({ failure, onRetry, fieldOf }: FailureNoteProps) {
       )}
     </div>
   );
+}
+
+function goTo(id: string) {
+  return (event: Event) => {
+    event.preventDefault();
+    focusOn(id);
+  };
 }

@@ -58,6 +58,8 @@ describe("saveAlternative", () => {
     page.model.undo();
     expect(page.model.document.value.alternatives[0]?.savedNumber).toBe(2);
     expect(hasUnsaved(page)).toBe(true);
+    page.model.redo();
+    expect(hasUnsaved(page)).toBe(false);
   });
 
   test("after a lost answer the next try carries the same key; after a known one, a new key", async () => {
