@@ -1,7 +1,7 @@
 import { useComputed, useSignal } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import { contentOf, letterOf } from "../case/case-document.ts";
-import type { CasePage } from "../case/case-page.ts";
+import { type CasePage, savedStateOf } from "../case/case-page.ts";
 import { SelectField } from "../controls/select-field.tsx";
 import type { Failure } from "../http/answer.ts";
 import { CurveComparison } from "../reading/curve-comparison.tsx";
@@ -10,6 +10,7 @@ import { DifferencesTable } from "./differences-table.tsx";
 
 interface Side {
   readonly value: string;
+  readonly regimenId?: string;
   readonly label: string;
   readonly content: RegimenContent;
 }
@@ -24,9 +25,7 @@ export function ComparePart({ page }: { page: CasePage }) {
     failure.value = "failure" in gathered ? gathered.failure : undefined;
     if ("failure" in gathered) return;
     saved.value = gathered.sides;
-    const sides = [...gathered.sides, ...pageSides(page)];
-    const own = pageSides(page).find(({ value }) => value === `page ${page.selected.peek()?.key}`);
-    chosen.value = { before: sides[0]?.value ?? "", after: own?.value ?? sides.at(-1)?.value ?? "" };
+    chosen.value = opening(page, gathered.sides);
   };
   const onPage = useComputed(() => pageSides(page)).value;
   if (saved.value === undefined)
@@ -84,6 +83,15 @@ export function ComparePart({ page }: { page: CasePage }) {
   );
 }
 
+/** What one most likely wants to see: what was changed since the newest revision, else what that one changed. */
+function opening(page: CasePage, saved: readonly Side[]): { readonly before: string; readonly after: string } {
+  const selected = page.selected.peek();
+  const [newest, before] = saved.filter(({ regimenId }) => regimenId === selected?.regimenId);
+  const changed = selected !== undefined && savedStateOf(page, selected) === "changed";
+  if (changed) return { before: newest?.value ?? "", after: `page ${selected.key}` };
+  return { before: (before ?? newest)?.value ?? "", after: newest?.value ?? "" };
+}
+
 type Gathered = { readonly sides: readonly Side[] } | { readonly failure: Failure };
 
 async function savedSides(page: CasePage): Promise<Gathered> {
@@ -97,8 +105,9 @@ async function savedSides(page: CasePage): Promise<Gathered> {
   const sides: Side[] = [];
   for (const answer of answers) {
     if (!answer.ok) return { failure: answer.failure };
-    for (const { id, number, content } of answer.value.revisions)
-      sides.push({ value: id, label: `${content.regimenLabel}, revision ${number}`, content });
+    const newestFirst = [...answer.value.revisions].sort((one, other) => other.number - one.number);
+    for (const { id, number, content, regimenId } of newestFirst)
+      sides.push({ value: id, regimenId, label: `${content.regimenLabel}, revision ${number}`, content });
   }
   return { sides };
 }

@@ -60,7 +60,7 @@ export function RevisionsPart({ page }: { page: CasePage }) {
                 <td>{revision.reason}</td>
                 <td>{revision.preparedBy}</td>
                 <td class="hash">{revision.contentHash.slice(0, 12)}</td>
-                <td>
+                <td class="revision-use">
                   <SheetLinks revision={revision} />
                   <TakeUp
                     page={page}
