@@ -18,13 +18,15 @@ export interface CasePictureInput {
   readonly scale: LevelScale;
   readonly gridH: readonly number[];
   readonly range: RangeMgPerL | undefined;
+  /** While a dose is in the hand the other alternatives step back: thick or dashed lines cost a frame where doses are dense. */
+  readonly motion: "at-rest" | "in-hand";
 }
 
 const pixelsPerMark = 40;
 
 /** The curves of all alternatives; the selected one is thicker and lies on top, a plan that was not followed is thin. */
 export function pictureOf(input: CasePictureInput): CurvePicture {
-  const { contents, selectedKey, window, plotPx, scale, gridH, range } = input;
+  const { contents, selectedKey, window, plotPx, scale, gridH, range, motion } = input;
   const lines: PictureLine[] = [];
   const marks: PictureMark[] = [];
   const inOrder = [...contents].map(([key, content], place) => ({
@@ -38,11 +40,13 @@ export function pictureOf(input: CasePictureInput): CurvePicture {
   ]) {
     const prediction = predictionOf(content);
     if (!prediction.ok) continue;
-    const { colour, dash, letter } = look;
+    const { colour, letter } = look;
+    const stepsBack = motion === "in-hand" && !selected;
+    const dash = stepsBack ? [] : look.dash;
     if (prediction.planned)
       lines.push({ points: drawn(prediction.planned.made, window, plotPx).points, colour, dash, widthPx: 1 });
     const { points, turns } = drawn(prediction.given.made, window, plotPx);
-    lines.push({ points, colour, dash, widthPx: selected ? 2.75 : 1.75, letter });
+    lines.push({ points, colour, dash, widthPx: selected ? 2.75 : stepsBack ? 1 : 1.75, letter });
     const named = outermost(turns);
     for (const turn of selected ? pointsToMark(turns, plotPx / pixelsPerMark) : named) {
       const text = selected && named.includes(turn) && { text: `${turn.kind} ${formatLevel(turn.mgPerL)}` };

@@ -81,6 +81,7 @@ export function createCurveView(model: CaseModel): CurveView {
             scale: scale.value,
             gridH: ticks.value.ticks.map(({ atH }) => atH),
             range: setting.value?.rangeMgPerL,
+            motion: hand.held.value === undefined ? "at-rest" : "in-hand",
           }),
     ),
     editing: signal(undefined),

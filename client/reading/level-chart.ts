@@ -100,7 +100,7 @@ function datasetsOf({ lines }: CurvePicture, inks: Inks): ChartDataset<"line">[]
     borderColor: inks.of(colour),
     borderDash: [...dash],
     borderWidth: widthPx,
-    borderJoinStyle: "round",
+    borderJoinStyle: "bevel",
     pointRadius: 0,
     fill: false,
   }));
