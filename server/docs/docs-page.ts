@@ -25,6 +25,7 @@ export function docsPage(): string {
 <meta name="viewport" content="width=device-width, initial-scale=1">
 <meta name="color-scheme" content="light dark">
 <title>Ebbline: its API</title>
+<link rel="icon" href="data:,">
 <link rel="stylesheet" href="/api/docs.css">
 </head>
 <body>
@@ -69,7 +70,7 @@ function shapeSections(schemas: NamedSchemas): Markup[] {
   return Object.entries(schemas).map(
     ([name, schema]) => html`<section>
 <h3 id="${name}">${name}</h3>
-${forms(schema).map(fieldTable)}
+${forms(schema).map((form, index, all) => fieldTable(form, all.length === 1 ? name : `${name}, form ${index + 1}`))}
 </section>
 `,
   );
@@ -81,18 +82,18 @@ function forms(schema: JsonSchema): JsonSchema[] {
   return branches === undefined ? [schema] : branches.flatMap(forms);
 }
 
-function fieldTable(schema: JsonSchema): Markup {
+function fieldTable(schema: JsonSchema, name: string): Markup {
   const properties = (schema["properties"] ?? {}) as Record<string, JsonSchema>;
   const required = (schema["required"] ?? []) as string[];
   if (Object.keys(properties).length === 0) return html`<p>${shape(schema)}</p>`;
-  return html`<div class="scroll" tabindex="0" role="region" aria-label="Fields"><table>
+  return html`<div class="scroll" tabindex="0" role="region" aria-label="Fields of ${name}"><table>
 <thead><tr><th scope="col">Field</th><th scope="col">Type</th><th scope="col">Needed</th><th scope="col">What it is</th></tr></thead>
 <tbody>
 ${Object.entries(properties).map(
   ([
-    name,
+    key,
     field,
-  ]) => html`<tr><th scope="row"><code>${name}</code></th><td>${shape(field)}</td><td>${required.includes(name) ? "yes" : "no"}</td><td>${about(field)}</td></tr>
+  ]) => html`<tr><th scope="row"><code>${key}</code></th><td>${shape(field)}</td><td>${required.includes(key) ? "yes" : "no"}</td><td>${about(field)}</td></tr>
 `,
 )}
 </tbody>
