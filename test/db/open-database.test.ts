@@ -5,10 +5,13 @@ import Sqlite from "better-sqlite3";
 import { afterAll, describe, expect, test } from "vitest";
 import { DatabaseRefused } from "../../db/database-refused.ts";
 import { applicationId, closeDatabase, openDatabase } from "../../db/open-database.ts";
+import { readMigrations } from "../../db/migrations.ts";
 import { applyPragmas } from "../../db/pragmas.ts";
+import { projectFolder } from "../../db/project-folder.ts";
 
 const folder = mkdtempSync(join(tmpdir(), "ebbline-open-"));
 afterAll(() => rmSync(folder, { recursive: true }));
+const newest = readMigrations(join(projectFolder(), "db", "migrations")).length;
 const fileAt = (name: string) => join(folder, name);
 
 function refusal(open: () => unknown): DatabaseRefused {
@@ -38,7 +41,7 @@ describe("openDatabase", () => {
       wal_autocheckpoint: 1000,
       journal_size_limit: 67_108_864,
       application_id: applicationId,
-      user_version: 1,
+      user_version: newest,
     };
     for (const [name, value] of Object.entries(settings))
       expect([name, db.pragma(name, { simple: true })]).toEqual([name, value]);
@@ -104,7 +107,7 @@ describe("openDatabase", () => {
     closeDatabase(db);
     const { reason, message } = refusal(() => openDatabase(file));
     expect(reason).toBe("newer");
-    expect(message).toContain("schema 99, this program knows 1");
+    expect(message).toContain(`schema 99, this program knows ${newest}`);
   });
 
   test("refuses a file with a page overwritten", () => {
