@@ -15,7 +15,8 @@ const parts = [
 build(["tsc", "-b", "shared", "db", "server"]);
 build(["vite", "build", "client", "--config", "client/vite.config.ts", "--logLevel", "warn"]);
 const lines = [];
-for (const part of parts.filter(({ name }) => only.length === 0 || only.includes(name))) lines.push(...(await part.load()));
+for (const part of parts.filter(({ name }) => only.length === 0 || only.includes(name)))
+  lines.push(...(await part.load()));
 
 const table = tableOf(lines);
 process.stdout.write(`${table}\n`);
@@ -25,7 +26,11 @@ process.stdout.write(`${lines.length - missed} of ${lines.length} lines without 
 process.exit(missed === 0 ? 0 : 1);
 
 function build(command) {
-  const { status } = spawnSync("npx", ["--no-install", ...command], { cwd: root, stdio: "inherit", shell: process.platform === "win32" });
+  const { status } = spawnSync("npx", ["--no-install", ...command], {
+    cwd: root,
+    stdio: "inherit",
+    shell: process.platform === "win32",
+  });
   if (status !== 0) process.exit(status ?? 1);
 }
 
@@ -33,7 +38,16 @@ function tableOf(rows) {
   const head = ["What", "Ours", "Against", "Unit", "Ratio", "Target", "Held", "Note"];
   const body = rows.map((row) =>
     row.why === undefined
-      ? [row.name, short(row.ours), short(row.theirs), row.unit, short(row.ratio), row.target, row.holds ? "yes" : "NO", row.note]
+      ? [
+          row.name,
+          short(row.ours),
+          short(row.theirs),
+          row.unit,
+          short(row.ratio),
+          row.target,
+          row.holds ? "yes" : "NO",
+          row.note,
+        ]
       : [row.name, "", "", "", "", "", "not measured", row.why],
   );
   return [head, head.map(() => "---"), ...body].map((cells) => `| ${cells.join(" | ")} |`).join("\n");

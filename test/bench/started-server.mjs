@@ -41,7 +41,11 @@ export function serverGroup() {
         if (address !== null) resolve(address[1]);
       });
       child.once("exit", (code) => {
-        reject(new Error(`${script} ended with ${code} before it was ready: ${said}${readFileSync(log, "utf8").slice(-500)}`));
+        reject(
+          new Error(
+            `${script} ended with ${code} before it was ready: ${said}${readFileSync(log, "utf8").slice(-500)}`,
+          ),
+        );
       });
     });
   }
