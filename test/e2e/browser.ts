@@ -37,6 +37,7 @@ export const looks: readonly Look[] = [
 export async function openPage(browser: Browser, address: string, options: BrowserContextOptions = {}): Promise<{ page: Page; faults: string[] }> {
   const context = await browser.newContext({ baseURL: address, reducedMotion: "reduce", acceptDownloads: true, ...options });
   const page = await context.newPage();
+  page.setDefaultTimeout(15_000);
   const faults: string[] = [];
   page.on("pageerror", (error) => faults.push(String(error)));
   page.on("console", (message) => {
