@@ -46,13 +46,6 @@ export function resolveKinetics(values: KineticValues): ResolvedKinetics {
   return { ok: false, field, problem: `${missing}; ${got}` };
 }
 
-/** Every way of giving drug, as one body sees it: V, k and, where drug is absorbed, ka. */
-export interface Disposition {
-  readonly volumeL: number;
-  readonly eliminationRatePerH: number;
-  readonly absorptionRatePerH?: number;
-}
-
 function derive(volumeL: number, eliminationRatePerH: number, given: readonly KineticName[]): Kinetics {
   return {
     volumeL,

@@ -1,13 +1,12 @@
 import { spawnSync } from "node:child_process";
-import { createRequire } from "node:module";
 import { fileURLToPath } from "node:url";
+import { Solver } from "odex";
 import { courseOf } from "../../.build/shared/kinetics/course.js";
 import { levelsAt, levelsEvery } from "../../.build/shared/kinetics/levels.js";
 import { walk } from "../../.build/shared/kinetics/walk.js";
 import { bestMs, bestOfBothMs, line, notMeasured } from "./timing.mjs";
 import { everyH, mixedInput, points, yearCourse, yearInput } from "./year-course.mjs";
 
-const { Solver } = createRequire(import.meta.url)("odex");
 const checkAt = [0, 359, 360, 100_000, 525_600];
 
 /** The engine against a bare loop, naive superposition, an ODE solver, FFT convolution and a compiled filter; and its growth. */

@@ -14,7 +14,8 @@ interface OdeSolver {
 }
 
 // The package ships its source as TypeScript, without declarations: a plain import would type-check that source.
-const { Solver }: { Solver: new (equations: number) => OdeSolver } = createRequire(import.meta.url)("odex");
+const require = createRequire(import.meta.url);
+const { Solver }: { Solver: new (equations: number) => OdeSolver } = require("odex");
 
 /**
  * Levels by integrating the two differential equations, started anew wherever an input or k jumps.
