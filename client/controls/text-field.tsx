@@ -1,5 +1,6 @@
 import { useSignal } from "@preact/signals";
 import { describedBy, Field, type FieldWords } from "./field.tsx";
+import { oncePointerRests } from "./pointer-rest.ts";
 import { lengthProblem } from "./text-length.ts";
 
 /** "typing": every key; "settled": the person left the field or pressed Enter. */
@@ -25,6 +26,9 @@ export interface TextFieldProps extends FieldWords {
  */
 export function TextField(props: TextFieldProps) {
   const typed = useSignal<string | undefined>(undefined);
+  const settle = () => {
+    typed.value = undefined;
+  };
   const typing = typed.value !== undefined;
   const tooLong =
     props.longest === undefined ? undefined : lengthProblem(props.label, typed.value ?? props.text, props.longest);
@@ -42,11 +46,9 @@ export function TextField(props: TextFieldProps) {
     },
     onChange: (event: { currentTarget: { value: string } }) => {
       props.onText(event.currentTarget.value, "settled");
-      typed.value = undefined;
+      oncePointerRests(settle);
     },
-    onBlur: () => {
-      typed.value = undefined;
-    },
+    onBlur: () => oncePointerRests(settle),
   } as const;
   return (
     <Field words={words}>

@@ -21,6 +21,11 @@ interface OrderEditorProps {
   readonly onCancel: () => void;
 }
 
+/** A pump log happens once, unless an interval was already written. */
+function withUsualWhen(draft: Draft, fields: Draft): Draft {
+  return fields["kind"] === "pump" && textIn(draft, "interval") === "" ? { ...fields, when: "once" } : fields;
+}
+
 /** Writes or changes one order. What is typed stays in it until it is right or given up. */
 export function OrderEditor({ id, title, draft, kept, timeZone, onDraft, onApply, onCancel }: OrderEditorProps) {
   const checked = useSignal(false);
@@ -37,7 +42,12 @@ export function OrderEditor({ id, title, draft, kept, timeZone, onDraft, onApply
     <form class="editor" noValidate onSubmit={apply} aria-label={title}>
       <h3>{title}</h3>
       <ProblemSummary id={name("problems")} problems={problems} fieldId={name} />
-      <GiveFields name={name} draft={draft} problems={problems} onDraft={onDraft} />
+      <GiveFields
+        name={name}
+        draft={draft}
+        problems={problems}
+        onDraft={(fields) => onDraft(withUsualWhen(draft, fields))}
+      />
       <WhenFields name={name} draft={draft} timeZone={timeZone} problems={problems} onDraft={onDraft} />
       <TextField
         id={name("note")}

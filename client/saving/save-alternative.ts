@@ -3,8 +3,8 @@ import type { Caution } from "../../shared/contract/caution.ts";
 import { type Alternative, contentOf, withAlternative } from "../case/case-document.ts";
 import { type CasePage, judge } from "../case/case-page.ts";
 import type { LatestOfRegimen } from "../http/cases-api.ts";
+import { isAbout } from "./is-about.ts";
 import { failedWith, type Outcome, saveDetails, staleWith } from "./save-details.ts";
-import { isAbout } from "./stop-reasons.tsx";
 
 export interface SaveWords {
   readonly reason: string;

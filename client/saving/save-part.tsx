@@ -9,12 +9,13 @@ import { announce } from "../shell/announce.ts";
 import { FailureNote } from "../shell/failure-note.tsx";
 import { focusOn } from "../shell/focus.ts";
 import { ProblemSummary } from "../shell/problem-summary.tsx";
+import { isAbout } from "./is-about.ts";
 import { fieldOfPointer, refusedAt } from "./refused.ts";
 import { RevisionsPart } from "./revisions-part.tsx";
 import { type SaveOutcome, saveAlternative } from "./save-alternative.ts";
 import { SavedNote } from "./saved-note.tsx";
 import { StaleNote } from "./stale-note.tsx";
-import { isAbout, reasonField, StopReasons, stopsOf } from "./stop-reasons.tsx";
+import { reasonField, StopReasons, stopsOf } from "./stop-reasons.tsx";
 import "./save-part.css";
 
 /** Saves the alternative being edited as a revision that never changes, and shows the earlier ones. */

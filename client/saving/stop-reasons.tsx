@@ -4,6 +4,7 @@ import { counts } from "../../shared/contract/limits.ts";
 import { type Alternative, withAlternative } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { TextField } from "../controls/text-field.tsx";
+import { isAbout } from "./is-about.ts";
 
 interface StopReasonsProps {
   readonly page: CasePage;
@@ -57,14 +58,6 @@ export function stopsOf(cautions: readonly Caution[]): Caution[] {
 /** Id of the field that the stop at this place is answered in. */
 export function reasonField(index: number): string {
   return `stop-reason-${index + 1}`;
-}
-
-/** A reason answers one caution as it was worded: given for one value, it does not answer for the next. */
-export function isAbout(
-  one: Pick<Caution, "code" | "about" | "text">,
-  other: Pick<Caution, "code" | "about" | "text">,
-): boolean {
-  return one.code === other.code && one.about === other.about && one.text === other.text;
 }
 
 type Reasons = Alternative["cautionReasons"];
