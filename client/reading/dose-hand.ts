@@ -1,4 +1,4 @@
-import { batch, type ReadonlySignal, signal } from "@preact/signals";
+import { batch, computed, type ReadonlySignal, signal } from "@preact/signals";
 import type { RegimenContent, Schedule } from "../../shared/contract/case.ts";
 import { DomainError } from "../../shared/errors.ts";
 import { instantAt, sayClock } from "../../shared/schedule/clock.ts";
@@ -7,6 +7,7 @@ import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { newId } from "../case/new-id.ts";
+import { announce } from "../shell/announce.ts";
 import { type DoseChange, editDose, removeDose } from "./dose-edits.ts";
 import { capital, nameOfDose } from "./dose-words.ts";
 import { type Moved, movedPrediction } from "./moved-prediction.ts";
@@ -25,8 +26,8 @@ export interface Held extends Moved {
 /** The hand that moves doses. From taking to dropping is one undo step, however far it goes. */
 export interface DoseHand {
   readonly held: ReadonlySignal<Held | undefined>;
-  /** What the newest move, edit or refusal was, for the line below the ruler. */
-  readonly said: ReadonlySignal<string>;
+  /** Why the newest move or edit was refused or cut short; it is over as soon as the document changes. */
+  readonly objection: ReadonlySignal<string>;
   take(key: string, dose: ScheduledDose): void;
   moveTo(atH: number): void;
   drop(): void;
@@ -48,7 +49,11 @@ interface Grip {
 
 export function createDoseHand(model: CaseModel): DoseHand {
   const held = signal<Held | undefined>(undefined);
-  const said = signal("");
+  const said = signal({ text: "", about: model.document.peek() });
+  const object = (text: string) => {
+    said.value = { text, about: model.document.peek() };
+    if (text !== "") announce(text);
+  };
   let grip: Grip | undefined;
   let resting: ReturnType<typeof setTimeout> | undefined;
 
@@ -58,13 +63,11 @@ export function createDoseHand(model: CaseModel): DoseHand {
       edit();
     } catch (error) {
       if (!(error instanceof DomainError)) throw error;
-      said.value = `Not done: ${sayRefusal(error)}`;
+      object(`Not done: ${sayRefusal(error)}`);
     }
   };
-  const write = (key: string, what: string, schedule: Schedule, merge?: string) => {
-    said.value = what;
+  const write = (key: string, what: string, schedule: Schedule, merge?: string) =>
     model.change(what, (document) => withSchedule(document, key, () => schedule), merge);
-  };
   const writeHeld = () => {
     const now = held.peek();
     if (grip === undefined || now === undefined || grip.written === now) return;
@@ -87,7 +90,7 @@ export function createDoseHand(model: CaseModel): DoseHand {
     });
   return {
     held,
-    said,
+    objection: computed(() => (said.value.about === model.document.value ? said.value.text : "")),
     take(key, dose) {
       drop();
       const content = model.contents.peek().get(key);
@@ -103,7 +106,7 @@ export function createDoseHand(model: CaseModel): DoseHand {
       const { content, dose, key } = grip;
       const { atH, why } = withinPlan(toH, spanOf(content));
       grip.why = why;
-      if (why !== undefined) said.value = why;
+      object(why ?? "");
       if (atH === (held.peek()?.atH ?? dose.atH)) return;
       const at = instantAt(content.setting.plan.start, atH, content.timeZone);
       const moved = { doseKey: dose.key, at, atH };
@@ -117,8 +120,8 @@ export function createDoseHand(model: CaseModel): DoseHand {
     putBack() {
       batch(() => {
         if (grip?.written) model.undo();
-        said.value = "Put back";
         release();
+        object("Put back where it was");
       });
     },
     edit(key, dose, change) {
@@ -127,15 +130,15 @@ export function createDoseHand(model: CaseModel): DoseHand {
       attempt(() => {
         const { at, why } = instantWithin(change.at ?? dose.at, content);
         const schedule = editDose(content.schedule, dose, { ...change, at }, spanOf(content));
-        write(key, sentence(model, key, `${capital(nameOfDose(dose, content.schedule))} changed`, why), schedule);
+        write(key, sentence(model, key, `${nameOfDose(dose, content.schedule)} changed`, why), schedule);
       });
     },
     remove(key, dose) {
       const content = model.contents.peek().get(key);
       if (content === undefined) return;
-      const name = capital(nameOfDose(dose, content.schedule));
+      const name = nameOfDose(dose, content.schedule);
       if (dose.status === "omitted") {
-        said.value = `${name} is recorded as omitted already; its record is under the doses given`;
+        object(`${capital(name)} is recorded as omitted already; its record is under the doses given`);
         return;
       }
       const recorded = dose.status === "as-planned" || dose.status === "changed";

@@ -16,7 +16,7 @@ export function DoseInWords({ view }: { view: CurveView }) {
           ? sayDose(dose, content.schedule, content.timeZone)
           : "No dose is marked; choose one on the ruler."}
       </p>
-      <p class="soft">{view.hand.said.value}</p>
+      <p class="soft">{view.hand.objection.value || view.model.lastChange.value}</p>
     </div>
   );
 }

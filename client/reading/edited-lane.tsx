@@ -49,7 +49,7 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
       aria-describedby="ruler-keys"
       style={{ width: `${plotPx}px`, height: `${rows * markPx}px` }}
     >
-      <LaneBars marks={single} pixelOf={pixelOf} plotPx={plotPx} rows={rows} />
+      <LaneBars doses={doses} marks={single} pixelOf={pixelOf} plotPx={plotPx} rows={rows} />
       {steady.map((mark) =>
         mark.kind === "dose" ? (
           <DoseMark

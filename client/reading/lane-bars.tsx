@@ -2,6 +2,7 @@ import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { markPx } from "./mark-layout.ts";
 
 interface LaneBarsProps {
+  readonly doses: readonly ScheduledDose[];
   readonly marks: readonly { readonly dose: ScheduledDose; readonly xPx: number; readonly row: number }[];
   readonly pixelOf: (atH: number) => number;
   readonly plotPx: number;
@@ -9,35 +10,47 @@ interface LaneBarsProps {
 }
 
 /** How long each dose runs, and where a dose that was given otherwise had been planned. */
-export function LaneBars({ marks, pixelOf, plotPx, rows }: LaneBarsProps) {
+export function LaneBars({ doses, marks, pixelOf, plotPx, rows }: LaneBarsProps) {
+  // What began before the part in view has no mark there, but may still run.
+  const running = doses.filter((dose) => pixelOf(dose.atH) < 0 && pixelOf(dose.atH + lengthH(dose)) > 0);
+  const bars = [...running.map((dose) => ({ dose, row: 0 })), ...marks.filter(({ dose }) => !running.includes(dose))];
   return (
     <svg class="lane-bars" width={plotPx} height={rows * markPx} aria-hidden="true">
-      {marks.map(({ dose, row }) => {
-        const y = (row + 0.5) * markPx;
-        const fromPx = Math.max(0, pixelOf(dose.atH));
-        const toPx = Math.min(plotPx, pixelOf(dose.atH + lengthH(dose)));
-        const planned =
-          dose.plannedAtH !== undefined && dose.status === "changed" && dose.plannedAtH !== dose.atH
-            ? pixelOf(dose.plannedAtH)
-            : undefined;
-        return (
-          <g key={dose.key}>
-            {toPx > fromPx && (
-              <rect
-                class={dose.status === "omitted" ? "run run-omitted" : "run"}
-                x={fromPx}
-                y={y - 4}
-                width={toPx - fromPx}
-                height="8"
-              />
-            )}
-            {planned !== undefined && planned >= 0 && planned <= plotPx && (
-              <path class="was-planned" d={`M${planned} ${y - 9} V${y + 9} M${planned} ${y} H${pixelOf(dose.atH)}`} />
-            )}
-          </g>
-        );
-      })}
+      {bars.map(({ dose, row }) => (
+        <Bar key={dose.key} dose={dose} y={(row + 0.5) * markPx} pixelOf={pixelOf} plotPx={plotPx} />
+      ))}
     </svg>
+  );
+}
+
+interface BarProps {
+  readonly dose: ScheduledDose;
+  readonly y: number;
+  readonly pixelOf: (atH: number) => number;
+  readonly plotPx: number;
+}
+
+function Bar({ dose, y, pixelOf, plotPx }: BarProps) {
+  const fromPx = Math.max(0, pixelOf(dose.atH));
+  const toPx = Math.min(plotPx, pixelOf(dose.atH + lengthH(dose)));
+  const { plannedAtH } = dose;
+  const moved = dose.status === "changed" && plannedAtH !== undefined && plannedAtH !== dose.atH;
+  const plannedPx = moved ? pixelOf(plannedAtH) : -1;
+  return (
+    <g>
+      {toPx > fromPx && (
+        <rect
+          class={dose.status === "omitted" ? "run run-omitted" : "run"}
+          x={fromPx}
+          y={y - 4}
+          width={toPx - fromPx}
+          height="8"
+        />
+      )}
+      {plannedPx >= 0 && plannedPx <= plotPx && (
+        <path class="was-planned" d={`M${plannedPx} ${y - 9} V${y + 9} M${plannedPx} ${y} H${pixelOf(dose.atH)}`} />
+      )}
+    </g>
   );
 }
 

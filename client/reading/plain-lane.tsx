@@ -26,7 +26,7 @@ export function PlainLane({ view, look, doses }: PlainLaneProps) {
       <span class="unseen">
         {inView} {inView === 1 ? "dose" : "doses"} in view
       </span>
-      <LaneBars marks={single} pixelOf={pixelOf} plotPx={plotPx} rows={rows} />
+      <LaneBars doses={doses} marks={single} pixelOf={pixelOf} plotPx={plotPx} rows={rows} />
       {placed.map((mark) => (
         <span
           key={mark.kind === "dose" ? mark.dose.key : `bunch ${mark.doses[0]!.key}`}

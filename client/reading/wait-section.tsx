@@ -1,18 +1,17 @@
 import { useComputed, useSignal } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
-import { DomainError } from "../../shared/errors.ts";
-import { type WaitQuestion, waitUntil } from "../../shared/kinetics/wait-until.ts";
+import type { WaitQuestion } from "../../shared/kinetics/wait-until.ts";
 import { hoursBetween, instantAt, sayClock } from "../../shared/schedule/clock.ts";
-import { formatHours, formatLevel } from "../../shared/units/format.ts";
+import { formatLevel } from "../../shared/units/format.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { ChoiceField } from "../controls/choice-field.tsx";
 import { type MomentText, momentText, readMoment } from "../controls/moment.ts";
-import { MomentField, sayInstant } from "../controls/moment-field.tsx";
+import { MomentField } from "../controls/moment-field.tsx";
 import { readLimited } from "../controls/read-field.ts";
 import { TextField } from "../controls/text-field.tsx";
 import { lookAt } from "./alternative-look.ts";
-import { predictionOf, sayRefusal } from "./predictions.ts";
 import { useSettled } from "./use-settled.ts";
+import { sayAnswer } from "./wait-words.ts";
 import "./wait-section.css";
 
 type Direction = WaitQuestion["direction"];
@@ -139,20 +138,4 @@ function Answers({ contents, question }: { contents: readonly RegimenContent[]; 
       </table>
     </div>
   );
-}
-
-/** The answer with its clock time, how far into the plan it is and how long to wait. */
-export function sayAnswer(content: RegimenContent, question: WaitQuestion): string {
-  const prediction = predictionOf(content);
-  if (!prediction.ok) return `cannot be computed: ${prediction.problem}`;
-  try {
-    const answer = waitUntil(prediction.given.course, question);
-    if (answer.kind === "already") return `already ${question.direction} it: ${formatLevel(answer.mgPerL)}`;
-    if (answer.kind === "never") return question.meanwhile === "plan-goes-on" ? answer.why : `never: ${answer.why}`;
-    const at = instantAt(content.setting.plan.start, answer.atH, content.timeZone);
-    return `${sayInstant(at, content.timeZone)}; ${formatHours(answer.atH - question.fromH)} to wait, ${formatHours(answer.atH)} into the plan`;
-  } catch (error) {
-    if (error instanceof DomainError) return `cannot be computed: ${sayRefusal(error)}`;
-    throw error;
-  }
 }

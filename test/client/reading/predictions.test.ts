@@ -3,7 +3,7 @@ import { editDose } from "../../../client/reading/dose-edits.ts";
 import { movedPrediction } from "../../../client/reading/moved-prediction.ts";
 import { levelAt, predictionOf } from "../../../client/reading/predictions.ts";
 import { gather, partsAt, sayGathered } from "../../../client/reading/remains-parts.ts";
-import { sayAnswer } from "../../../client/reading/wait-section.tsx";
+import { sayAnswer } from "../../../client/reading/wait-words.ts";
 import { instantAt } from "../../../shared/schedule/clock.ts";
 import { spanOf } from "../../../shared/schedule/expand-orders.ts";
 import { contentWith, everyTwelve, onceAtNoon } from "./contents.ts";
@@ -108,7 +108,7 @@ describe("sayAnswer", () => {
 
   test("has the clock time, the wait and the hours into the plan: 10 to 5 mg/L in 6.931 h (ln 2 / k)", () => {
     const words = sayAnswer(content, { fromH: 4, mgPerL: 5, direction: "below", meanwhile: "nothing-more" });
-    expect(words).toBe("Mon 2 Mar 2026 18:55, UTC+00:00; 6.931\u00a0h to wait, 10.93\u00a0h into the plan");
+    expect(words).toBe("Mon 2 Mar 2026 18:55; 6.931\u00a0h to wait, 10.93\u00a0h into the plan");
   });
 
   test("says when it is so already, or never", () => {
