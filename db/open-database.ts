@@ -110,6 +110,10 @@ function refusalOf(error: unknown): unknown {
     return new DatabaseRefused("damaged", `the database file is damaged (${code}); restore it from a backup`, {
       cause: error,
     });
+  if (code.startsWith("SQLITE_BUSY"))
+    return new DatabaseRefused("unreachable", "another program holds the database file; stop it and try again", {
+      cause: error,
+    });
   if (
     code.startsWith("SQLITE_IOERR") ||
     code.startsWith("SQLITE_CANTOPEN") ||

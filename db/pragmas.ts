@@ -39,9 +39,26 @@ const settings: readonly Setting[] = [
  */
 export function applyPragmas(db: Database): void {
   for (const { name, set, answers } of settings) {
-    db.pragma(`${name} = ${set}`);
+    patiently(() => db.pragma(`${name} = ${set}`));
     const answer: unknown = db.pragma(name, { simple: true });
     if (!answers.includes(answer))
       throw new DatabaseRefused("settings", `the database did not take ${name} = ${set}, it answers ${String(answer)}`);
+  }
+}
+
+/**
+ * The switch to WAL does not wait for another process by itself, whatever busy_timeout says: of two
+ * programs that start together on a new file, one would be told SQLITE_BUSY at once.
+ */
+function patiently(work: () => void): void {
+  const triesAt20Ms = 250;
+  for (let tries = 1; ; tries++) {
+    try {
+      return work();
+    } catch (error) {
+      const isBusy = error instanceof Error && "code" in error && String(error.code).startsWith("SQLITE_BUSY");
+      if (!isBusy || tries >= triesAt20Ms) throw error;
+      Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, 20);
+    }
   }
 }

@@ -60,6 +60,23 @@ describe("openDatabase", () => {
     expect([reason, message]).toEqual(["settings", "the database did not take synchronous = FULL, it answers 1"]);
   });
 
+  test("tries again while another process holds the file: the switch to WAL does not wait by itself", () => {
+    const db = openDatabase(":memory:");
+    let busy = 3;
+    const contended = new Proxy(db, {
+      get: (target, key) =>
+        key === "pragma"
+          ? (text: string, options: object) => {
+              if (text.startsWith("journal_mode =") && busy-- > 0)
+                throw Object.assign(new Error(), { code: "SQLITE_BUSY" });
+              return target.pragma(text, options);
+            }
+          : Reflect.get(target, key),
+    });
+    applyPragmas(contended);
+    expect(busy).toBe(-1);
+  });
+
   test("makes the file for its owner alone, and the folders above it", () => {
     const file = fileAt("deep/er/new.sqlite");
     closeDatabase(openDatabase(file));

@@ -1,9 +1,12 @@
+import { execFile } from "node:child_process";
 import { randomUUID } from "node:crypto";
 import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
+import { promisify } from "node:util";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { closeDatabase, openDatabase } from "../../db/open-database.ts";
+import { projectFolder } from "../../db/project-folder.ts";
 import { Revision } from "../../shared/contract/case.ts";
 import { buildServer, type Program, runToItsEnd, startProgram } from "./support/program.ts";
 import { caseDraft, draft } from "./support/samples.ts";
@@ -145,6 +148,7 @@ describe("the program", () => {
     };
     const setting = { ...draft.content.setting, plan: { ...draft.content.setting.plan, horizonH: 8_760 } };
     let done = false;
+    const beganAt = performance.now();
     const long = post(address, path, {
       ...draft,
       content: { ...draft.content, setting, schedule: { orders: [order] } },
@@ -155,13 +159,29 @@ describe("the program", () => {
       await fetch(`${address}/api/health`);
       waitsMs.push(performance.now() - startedAt);
     }
-    expect([200, 201, 422]).toContain((await long).status);
-    waitsMs.sort((one, other) => one - other);
-    expect(waitsMs.length).toBeGreaterThan(10);
-    // 50 ms at the 99th percentile is the aim; this allows for a busy machine with two cores.
-    expect(waitsMs[Math.floor(waitsMs.length * 0.95)]!).toBeLessThan(150);
+    const longMs = performance.now() - beganAt;
+    // A plan of a year is unusual and stops, but only after all of it was computed.
+    expect((await long).body["type"]).toBe("/problems/unanswered-cautions");
+    // Done on the thread that answers, one of these would have waited for nearly all of it. A ratio, since
+    // the machine may be busy; alone on two cores the longest wait was 12 ms of 600 ms.
+    expect(Math.max(...waitsMs)).toBeLessThan(longMs / 2);
     child.kill("SIGTERM");
     await ended;
+  });
+});
+
+describe("many processes on one file", () => {
+  test("open a new one together, round after round", async () => {
+    const open = `import { closeDatabase, openDatabase } from ${JSON.stringify(join(projectFolder(), ".build", "db", "open-database.js"))};
+      closeDatabase(openDatabase(process.argv[1]));`;
+    const run = promisify(execFile);
+    for (let round = 0; round < 4; round++) {
+      const file = fileAt(`together-${round}.sqlite`);
+      await Promise.all(
+        Array.from({ length: 6 }, () => run(process.execPath, ["--input-type=module", "--eval", open, file])),
+      );
+      expectWhole(file);
+    }
   });
 });
 
