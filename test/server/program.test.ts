@@ -163,7 +163,7 @@ describe("the program", () => {
     // A plan of a year is unusual and stops, but only after all of it was computed.
     expect((await long).body["type"]).toBe("/problems/unanswered-cautions");
     // Done on the thread that answers, one of these would have waited for nearly all of it. A ratio, since
-    // the machine may be busy; alone on two cores the longest wait was 12 ms of 600 ms.
+    // the machine may be busy.
     expect(Math.max(...waitsMs)).toBeLessThan(longMs / 2);
     child.kill("SIGTERM");
     await ended;
