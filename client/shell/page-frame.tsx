@@ -19,10 +19,10 @@ export function PageFrame({ cautions, tools, children }: PageFrameProps) {
   useKeepClearOf(top);
   return (
     <>
-      <a class="skip" href="#main">
-        Skip to the page
-      </a>
       <div class="top" ref={top}>
+        <a class="skip" href="#main">
+          Skip to the page
+        </a>
         <header class="bar">
           <a class="brand" href="/" onClick={followHere}>
             <img src="/icon.svg" alt="" width="22" height="22" /> Ebbline
