@@ -54,7 +54,8 @@ function patiently(work: () => void): void {
   const triesAt20Ms = 250;
   for (let tries = 1; ; tries++) {
     try {
-      return work();
+      work();
+      return;
     } catch (error) {
       const isBusy = error instanceof Error && "code" in error && String(error.code).startsWith("SQLITE_BUSY");
       if (!isBusy || tries >= triesAt20Ms) throw error;

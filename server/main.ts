@@ -10,8 +10,8 @@ import { jobRunner } from "./jobs/job-runner.ts";
 import { makeLogger } from "./logger.ts";
 import { serve } from "./serve.ts";
 import { readSettings } from "./settings.ts";
-import { sayWhyNotStarted } from "./start-failure.ts";
 import { silentDescription } from "./silent-description.ts";
+import { sayWhyNotStarted } from "./start-failure.ts";
 
 /** A retry comes within minutes, or after a night in a sleeping laptop; after this long it is a new wish. */
 const rememberAnswersMs = 30 * 24 * 3_600_000;

@@ -10,8 +10,8 @@ import type {
 import type { Problem } from "../shared/contract/problem.ts";
 import { DomainError } from "../shared/errors.ts";
 import { drain } from "./drain.ts";
-import { requestIdOf } from "./request-id.ts";
 import { RequestError, type RequestErrorCode } from "./request-errors.ts";
+import { requestIdOf } from "./request-id.ts";
 import { silentDescription } from "./silent-description.ts";
 
 type StoreErrorCode = (

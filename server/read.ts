@@ -1,6 +1,6 @@
 import type { z } from "zod";
-import { fieldProblems } from "./field-problems.ts";
 import { NotFoundError } from "../db/store-errors.ts";
+import { fieldProblems } from "./field-problems.ts";
 import { RequestError } from "./request-errors.ts";
 
 /**

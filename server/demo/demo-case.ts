@@ -1,9 +1,9 @@
-import type { Stores } from "../../db/stores.ts";
 import type { Intention } from "../../db/once.ts";
 import { sealOf } from "../../db/seal.ts";
+import type { Stores } from "../../db/stores.ts";
 import { Case, RegimenContent, RegimenId, RevisionId } from "../../shared/contract/case.ts";
 import type { Instant } from "../../shared/contract/schedule.ts";
-import { judgeContent, type Appraise } from "../revisions/judge-content.ts";
+import { type Appraise, judgeContent } from "../revisions/judge-content.ts";
 import { demoCase, demoContent, demoRevisions } from "./demo-content.ts";
 
 /**

@@ -1,4 +1,5 @@
 import { standingCaution } from "../../shared/cautions/standing.ts";
+import { bodyLimits } from "../json-body.ts";
 import { isWrite, type Operation } from "../openapi/operation.ts";
 import { operations } from "../openapi/operations.ts";
 import {
@@ -8,7 +9,6 @@ import {
   reachable,
   schemaOrReference,
 } from "../openapi/schemas.ts";
-import { bodyLimits } from "../json-body.ts";
 import { html, type Markup } from "./markup.ts";
 
 /** The API to read: every operation and every shape, made from the same schemas as the OpenAPI document. */

@@ -1,6 +1,6 @@
 import { Router } from "express";
-import type { Stores } from "../../db/stores.ts";
 import { NotFoundError } from "../../db/store-errors.ts";
+import type { Stores } from "../../db/stores.ts";
 import type { WholeCase } from "../../db/whole-case-store.ts";
 import { Case, type CaseFile, CaseId, RegimenId, type Revision, RevisionId } from "../../shared/contract/case.ts";
 import type { Clock, Ids } from "../app-needs.ts";
@@ -11,7 +11,7 @@ import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { readId } from "../read.ts";
 import { RequestError } from "../request-errors.ts";
-import { judgeContent, type Appraise } from "../revisions/judge-content.ts";
+import { type Appraise, judgeContent } from "../revisions/judge-content.ts";
 
 /** For all the second opinions of one file. */
 const mostMs = 60_000;

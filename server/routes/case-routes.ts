@@ -5,11 +5,11 @@ import type { RegimenStore } from "../../db/regimen-store.ts";
 import type { RevisionStore } from "../../db/revision-store.ts";
 import { NotFoundError } from "../../db/store-errors.ts";
 import { Case, CaseChange, CaseDraft, CaseId } from "../../shared/contract/case.ts";
+import type { Clock, Ids } from "../app-needs.ts";
 import { intentionOf } from "../intention.ts";
 import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { read, readId } from "../read.ts";
-import type { Clock, Ids } from "../app-needs.ts";
 
 export const CaseListQuery = z.strictObject({
   archived: z.enum(["none", "only"], { error: 'must be "none" or "only"' }).default("none"),

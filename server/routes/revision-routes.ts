@@ -10,7 +10,7 @@ import { intentionOf } from "../intention.ts";
 import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { read, readId } from "../read.ts";
-import { judgeContent, type Appraise } from "../revisions/judge-content.ts";
+import { type Appraise, judgeContent } from "../revisions/judge-content.ts";
 
 export const SheetQuery = z.strictObject({
   paper: z.enum(["A4", "Letter"], { error: 'must be "A4" or "Letter"' }).default("A4"),

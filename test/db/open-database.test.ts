@@ -4,8 +4,8 @@ import { join } from "node:path";
 import Sqlite from "better-sqlite3";
 import { afterAll, describe, expect, test } from "vitest";
 import { DatabaseRefused } from "../../db/database-refused.ts";
-import { applicationId, closeDatabase, openDatabase } from "../../db/open-database.ts";
 import { readMigrations } from "../../db/migrations.ts";
+import { applicationId, closeDatabase, openDatabase } from "../../db/open-database.ts";
 import { applyPragmas } from "../../db/pragmas.ts";
 import { projectFolder } from "../../db/project-folder.ts";
 

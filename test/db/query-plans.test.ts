@@ -1,5 +1,5 @@
-import { describe, expect, test } from "vitest";
 import type { Database } from "better-sqlite3";
+import { describe, expect, test } from "vitest";
 import { openDatabase } from "../../db/open-database.ts";
 import { sqliteStores } from "../../db/stores.ts";
 

@@ -1,6 +1,6 @@
+import { once } from "node:events";
 import { createServer, type Server } from "node:http";
 import type { AddressInfo } from "node:net";
-import { once } from "node:events";
 import type { Express } from "express";
 import { onTestFinished } from "vitest";
 
