@@ -1,13 +1,12 @@
 import { TZDate } from "@date-fns/tz";
 import { tzOffset } from "@date-fns/tz/tzOffset";
 import { format } from "date-fns/format";
-import { formatISO } from "date-fns/formatISO";
 import type { Instant } from "../contract/schedule.ts";
 import { DomainError } from "../errors.ts";
 
 export const msPerHour = 3_600_000;
 const msPerMinute = 60_000;
-const msPerDay = 86_400_000;
+export const msPerDay = 86_400_000;
 
 /** How a wall-clock time was turned into an instant. */
 export type Resolution = "exact" | "skipped" | "repeated";
@@ -77,7 +76,7 @@ export function sayTime(instant: Instant, zone: string): string {
 
 /** Minutes east of Greenwich at an instant. */
 export function offsetMinutes(instant: Instant, zone: string): number {
-  return tzOffset(zone, new Date(instant));
+  return offsetMs(zone, Date.parse(instant)) / msPerMinute;
 }
 
 /** Local milliseconds, as if the wall clock were UTC. Only times that a calendar and a 24-hour clock have. */
@@ -99,12 +98,31 @@ function localMsOf(localText: string): number {
   return made.getTime();
 }
 
+/** Offsets already asked for: one lookup in the zone's rules costs more than a dose's whole prediction. */
+const knownOffsets = new Map<string, Map<number, number>>();
+const mostKnown = 20_000;
+
+/** Zones change at whole minutes, so one answer serves its minute. */
 function offsetMs(zone: string, instantMs: number): number {
-  return tzOffset(zone, new Date(instantMs)) * msPerMinute;
+  const known = knownOffsets.get(zone) ?? new Map<number, number>();
+  knownOffsets.set(zone, known);
+  const minute = Math.floor(instantMs / msPerMinute);
+  const found = known.get(minute);
+  if (found !== undefined) return found;
+  const offset = tzOffset(zone, new Date(instantMs)) * msPerMinute;
+  if (known.size >= mostKnown) known.clear();
+  known.set(minute, offset);
+  return offset;
 }
 
+/** ISO 8601 with the offset that holds in the zone, "Z" where there is none; whole seconds. */
 function instantOf(instantMs: number, zone: string): Instant {
-  return formatISO(new TZDate(instantMs, zone));
+  const offset = offsetMs(zone, instantMs);
+  const local = new Date(instantMs + offset).toISOString().slice(0, 19);
+  if (offset === 0) return `${local}Z`;
+  const minutes = Math.abs(offset) / msPerMinute;
+  const two = (number: number) => String(number).padStart(2, "0");
+  return `${local}${offset < 0 ? "-" : "+"}${two(Math.floor(minutes / 60))}:${two(minutes % 60)}`;
 }
 
 function inZone(instant: Instant, zone: string): TZDate {

@@ -1,9 +1,7 @@
-import { addDays } from "date-fns/addDays";
-import { formatISO } from "date-fns/formatISO";
 import { counts } from "../contract/limits.ts";
 import type { End, Order } from "../contract/schedule.ts";
 import { DomainError } from "../errors.ts";
-import { hoursBetween, instantAt, type Resolution, toInstant, toLocal } from "./clock.ts";
+import { hoursBetween, instantAt, msPerDay, type Resolution, toInstant, toLocal } from "./clock.ts";
 
 /** One time at which an order is due, before any exception. */
 export interface DueTime {
@@ -51,9 +49,10 @@ function* clockTimes(
   span: PlanSpan,
 ): Generator<Omit<DueTime, "occurrence">> {
   const times = [...when.times].sort((one, other) => one.time.localeCompare(other.time));
-  const firstDay = new Date(`${toLocal(when.from, span.timeZone).slice(0, 10)}T12:00:00Z`);
+  const firstDayMs = Date.parse(`${toLocal(when.from, span.timeZone).slice(0, 10)}T00:00:00Z`);
   for (let day = 0; ; day++) {
-    const date = formatISO(addDays(firstDay, day), { representation: "date" });
+    // Calendar days counted in UTC: the zone of the machine must not come in.
+    const date = new Date(firstDayMs + day * msPerDay).toISOString().slice(0, 10);
     for (const { time, amountMg } of times) {
       const { instant, resolution } = toInstant(`${date}T${time}`, span.timeZone);
       if (hoursBetween(when.from, instant) < 0) continue;

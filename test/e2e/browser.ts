@@ -34,8 +34,17 @@ export const looks: readonly Look[] = [
 ];
 
 /** A page of its own (storage included) that fails the test on any error the page throws or logs. */
-export async function openPage(browser: Browser, address: string, options: BrowserContextOptions = {}): Promise<{ page: Page; faults: string[] }> {
-  const context = await browser.newContext({ baseURL: address, reducedMotion: "reduce", acceptDownloads: true, ...options });
+export async function openPage(
+  browser: Browser,
+  address: string,
+  options: BrowserContextOptions = {},
+): Promise<{ page: Page; faults: string[] }> {
+  const context = await browser.newContext({
+    baseURL: address,
+    reducedMotion: "reduce",
+    acceptDownloads: true,
+    ...options,
+  });
   const page = await context.newPage();
   page.setDefaultTimeout(15_000);
   const faults: string[] = [];
@@ -49,7 +58,11 @@ export async function openPage(browser: Browser, address: string, options: Brows
 /** axe must find nothing, and the page must not be wider than the window. */
 export async function expectSound(page: Page): Promise<void> {
   const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(" ")).join("; ")}`)).toEqual([]);
-  const overflow = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(" ")).join("; ")}`)).toEqual(
+    [],
+  );
+  const overflow = await page.evaluate(
+    () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+  );
   expect(overflow, "the page is wider than the window").toBeLessThanOrEqual(0);
 }

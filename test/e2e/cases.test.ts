@@ -78,14 +78,28 @@ describe("cases", () => {
 
     const refused = [
       { name: "changed.json", text: text.replace('"first plan"', '"other plan"'), says: /hash/i },
-      { name: "later.json", text: text.replace('"formatVersion":1', '"formatVersion":2').replace('"formatVersion": 1', '"formatVersion": 2'), says: /must be 1/ },
+      {
+        name: "later.json",
+        text: text
+          .replace('"formatVersion":1', '"formatVersion":2')
+          .replace('"formatVersion": 1', '"formatVersion": 2'),
+        says: /must be 1/,
+      },
       { name: "broken.json", text: text.slice(0, -20), says: /must be a JSON file/ },
     ];
     for (const { name, text: changed, says } of refused) {
-      await page.getByLabel("Case file").setInputFiles({ name, mimeType: "application/json", buffer: Buffer.from(changed) });
+      await page
+        .getByLabel("Case file")
+        .setInputFiles({ name, mimeType: "application/json", buffer: Buffer.from(changed) });
       await page.getByRole("alert").filter({ hasText: says }).waitFor();
     }
-    await page.getByLabel("Case file").setInputFiles({ name: "latin1.json", mimeType: "application/json", buffer: Buffer.from('{"a":"\xe9"}', "latin1") });
+    await page
+      .getByLabel("Case file")
+      .setInputFiles({
+        name: "latin1.json",
+        mimeType: "application/json",
+        buffer: Buffer.from('{"a":"\xe9"}', "latin1"),
+      });
     await page.getByRole("alert").filter({ hasText: "must be encoded in UTF-8" }).waitFor();
     await page.context().close();
   });

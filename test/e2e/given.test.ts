@@ -41,13 +41,23 @@ describe("what was given", () => {
     await extra.waitFor({ state: "detached" });
 
     const text = await page.getByRole("region", { name: /Doses/ }).first().innerText();
-    for (const words of ["given as planned", "Mon 2 Mar 2026 18:30", "omitted", "not planned"]) expect(text.replaceAll("\u00a0", " ")).toContain(words);
+    for (const words of ["given as planned", "Mon 2 Mar 2026 18:30", "omitted", "not planned"])
+      expect(text.replaceAll("\u00a0", " ")).toContain(words);
     // 500 + 400 + 3 x 500 + 100: the omitted dose is not in it.
     const rows = await tableText(page.getByRole("table", { name: "Figures of the alternatives" }));
-    await expect.poll(async () => (await tableText(page.getByRole("table", { name: "Figures of the alternatives" }))).find(([name]) => name!.startsWith("Amount in the plan"))![1]).toBe("2,500 mg");
+    await expect
+      .poll(
+        async () =>
+          (await tableText(page.getByRole("table", { name: "Figures of the alternatives" }))).find(([name]) =>
+            name!.startsWith("Amount in the plan"),
+          )![1],
+      )
+      .toBe("2,500 mg");
     expect(rows.length).toBeGreaterThan(20);
     await page.getByRole("columnheader", { name: "As planned (thin line)" }).waitFor();
-    expect(await page.getByRole("region", { name: "Cautions" }).innerText()).toContain("Not everything was given as planned");
+    expect(await page.getByRole("region", { name: "Cautions" }).innerText()).toContain(
+      "Not everything was given as planned",
+    );
     await expectSound(page);
     expect(faults).toEqual([]);
     await page.context().close();

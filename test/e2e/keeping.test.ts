@@ -22,7 +22,10 @@ describe("unsaved work", () => {
     await addInfusion(page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });
     await field(page, "Half-life").fill("0,5");
     await page.keyboard.press("Tab");
-    await page.getByText(/must be written without a comma/).first().waitFor();
+    await page
+      .getByText(/must be written without a comma/)
+      .first()
+      .waitFor();
     const address = page.url();
     const again = await page.context().newPage();
     await page.close({ runBeforeUnload: false });
@@ -31,7 +34,10 @@ describe("unsaved work", () => {
     await expectSound(again);
     await again.getByRole("button", { name: "Take it up" }).click();
     expect(await field(again, "Half-life").inputValue()).toBe("0,5");
-    await again.getByText(/Order 1:/).first().waitFor();
+    await again
+      .getByText(/Order 1:/)
+      .first()
+      .waitFor();
     await field(again, "Half-life").fill("");
     await curveDrawn(again);
     await again.reload();
@@ -47,7 +53,8 @@ describe("unsaved work", () => {
     await page.reload();
     await page.getByRole("heading", { name: /^Unsaved work on/ }).waitFor();
     await page.evaluate(() => {
-      for (const name of Object.keys(localStorage)) if (localStorage.getItem(name)?.includes("48")) localStorage.setItem(name, '{"from":"another release"}');
+      for (const name of Object.keys(localStorage))
+        if (localStorage.getItem(name)?.includes("48")) localStorage.setItem(name, '{"from":"another release"}');
     });
     await page.reload();
     await page.getByText("it cannot be taken up. Nothing of it is guessed.", { exact: false }).waitFor();

@@ -44,8 +44,8 @@ describe("the keyboard alone", () => {
     await page.keyboard.press("Enter");
     await page.keyboard.type("500");
     await type("#order-new-duration", "1");
-    await tabTo("#order-new-when input, input[name='order-new-when'], #order-new-at");
     await type("#order-new-at", "2026-03-02 08:00");
+    await type("#order-new-interval", "8");
     await page.keyboard.press("Enter");
     await curveDrawn(page);
     await tabTo(".dose-mark");
@@ -74,10 +74,17 @@ describe("the keyboard alone", () => {
         const box = element.getBoundingClientRect();
         const style = getComputedStyle(element);
         const label = element.closest("label");
-        const marked = style.outlineStyle !== "none" || style.boxShadow !== "none" || (label !== null && getComputedStyle(label).outlineStyle !== "none");
+        const marked =
+          style.outlineStyle !== "none" ||
+          style.boxShadow !== "none" ||
+          (label !== null && getComputedStyle(label).outlineStyle !== "none");
         const top = document.querySelector(".top")?.getBoundingClientRect().bottom ?? 0;
         const inTop = element.closest(".top") !== null;
-        return { name: element.id || element.textContent?.trim().slice(0, 40) || element.tagName, marked, covered: !inTop && box.bottom <= top && box.height > 0 };
+        return {
+          name: element.id || element.textContent?.trim().slice(0, 40) || element.tagName,
+          marked,
+          covered: !inTop && box.bottom <= top && box.height > 0,
+        };
       });
       if (seen === undefined) break;
       if (seen.covered) hidden.push(seen.name);

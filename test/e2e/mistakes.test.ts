@@ -87,7 +87,10 @@ describe("mistakes in an order", () => {
     await form.getByLabel("Or read it from a CSV file").setInputFiles(file("time,rate\r\n0,50\r\n3.5,\r\n8,0\r\n"));
     await expect.poll(() => field(form, "Pump log").inputValue()).toContain("3.5");
     await form.getByRole("button", { name: "Apply" }).click();
-    await form.getByText(/line 3: has no rate: the log has a gap here/).first().waitFor();
+    await form
+      .getByText(/line 3: has no rate: the log has a gap here/)
+      .first()
+      .waitFor();
     await form.getByLabel("Or read it from a CSV file").setInputFiles(file("time,rate\r\n0,50\r\n3.5,20\r\n8,0\r\n"));
     await expect.poll(() => field(form, "Pump log").inputValue()).toContain("3.5,20");
     await form.getByRole("button", { name: "Apply" }).click();
@@ -104,7 +107,8 @@ describe("mistakes in an order", () => {
     await field(form, "Amount").fill("300");
     await form.getByRole("radio", { name: "at clock times of the day" }).check();
     await field(form, "Clock time 1").fill("08:00");
-    if ((await form.getByRole("textbox", { name: "Clock time 2" }).count()) === 0) await form.getByRole("button", { name: "One more clock time" }).click();
+    if ((await form.getByRole("textbox", { name: "Clock time 2" }).count()) === 0)
+      await form.getByRole("button", { name: "One more clock time" }).click();
     await field(form, "Clock time 2").fill("20:00");
     await form.getByRole("textbox", { name: "Amount then, where it differs" }).nth(1).fill("450");
     await form.getByRole("radio", { name: "a time", exact: true }).check();

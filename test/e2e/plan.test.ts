@@ -30,7 +30,14 @@ describe("the main job", () => {
   test("three alternatives with a late dose and a dialysis session, from an empty case to a sheet", async () => {
     const { page, faults } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
     await makeCase(page, "Invented case for the whole way");
-    await fillSetting(page, { start: "2026-03-02 08:00", horizonH: "72", volumeL: "40", clearanceLPerH: "5", low: "5", high: "25" });
+    await fillSetting(page, {
+      start: "2026-03-02 08:00",
+      horizonH: "72",
+      volumeL: "40",
+      clearanceLPerH: "5",
+      low: "5",
+      high: "25",
+    });
     await page.getByText("derived from V and CL: 0.125").first().waitFor();
 
     await page.getByRole("button", { name: "Add a change of elimination" }).click();
@@ -68,7 +75,11 @@ describe("the main job", () => {
     expect(first[1]).toContain("Mon 2 Mar 2026 09:00");
     expect(levelIn((await figure(page, "Peak at steady state"))[1]!)).toBeCloseTo(steadyPeak, 2);
     expect(levelIn((await figure(page, "Average at steady state"))[1]!)).toBe(12.5);
-    expect((await figure(page, "Amount per day")).slice(1)).toEqual(["1,500 mg per day", "1,500 mg per day", "1,500 mg per day"]);
+    expect((await figure(page, "Amount per day")).slice(1)).toEqual([
+      "1,500 mg per day",
+      "1,500 mg per day",
+      "1,500 mg per day",
+    ]);
 
     await save(page, "first plan", 1);
     const link = page.locator("#saved-note").getByRole("link", { name: /^Sheet, A4/ });
@@ -88,7 +99,10 @@ describe("the main job", () => {
     await field(page, "Time of the cursor").fill("2026-03-03 11:30");
     await page.keyboard.press("Enter");
     const readout = page.getByRole("table", { name: /Levels at the cursor/ });
-    await page.getByText(/Tue 3 Mar 2026 11:30/).first().waitFor();
+    await page
+      .getByText(/Tue 3 Mar 2026 11:30/)
+      .first()
+      .waitFor();
     const answer = await page.request.post("/api/predictions", {
       data: {
         parameters: { volumeL: 40, clearanceLPerH: 5 },

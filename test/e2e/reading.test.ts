@@ -59,9 +59,13 @@ describe("reading a case", () => {
     expect(file.length).toBeGreaterThan(25);
     await field(page, "Start of the 24 hours of the area").fill("2026-03-29 09:00");
     await page.keyboard.press("Tab");
-    await expect.poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("Area over the chosen"))![1]).toContain("Sun 29 Mar 2026 09:00");
+    await expect
+      .poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("Area over the chosen"))![1])
+      .toContain("Sun 29 Mar 2026 09:00");
     await page.getByRole("radio", { name: "the plan alone" }).check();
-    await expect.poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("First trough"))![1]).toContain("Fri 27 Mar 2026 16:00");
+    await expect
+      .poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("First trough"))![1])
+      .toContain("Fri 27 Mar 2026 16:00");
     await page.context().close();
   });
 

@@ -17,14 +17,23 @@ afterAll(async () => {
 async function openPlan(label: string): Promise<{ page: Page; faults: string[] }> {
   const opened = await openPage(browser, server.address, { viewport: { width: 1400, height: 1000 } });
   await makeCase(opened.page, label, "UTC");
-  await fillSetting(opened.page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5", low: "5", high: "15" });
+  await fillSetting(opened.page, {
+    start: "2026-03-02 08:00",
+    horizonH: "48",
+    volumeL: "40",
+    clearanceLPerH: "5",
+    low: "5",
+    high: "15",
+  });
   await addInfusion(opened.page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });
   await curveDrawn(opened.page);
   return opened;
 }
 
 function mark(page: Page, dose: number): Locator {
-  return page.getByRole("group", { name: /^Doses of alternative/ }).getByRole("button", { name: new RegExp(`^dose ${dose},`, "i") });
+  return page
+    .getByRole("group", { name: /^Doses of alternative/ })
+    .getByRole("button", { name: new RegExp(`^dose ${dose},`, "i") });
 }
 
 async function timeOf(dose: Locator): Promise<string> {
@@ -70,7 +79,8 @@ describe("the ruler", () => {
     const perHour = (next.x - box.x) / 8;
     await page.mouse.move(box.x + box.width / 2, box.y + box.height / 2);
     await page.mouse.down();
-    for (let step = 1; step <= 10; step++) await page.mouse.move(box.x + box.width / 2 + (perHour * 2 * step) / 10 + 1, box.y + 4);
+    for (let step = 1; step <= 10; step++)
+      await page.mouse.move(box.x + box.width / 2 + (perHour * 2 * step) / 10 + 1, box.y + 4);
     await page.mouse.up();
     await expect.poll(() => timeOf(mark(page, 3))).toBe("02:00");
     await page.getByRole("button", { name: "Undo" }).click();
@@ -91,7 +101,9 @@ describe("the ruler", () => {
     await field(editor, "Amount").fill("400");
     await expectSound(page);
     await editor.getByRole("button", { name: "Change the dose" }).click();
-    await expect.poll(() => mark(page, 2).getAttribute("aria-label")).toMatch(/400\s*mg over 1\s*h, Mon 2 Mar 2026 17:20, planned, other than the rest/);
+    await expect
+      .poll(() => mark(page, 2).getAttribute("aria-label"))
+      .toMatch(/400\s*mg over 1\s*h, Mon 2 Mar 2026 17:20, planned, other than the rest/);
     await mark(page, 3).focus();
     await page.keyboard.press("Delete");
     await expect.poll(() => mark(page, 3).count()).toBe(0);

@@ -39,7 +39,9 @@ describe("saving", () => {
     await save(page, "smaller doses", 2);
     await page.getByRole("button", { name: "Compare any two revisions" }).click();
     const choices = await page.locator("#compare-before option").allInnerTexts();
-    await page.locator("#compare-before").selectOption({ label: choices.find((choice) => choice.endsWith("revision 1"))! });
+    await page
+      .locator("#compare-before")
+      .selectOption({ label: choices.find((choice) => choice.endsWith("revision 1"))! });
     const differs = page.getByRole("region", { name: "What differs" }).getByRole("table");
     await differs.waitFor();
     const rows = await tableText(differs);
@@ -49,8 +51,15 @@ describe("saving", () => {
       "400 mg over 1 h (400 mg per hour)",
     ]);
     await expectSound(page);
-    await page.getByRole("button", { name: /^Take up .*again, revision 1$/ }).click();
-    await expect.poll(() => page.getByText(/Order 1:/).first().innerText()).toMatch(/500\s*mg/);
+    await page.getByRole("button", { name: /^Take up .*again.* revision 1$/ }).click();
+    await expect
+      .poll(() =>
+        page
+          .getByText(/Order 1:/)
+          .first()
+          .innerText(),
+      )
+      .toMatch(/500\s*mg/);
     await save(page, "back to the first", 3);
     expect(faults).toEqual([]);
     await page.context().close();
@@ -95,7 +104,14 @@ describe("saving", () => {
     await page.unroute("**/revisions");
     await page.reload();
     await page.getByRole("heading", { name: "Revisions of alternative A" }).waitFor();
-    await expect.poll(() => page.getByRole("region", { name: /^Revisions of alternative/ }).getByRole("rowheader").count()).toBe(2);
+    await expect
+      .poll(() =>
+        page
+          .getByRole("region", { name: /^Revisions of alternative/ })
+          .getByRole("rowheader")
+          .count(),
+      )
+      .toBe(2);
     await page.context().close();
   });
 
@@ -110,7 +126,8 @@ describe("saving", () => {
     await page.getByRole("button", { name: /^Save as revision 2/ }).click();
     await page.getByRole("alert").filter({ hasText: "Reason for going on is needed" }).waitFor();
     await expectSound(page);
-    for (const reason of await page.getByRole("textbox", { name: "Reason for going on" }).all()) await reason.fill("invented for a test");
+    for (const reason of await page.getByRole("textbox", { name: "Reason for going on" }).all())
+      await reason.fill("invented for a test");
     await page.getByRole("button", { name: /^Save as revision 2/ }).click();
     await page.getByText("Saved as revision 2.").waitFor();
     await field(page, /^Volume of distribution/).fill("0.16");

@@ -81,7 +81,9 @@ export async function save(page: Page, reason: string, number: number): Promise<
 /** Numbers of a page's table, row by row, as they are read. */
 export async function tableText(table: Locator): Promise<string[][]> {
   return table.evaluate((element) =>
-    [...(element as unknown as HTMLTableElement).rows].map((row) => [...row.cells].map((cell) => cell.innerText.replace(/[\s\u00a0]+/g, " ").trim())),
+    [...(element as unknown as HTMLTableElement).rows].map((row) =>
+      [...row.cells].map((cell) => cell.innerText.replace(/[\s\u00a0]+/g, " ").trim()),
+    ),
   );
 }
 

@@ -23,14 +23,19 @@ describe("the words on the screen", () => {
     expect(findWritingFaults(await page.locator("body").innerText())).toEqual([]);
     await openDemo(page);
     // One at a time: opening one may bring another into the page.
-    for (const closed = page.locator("details:not([open]) > summary"); (await closed.count()) > 0; ) await closed.first().click();
+    for (const closed = page.locator("details:not([open]) > summary"); (await closed.count()) > 0; )
+      await closed.first().click();
     await page.getByText("A = 1 ÷ (1 − e^(−k × P))").waitFor();
     await page.getByRole("button", { name: "Compare any two revisions" }).click();
     await page.getByRole("heading", { name: "Two revisions compared" }).waitFor();
     expect(findWritingFaults(withoutHashes(await page.locator("body").innerText()))).toEqual([]);
-    const labels = await page.locator("[aria-label], [aria-valuetext], [title]").evaluateAll((elements) =>
-      elements.flatMap((element) => ["aria-label", "aria-valuetext", "title"].map((name) => element.getAttribute(name) ?? "")),
-    );
+    const labels = await page
+      .locator("[aria-label], [aria-valuetext], [title]")
+      .evaluateAll((elements) =>
+        elements.flatMap((element) =>
+          ["aria-label", "aria-valuetext", "title"].map((name) => element.getAttribute(name) ?? ""),
+        ),
+      );
     expect(findWritingFaults(labels.join("\n"))).toEqual([]);
     await page.goto("/api/docs");
     expect(await page.locator("body").innerText()).toContain("It is not an order");

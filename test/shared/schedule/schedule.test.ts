@@ -71,6 +71,24 @@ describe("plannedDoses", () => {
     ]);
   });
 
+  test.for(["Pacific/Auckland", "Pacific/Kiritimati", "America/Los_Angeles"])(
+    "does not ask the machine in %s what day it is",
+    (machineZone) => {
+      const when = {
+        kind: "clock-times",
+        from: "2026-03-02T08:00:00Z",
+        times: [{ time: "08:00" }],
+        end: { kind: "open" },
+      } as const;
+      const content = inventedContent({ schedule: { orders: [{ ...everyEight, when }] } });
+      const before = process.env["TZ"];
+      process.env["TZ"] = machineZone;
+      const hours = plannedDoses(content).map(({ atH }) => atH);
+      process.env["TZ"] = before;
+      expect(hours).toEqual([0, 24]);
+    },
+  );
+
   test("numbers doses from the order's beginning, so that an edit stays with its dose", () => {
     const exceptions = [
       { occurrence: 1, skip: true as const },
