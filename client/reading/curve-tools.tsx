@@ -18,21 +18,19 @@ export function CurveTools({ view }: { view: CurveView }) {
   return (
     <div class="curve-tools">
       <div class="button-row" role="group" aria-label="Part of the plan in view">
-        <button type="button" class="button" onClick={() => view.zoom(0.5)}>
-          Closer
-        </button>
-        <button type="button" class="button" disabled={whole} onClick={() => view.zoom(2)}>
+        <ViewButton onPress={() => view.zoom(0.5)}>Closer</ViewButton>
+        <ViewButton idle={whole} onPress={() => view.zoom(2)}>
           Wider
-        </button>
-        <button type="button" class="button" disabled={fromH <= 0} onClick={() => view.pan(-stepH)}>
+        </ViewButton>
+        <ViewButton idle={fromH <= 0} onPress={() => view.pan(-stepH)}>
           ← Earlier
-        </button>
-        <button type="button" class="button" disabled={toH >= horizonH} onClick={() => view.pan(stepH)}>
+        </ViewButton>
+        <ViewButton idle={toH >= horizonH} onPress={() => view.pan(stepH)}>
           Later →
-        </button>
-        <button type="button" class="button" disabled={whole} onClick={() => view.show(undefined)}>
+        </ViewButton>
+        <ViewButton idle={whole} onPress={() => view.show(undefined)}>
           Whole plan
-        </button>
+        </ViewButton>
       </div>
       <ChoiceField
         id="level-scale"
@@ -56,5 +54,20 @@ export function CurveTools({ view }: { view: CurveView }) {
         }}
       />
     </div>
+  );
+}
+
+interface ViewButtonProps {
+  readonly children: string;
+  /** Pressing it would change nothing. It stays in reach, or the focus would be lost with the last useful press. */
+  readonly idle?: boolean;
+  readonly onPress: () => void;
+}
+
+function ViewButton({ children, idle = false, onPress }: ViewButtonProps) {
+  return (
+    <button type="button" class="button" aria-disabled={idle} onClick={idle ? undefined : onPress}>
+      {children}
+    </button>
   );
 }
