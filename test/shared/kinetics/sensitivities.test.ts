@@ -38,17 +38,11 @@ describe("sensitivitiesAt", () => {
             const derivative = sensitivitiesAt(course, timesH)[field];
             const wanted = difference(input, name, timesH);
             const largest = exposureOf(walk(course), { fromH: 0, toH: input.horizonH }).peak.mgPerL;
-            // Fourth order: (k t 1e-3)^4 / 30 of the derivative's own scale, which is the level over the parameter, times k t.
-            const lives = Math.max(
-              1,
-              input.horizonH *
-                Math.max(
-                  input.parameters.eliminationRatePerH!,
-                  name === "absorptionRatePerH" ? input.parameters.absorptionRatePerH! : 0,
-                ),
-            );
-            const scale =
-              (Math.max(largest, ...levelsAt(walk(course), timesH)) / input.parameters[name]!) * Math.min(lives, 50);
+            // What the difference cuts off is of fourth order, (1e-3)^4 times a derivative that grows with k t; what it
+            // loses to rounding is the level's last digits over 1e-3 of the parameter. Both stay below this.
+            const fastest = Math.max(...course.elimination.map(({ ratePerH }) => ratePerH), course.absorptionRatePerH!);
+            const lives = Math.min(50, Math.max(1, input.horizonH * fastest));
+            const scale = (lives * Math.max(largest, ...levelsAt(walk(course), timesH))) / input.parameters[name]!;
             for (const [point, slope] of wanted.entries())
               expect(Math.abs(derivative[point]! - slope)).toBeLessThanOrEqual(1e-7 * scale);
           },
