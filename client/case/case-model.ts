@@ -61,7 +61,7 @@ export function createCaseModel(opening: CaseDocument, readSetting: ReadSetting)
     canRedo: computed(() => history.value.future.length > 0),
     lastChange: computed(() => history.value.said),
     selectedKey: signal(settled.alternatives[0]?.key),
-    cursorH: signal(0),
+    cursorH: signal(firstCursorH(settled)),
     change(what, edit, merge) {
       const before = history.peek();
       const edited = edit(before.now.document);
@@ -83,6 +83,11 @@ export function createCaseModel(opening: CaseDocument, readSetting: ReadSetting)
       history.value = { ...rest, past: past.map(over), now: over(now), future: future.map(over) };
     },
   };
+}
+
+/** A day into the plan, or its middle: at hour 0 there is seldom anything to read. */
+function firstCursorH({ setting }: CaseDocument): number {
+  return setting === undefined ? 0 : Math.min(24, setting.plan.horizonH / 2);
 }
 
 function pushed(before: History, now: Step, merge: string | undefined): History {

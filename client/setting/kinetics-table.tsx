@@ -39,7 +39,7 @@ export function KineticsTable({ page }: { page: CasePage }) {
         )
       }
       problem={reading.problems[name] ?? refusedAt(page, `setting-${name}`)}
-      reading={said}
+      reading={reading.problems[name] === undefined ? said : undefined}
       hint={hint}
     />
   );

@@ -88,6 +88,7 @@ export function figuresOfPrepared(
     highestAmount: highestAmount(prepared),
     highestRate: highestRate(prepared),
     firstInRange: firstInRange(content, prepared),
+    timeTo90Percent: timeTo90Percent(prepared),
   };
 }
 
@@ -138,6 +139,14 @@ function wholeFigures({ content, made }: Prepared): WholeFigures {
   };
 }
 
+/** With the elimination that holds at the end of the plan; a constant rate settles like any cycle. */
+function timeTo90Percent({ course }: Prepared): Figure {
+  const { ratePerH } = course.elimination.at(-1)!;
+  return ratePerH > 0
+    ? { value: Math.LN10 / ratePerH, unit: "h" }
+    : { absent: "elimination stops, so the level never settles" };
+}
+
 const noRange: Figure = { absent: "no desired range is given" };
 
 function firstInRange(content: RegimenContent, { made }: Prepared): Figure {
@@ -156,7 +165,6 @@ type SteadyFigures = Pick<
   | "steadyAverage"
   | "steadyArea24"
   | "steadyPercentWithin"
-  | "timeTo90Percent"
   | "settledFrom"
   | "accumulationRatio"
   | "swing"
@@ -166,7 +174,7 @@ type SteadyFigures = Pick<
 function steadyFigures(prepared: Prepared): SteadyFigures {
   const { content, settled } = prepared;
   if (settled.kind === "none") return allAbsent(settled.why);
-  const { steady, startsAtH, course } = settled;
+  const { steady, startsAtH } = settled;
   const { exposure, cycleH } = steady;
   const inCycle = (value: number, atH: number): Figure => ({
     value,
@@ -186,7 +194,6 @@ function steadyFigures(prepared: Prepared): SteadyFigures {
       "percent",
       "no desired range is given",
     ),
-    timeTo90Percent: { value: Math.LN10 / course.elimination[0]!.ratePerH, unit: "h" },
     settledFrom: settledFigure(prepared),
     accumulationRatio: plain(steady.accumulationRatio, "times", "the first cycle leaves no level"),
     swing: plain(steady.swing === undefined ? undefined : 100 * steady.swing, "percent", "the trough is 0"),
@@ -212,7 +219,6 @@ function allAbsent(absent: string): SteadyFigures {
     steadyAverage: { absent },
     steadyArea24: { absent },
     steadyPercentWithin: { absent },
-    timeTo90Percent: { absent },
     settledFrom: { absent },
     accumulationRatio: { absent },
     swing: { absent },

@@ -74,12 +74,8 @@ describe("plannedDoses", () => {
   test.for(["Pacific/Auckland", "Pacific/Kiritimati", "America/Los_Angeles"])(
     "does not ask the machine in %s what day it is",
     (machineZone) => {
-      const when = {
-        kind: "clock-times",
-        from: "2026-03-02T08:00:00Z",
-        times: [{ time: "08:00" }],
-        end: { kind: "open" },
-      } as const;
+      const times = [{ time: "08:00" }];
+      const when = { kind: "clock-times", from: "2026-03-02T08:00:00Z", times, end: { kind: "open" } } as const;
       const content = inventedContent({ schedule: { orders: [{ ...everyEight, when }] } });
       const before = process.env["TZ"];
       process.env["TZ"] = machineZone;
