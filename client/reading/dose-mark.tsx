@@ -4,7 +4,7 @@ import type { CurveView } from "./curve-view.ts";
 import { DoseGlyph } from "./dose-glyph.tsx";
 import { sayDose } from "./dose-words.ts";
 import { frameOnce } from "./frame-once.ts";
-import { markId, markPx, type PlacedMark } from "./mark-layout.ts";
+import { markId, markPx, type PlacedMark, placeOf } from "./mark-layout.ts";
 import { snappedH } from "./snap.ts";
 
 interface DoseMarkProps {
@@ -27,7 +27,7 @@ interface Drag {
 
 /** One dose: dragged by the pointer, moved and deleted by keys, opened for typing by a click or Enter. */
 export function DoseMark({ view, alternativeKey, content, mark, tabIndex, onKeyDown }: DoseMarkProps) {
-  const { dose, xPx, row } = mark;
+  const { dose } = mark;
   const drag = useRef<Drag | undefined>(undefined);
   const move = useMemo(() => frameOnce((atH: number) => view.hand.moveTo(atH)), [view]);
   const words = sayDose(dose, content.schedule, content.timeZone);
@@ -58,7 +58,7 @@ export function DoseMark({ view, alternativeKey, content, mark, tabIndex, onKeyD
       tabIndex={tabIndex}
       aria-label={words}
       title={words}
-      style={{ transform: `translate(${xPx - markPx / 2}px, ${row * markPx}px)` }}
+      style={placeOf(mark)}
       onFocus={() => {
         view.activeKey.value = dose.key;
       }}

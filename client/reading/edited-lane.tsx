@@ -6,7 +6,7 @@ import type { CurveView } from "./curve-view.ts";
 import { DoseMark } from "./dose-mark.tsx";
 import { LaneBars } from "./lane-bars.tsx";
 import { inkOf } from "./line-sample.tsx";
-import { keyOfMark, markId, markPx, type PlacedMark, placeMarks } from "./mark-layout.ts";
+import { keyOfMark, markId, markPx, type PlacedMark, placeMarks, placeOf } from "./mark-layout.ts";
 import { pixelAt } from "./plot-scale.ts";
 import { steppedH } from "./snap.ts";
 
@@ -69,7 +69,7 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
             class="mark-place mark-bunch"
             tabIndex={stop === mark ? 0 : -1}
             aria-label={sayBunch(mark.doses, content)}
-            style={{ transform: `translate(${mark.xPx - markPx / 2}px, ${mark.row * markPx}px)` }}
+            style={placeOf(mark)}
             onFocus={() => {
               view.activeKey.value = keyOfMark(mark);
             }}

@@ -37,6 +37,11 @@ export function keyOfMark(mark: PlacedMark): string {
   return mark.kind === "dose" ? mark.dose.key : `bunch ${mark.doses[0]!.key}`;
 }
 
+/** Where a mark's element stands. By left and top: a transform for each of some hundred marks makes every frame dearer. */
+export function placeOf({ xPx, row }: PlacedMark): { left: string; top: string } {
+  return { left: `${xPx - markPx / 2}px`, top: `${row * markPx}px` };
+}
+
 /** Id of a mark's element: keys hold signs that ids should not. */
 export function markId(key: string): string {
   return `mark-${key.replace(/[^A-Za-z0-9]/g, "-")}`;

@@ -4,7 +4,7 @@ import type { CurveView } from "./curve-view.ts";
 import { DoseGlyph } from "./dose-glyph.tsx";
 import { LaneBars } from "./lane-bars.tsx";
 import { inkOf } from "./line-sample.tsx";
-import { markPx, placeMarks } from "./mark-layout.ts";
+import { markPx, placeMarks, placeOf } from "./mark-layout.ts";
 import { pixelAt } from "./plot-scale.ts";
 
 interface PlainLaneProps {
@@ -32,7 +32,7 @@ export function PlainLane({ view, look, doses }: PlainLaneProps) {
           key={mark.kind === "dose" ? mark.dose.key : `bunch ${mark.doses[0]!.key}`}
           class={mark.kind === "dose" ? "mark-place" : "mark-place mark-bunch"}
           aria-hidden="true"
-          style={{ transform: `translate(${mark.xPx - markPx / 2}px, ${mark.row * markPx}px)` }}
+          style={placeOf(mark)}
         >
           {mark.kind === "dose" ? (
             <DoseGlyph kind={mark.dose.give.kind} status={mark.dose.status} />
