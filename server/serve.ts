@@ -5,17 +5,19 @@ import type { Express } from "express";
 /** The server listens and can be stopped. */
 export interface Serving {
   readonly address: string;
-  /** Stops accepting, lets what is running finish, then resolves. */
+  /** Stops accepting, lets what is running finish for a while, then resolves. */
   stop(): Promise<void>;
 }
 
 /**
  * Listens, or rejects with the error of listening: Express's own callback is also called with an error,
  * which is easily taken for success.
+ *
+ * @param patienceMs how long a request may go on once the server is to stop
  */
 export async function serve(
   app: Express,
-  { port, host }: { readonly port: number; readonly host: string },
+  { port, host, patienceMs = 15_000 }: { readonly port: number; readonly host: string; readonly patienceMs?: number },
 ): Promise<Serving> {
   const server = createServer({ requestTimeout: 60_000, headersTimeout: 20_000 }, app);
   await new Promise<void>((resolve, reject) => {
@@ -25,16 +27,21 @@ export async function serve(
   const { address, port: taken } = server.address() as AddressInfo;
   return {
     address: `http://${address.includes(":") ? `[${address}]` : address}:${taken}`,
-    stop: () => stopped(server),
+    stop: () => stopped(server, patienceMs),
   };
 }
 
-function stopped(server: Server): Promise<void> {
+function stopped(server: Server, patienceMs: number): Promise<void> {
   return new Promise((resolve) => {
     server.close(() => resolve());
     // Connections kept alive would hold the server open; those with a request running are not idle.
     server.closeIdleConnections();
     const sweep = setInterval(() => server.closeIdleConnections(), 100).unref();
-    server.once("close", () => clearInterval(sweep));
+    // A sender that never ends its request must not keep a server from being stopped.
+    const end = setTimeout(() => server.closeAllConnections(), patienceMs);
+    server.once("close", () => {
+      clearInterval(sweep);
+      clearTimeout(end);
+    });
   });
 }

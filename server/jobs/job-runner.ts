@@ -6,8 +6,6 @@ import type { Appraise } from "../revisions/judge-content.ts";
 import { DescribedError } from "../silent-description.ts";
 import type { Job, Result } from "./job.ts";
 
-const mostMs = 30_000;
-
 export interface JobRunner {
   readonly appraise: Appraise;
   readonly writeSheet: WriteSheet;
@@ -24,8 +22,10 @@ interface Waiting {
  * One worker thread for what takes long, so that a year of doses or a sheet does not hold up every other
  * request. A job that takes too long ends the thread with all that wait for it; the next job starts a new
  * one. Only in the built program: Node starts a thread from a .js file.
+ *
+ * @param mostMs how long one job may take, with those before it
  */
-export function jobRunner(): JobRunner {
+export function jobRunner(mostMs = 30_000): JobRunner {
   const waiting = new Map<number, Waiting>();
   let thread: Worker | undefined;
   let lastId = 0;

@@ -3,11 +3,14 @@ import { randomUUID } from "node:crypto";
 import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
+import { pathToFileURL } from "node:url";
 import { promisify } from "node:util";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
+import { afterAll, beforeAll, describe, expect, onTestFinished, test } from "vitest";
 import { closeDatabase, openDatabase } from "../../db/open-database.ts";
 import { projectFolder } from "../../db/project-folder.ts";
-import { Revision } from "../../shared/contract/case.ts";
+import type { jobRunner as JobRunner } from "../../server/jobs/job-runner.ts";
+import { appraise } from "../../server/revisions/appraise.ts";
+import { RegimenContent, Revision } from "../../shared/contract/case.ts";
 import { buildServer, type Program, runToItsEnd, startProgram } from "./support/program.ts";
 import { caseDraft, draft } from "./support/samples.ts";
 
@@ -167,6 +170,52 @@ describe("the program", () => {
     expect(Math.max(...waitsMs)).toBeLessThan(longMs / 2);
     child.kill("SIGTERM");
     await ended;
+  });
+});
+
+describe("the thread for long work", () => {
+  /** As built: Node starts a thread from a .js file only. */
+  const runner = async (mostMs?: number) => {
+    const built = (await import(
+      pathToFileURL(join(projectFolder(), ".build", "server", "jobs", "job-runner.js")).href
+    )) as {
+      jobRunner: typeof JobRunner;
+    };
+    const jobs = built.jobRunner(mostMs);
+    onTestFinished(() => jobs.stop());
+    return jobs;
+  };
+  const content = RegimenContent.parse(draft.content);
+
+  test("appraises as this thread would", async () => {
+    const jobs = await runner();
+    expect(await jobs.appraise(content)).toEqual(appraise(content));
+  });
+
+  test("fails one job without a word of what was typed, and does the next", async () => {
+    const jobs = await runner();
+    const broken = { number: 1, content: { caseLabel: "SECRET-LABEL" } } as unknown as Revision;
+    const error = await jobs.writeSheet(broken, { paper: "A4" }).catch((reason: unknown) => reason);
+    expect(JSON.stringify([error, String(error)])).not.toContain("SECRET-LABEL");
+    expect(error).toMatchObject({ name: "DescribedError", description: { name: expect.stringMatching(/Error$/) } });
+    expect(await jobs.appraise(content)).toMatchObject({ ok: true });
+  });
+
+  test("gives up a job that takes too long, and starts anew for the next", async () => {
+    const jobs = await runner(1_500);
+    const year = { ...content.setting.plan, horizonH: 17_568 };
+    const [order] = content.schedule.orders;
+    const when = { kind: "every", from: year.start, intervalH: 2, end: { kind: "open" } } as const;
+    const long = {
+      ...content,
+      setting: { ...content.setting, plan: year },
+      schedule: { ...content.schedule, orders: [{ ...order!, when }] },
+    };
+    const outcomes = await Promise.allSettled(Array.from({ length: 40 }, () => jobs.appraise(long)));
+    expect(outcomes.filter(({ status }) => status === "rejected")[0]).toMatchObject({ reason: { code: "too-long" } });
+    await expect
+      .poll(() => jobs.appraise(content).catch(() => undefined), { timeout: 15_000 })
+      .toMatchObject({ ok: true });
   });
 });
 
