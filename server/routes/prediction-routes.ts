@@ -19,8 +19,9 @@ export function predictionRoutes(): Router {
     .post(jsonBody("usual"), (request, response) => {
       const asked = read(PredictionRequest, request.body);
       const answer = inField(() => ({ ...predict(asked), cautions: cautionsForPrediction(asked) }));
-      refuseNaN(answer);
-      response.type("json").send(write(answer, { hours: asked.horizonH, everyH: asked.sampleEveryH }));
+      const text = write(answer, { hours: asked.horizonH, everyH: asked.sampleEveryH });
+      refuseNaN(answer, text);
+      response.type("json").send(text);
     })
     .all(only("POST"));
   router
@@ -28,8 +29,9 @@ export function predictionRoutes(): Router {
     .post(jsonBody("usual"), (request, response) => {
       const asked = read(SteadyStateRequest, request.body);
       const answer = inField(() => ({ ...describeSteadyState(asked), cautions: cautionsForSteadyState(asked) }));
-      refuseNaN(answer);
-      response.type("json").send(write(answer, { hours: asked.cycleH, everyH: asked.sampleEveryH }));
+      const text = write(answer, { hours: asked.cycleH, everyH: asked.sampleEveryH });
+      refuseNaN(answer, text);
+      response.type("json").send(text);
     })
     .all(only("POST"));
   return router;

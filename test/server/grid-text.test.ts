@@ -39,10 +39,11 @@ describe("refuseNaN", () => {
     [[{ a: -Infinity }]],
     Number.NaN,
   ])("finds the figure that is no number in %j", (value) => {
-    expect(() => refuseNaN(value)).toThrow("a figure is not a finite number");
+    expect(() => refuseNaN(value, Buffer.from(JSON.stringify(value)))).toThrow("a figure is not a finite number");
   });
 
   test("lets an answer through that has none", () => {
-    refuseNaN({ levels: [0, 1e-300], cautions: [{ text: "NaN", none: null, yes: true }] });
+    const answer = { levels: [0, 1e-300], cautions: [{ text: "NaN, null", none: null, yes: true }] };
+    refuseNaN(answer, Buffer.from(JSON.stringify(answer)));
   });
 });

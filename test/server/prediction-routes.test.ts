@@ -1,7 +1,10 @@
 import request from "supertest";
 import { describe, expect, test } from "vitest";
-import { PredictionResponse } from "../../shared/contract/prediction.ts";
+import { answerWriter } from "../../server/grid-text.ts";
+import { refuseNaN } from "../../server/refuse-nan.ts";
+import { PredictionRequest, PredictionResponse } from "../../shared/contract/prediction.ts";
 import { SteadyStateResponse } from "../../shared/contract/steady-state.ts";
+import { predict } from "../../shared/kinetics/predict.ts";
 import { makeApp } from "./support/make-app.ts";
 import { prediction } from "./support/samples.ts";
 
@@ -152,5 +155,18 @@ describe("POST /api/steady-states", () => {
       eliminationChanges: [{ fromH: 0, eliminationRatePerH: 0 }],
     }).expect(422);
     expect(stopped.body.errors[0].pointer).toBe("#/parameters/eliminationRatePerH");
+  });
+});
+
+describe("a level that is no number", () => {
+  test("is a fault of the server and is never sent as null", () => {
+    const predicted = predict(PredictionRequest.parse(prediction));
+    const text = answerWriter()({ ...predicted, concentrationsMgPerL: [10, Number.NaN] } as object, {
+      hours: 24,
+      everyH: undefined,
+    });
+    expect(text.toString()).toContain("[10,null]");
+    expect(() => refuseNaN({ ...predicted, concentrationsMgPerL: [10, Number.NaN] }, text)).toThrow();
+    expect(() => refuseNaN(predicted, answerWriter()(predicted, { hours: 24, everyH: undefined }))).not.toThrow();
   });
 });
