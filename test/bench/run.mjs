@@ -1,6 +1,6 @@
 import { spawnSync } from "node:child_process";
 import { writeFileSync } from "node:fs";
-import { arch, cpus, platform } from "node:os";
+import { arch, cpus, loadavg, platform } from "node:os";
 import { fileURLToPath } from "node:url";
 
 /** `npm run bench`: builds, measures everything in one run, prints one table and keeps it in results.md. One part by its name. */
@@ -14,6 +14,7 @@ const parts = [
 
 run(["tsc", "-b", "shared", "db", "server"]);
 run(["vite", "build", "client", "--config", "client/vite.config.ts", "--logLevel", "warn"]);
+const [loadBefore] = loadavg();
 const lines = [];
 for (const part of parts.filter(({ name }) => only.length === 0 || only.includes(name)))
   lines.push(...(await part.load()));
@@ -67,6 +68,8 @@ function page(rows) {
 \`npm run bench\` on ${new Date().toISOString().slice(0, 10)}: ${machine}.
 
 Ratios within one run; the quickest of several runs on both sides, since other work on a machine only adds time.
+Load average at the start: ${loadBefore.toFixed(1)}. Above half the cores, the lines about the server and the page show
+the other work as well.
 
 ${rows}
 `;
