@@ -4,6 +4,7 @@ import { type CurveView, followCursor } from "./curve-view.ts";
 import { frameOnce } from "./frame-once.ts";
 import { gutters, hourAt } from "./plot-scale.ts";
 import { steppedH } from "./snap.ts";
+import { useSettled } from "./use-settled.ts";
 
 const dayH = 24;
 
@@ -13,6 +14,8 @@ const dayH = 24;
  */
 export function CursorControl({ view }: { view: CurveView }) {
   const { span, cursorH } = view;
+  // Nobody listens to the levels while a dose is in the hand.
+  const settled = useSettled(view.contents);
   const follow = useMemo(() => frameOnce((atH: number) => view.moveCursor(atH)), [view]);
   const hourOf = (event: PointerEvent & { readonly currentTarget: HTMLElement }) =>
     hourAt(event.clientX - event.currentTarget.getBoundingClientRect().left, view.window.peek(), view.plotPx.peek());
@@ -33,7 +36,7 @@ export function CursorControl({ view }: { view: CurveView }) {
       aria-valuemin={0}
       aria-valuemax={span.value?.horizonH ?? 0}
       aria-valuenow={cursorH.value}
-      aria-valuetext={sayCursor(view)}
+      aria-valuetext={sayCursor(view, settled.value)}
       style={{ left: `${gutters.leftPx}px`, right: `${gutters.rightPx}px` }}
       onKeyDown={pressed}
       onPointerDown={(event) => {

@@ -13,11 +13,11 @@ export function sayHour(
 }
 
 /** The level of every alternative at the cursor, in one sentence for the ear. */
-export function sayCursor(view: CurveView): string {
+export function sayCursor(view: CurveView, contents = view.contents.value): string {
   const span = view.span.value;
   if (span === undefined) return "";
   const atH = view.cursorH.value;
-  const levels = [...view.contents.value.values()].map((content, place) => {
+  const levels = [...contents.values()].map((content, place) => {
     const prediction = predictionOf(content);
     return `${lookAt(place).letter} ${prediction.ok ? formatLevel(levelAt(prediction.given, atH)) : "cannot be computed"}`;
   });

@@ -4,7 +4,7 @@ import type { CurveView } from "./curve-view.ts";
 import { DoseGlyph } from "./dose-glyph.tsx";
 import { sayDose } from "./dose-words.ts";
 import { frameOnce } from "./frame-once.ts";
-import { markId, markPx, type PlacedMark, placeOf } from "./mark-layout.ts";
+import { markId, type PlacedMark, placeOf } from "./mark-layout.ts";
 import { snappedH } from "./snap.ts";
 
 interface DoseMarkProps {

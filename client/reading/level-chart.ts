@@ -9,7 +9,7 @@ import {
   PointElement,
 } from "chart.js";
 import { formatLevel, formatQuantity } from "../../shared/units/format.ts";
-import { type CurvePicture, levelBounds } from "./curve-picture.ts";
+import { type CurvePicture, levelBounds, type PictureLine } from "./curve-picture.ts";
 import { gutters } from "./plot-scale.ts";
 
 Chart.register(LineController, LineElement, LinearScale, LogarithmicScale, PointElement);
@@ -27,6 +27,7 @@ const dark = "(prefers-color-scheme: dark)";
 export function createLevelChart(canvas: HTMLCanvasElement): LevelChart {
   let picture: CurvePicture | undefined;
   let inks = readInks(canvas);
+  let drawnAxes = "";
   const chart = new Chart<"line">(canvas, {
     type: "line",
     data: { datasets: [] },
@@ -55,8 +56,11 @@ export function createLevelChart(canvas: HTMLCanvasElement): LevelChart {
   });
   const draw = () => {
     if (picture === undefined) return;
-    chart.data.datasets = datasetsOf(picture, inks);
-    chart.options.scales = scalesOf(picture, inks);
+    chart.data.datasets = picture.lines.map((line, index) => inkedLine(chart.data.datasets[index], line, inks));
+    // Options that are handed over are resolved anew, so they are handed over only when they differ.
+    const axes = axesKey(picture, inks);
+    if (axes !== drawnAxes) chart.options.scales = scalesOf(picture, inks);
+    drawnAxes = axes;
     chart.update("none");
   };
   const scheme = matchMedia(dark);
@@ -94,16 +98,27 @@ function readInks(canvas: HTMLCanvasElement): Inks {
   return { of, font: of("--plain") };
 }
 
-function datasetsOf({ lines }: CurvePicture, inks: Inks): ChartDataset<"line">[] {
-  return lines.map(({ points, colour, dash, widthPx }) => ({
+/** The same dataset object with new contents: for another object the library would build its parts anew. */
+function inkedLine(
+  dataset: ChartDataset<"line"> | undefined,
+  { points, colour, dash, widthPx }: PictureLine,
+  inks: Inks,
+): ChartDataset<"line"> {
+  return Object.assign(dataset ?? { data: [] }, {
     data: points as { x: number; y: number }[],
     borderColor: inks.of(colour),
     borderDash: [...dash],
     borderWidth: widthPx,
-    borderJoinStyle: "bevel",
+    borderJoinStyle: "bevel" as const,
     pointRadius: 0,
     fill: false,
-  }));
+  });
+}
+
+function axesKey(picture: CurvePicture, inks: Inks): string {
+  const { low, high } = levelBounds(picture);
+  const { fromH, toH } = picture.window;
+  return [picture.scale, low, high, fromH, toH, inks.of("--ink")].join(" ");
 }
 
 function scalesOf(picture: CurvePicture, inks: Inks) {

@@ -1,3 +1,4 @@
+import { useComputed } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { RangeMgPerL } from "../../shared/contract/dose.ts";
 import { formatLevel } from "../../shared/units/format.ts";
@@ -10,8 +11,8 @@ import { selectedKeyOf } from "./selected.ts";
 
 /** Which line is which, and the level of each at the cursor. */
 export function Readout({ view }: { view: CurveView }) {
-  const span = view.span.value;
-  if (span === undefined) return null;
+  const when = useComputed(() => view.span.value && sayHour(view.cursorH.value, view.span.value)).value;
+  if (when === undefined) return null;
   const contents = [...view.contents.value];
   const followed = contents.some(([, content]) => {
     const prediction = predictionOf(content);
@@ -21,7 +22,7 @@ export function Readout({ view }: { view: CurveView }) {
     <div class="scroll-x" role="region" aria-label="Levels at the cursor" tabIndex={0}>
       <table class="readout">
         <caption>
-          Levels at the cursor: <strong>{sayHour(view.cursorH.value, span)}</strong>
+          Levels at the cursor: <strong>{when}</strong>
         </caption>
         <thead>
           <tr>
