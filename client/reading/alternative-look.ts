@@ -1,5 +1,3 @@
-import type { CaseDocument } from "../case/case-document.ts";
-
 /** How an alternative is told apart: its letter first, its dashes second, its colour last. */
 export interface AlternativeLook {
   readonly letter: string;
@@ -16,9 +14,4 @@ export function lookAt(place: number): AlternativeLook {
   const known = Math.min(Math.max(0, place), dashes.length - 1);
   const letter = String.fromCharCode(65 + Math.max(0, place));
   return { letter, colour: `--alternative-${String.fromCharCode(97 + known)}`, dash: dashes[known]! };
-}
-
-/** The look of one alternative of a case. */
-export function lookOf({ alternatives }: CaseDocument, key: string): AlternativeLook {
-  return lookAt(alternatives.findIndex((alternative) => alternative.key === key));
 }
