@@ -97,7 +97,7 @@ async function followed(browser, address, prepare) {
   for (let batch = 0; batch <= 5; batch++) {
     const latencies = [];
     for (let count = 0; count < 40; count++) latencies.push(await measured(page, kind, () => move(count)));
-    // A move that snaps to where the dose is already draws nothing; most must draw. The first batch warms up.
+    // The first batch warms up.
     const drawn = latencies.filter(Number.isFinite);
     if (drawn.length < 30) throw new Error(`only ${drawn.length} of ${latencies.length} moves drew a curve`);
     if (batch > 0) batches.push(drawn);
@@ -125,7 +125,8 @@ async function byPointer(page) {
   const [startX, startY] = [x + width / 2, y + height / 2];
   await page.mouse.move(startX, startY);
   await page.mouse.down();
-  const at = (count) => startX + 12 + 40 * (1 + Math.sin(count / 3));
+  // Never twice to the same place: a move that snaps to where the dose is already has nothing to draw.
+  const at = (count) => startX + 16 + 15 * [0, 1, 2, 3, 2, 1][count % 6];
   return { kind: "pointermove", move: (count) => page.mouse.move(at(count), startY) };
 }
 
