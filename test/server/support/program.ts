@@ -1,6 +1,7 @@
 import { type ChildProcess, execFileSync, spawn } from "node:child_process";
 import { once } from "node:events";
 import { join } from "node:path";
+import { onTestFinished } from "vitest";
 import { projectFolder } from "../../../db/project-folder.ts";
 
 /** Compiles the server, so that what is run is what is delivered; takes a second when nothing changed. */
@@ -45,6 +46,8 @@ function launch(environment: Readonly<Record<string, string>>) {
     env: { PATH: process.env["PATH"] ?? "", PORT: "0", EBBLINE_LOG_LEVEL: "warn", ...environment },
     stdio: ["ignore", "pipe", "pipe"],
   });
+  // A test that fails must leave no server behind.
+  onTestFinished(() => void child.kill("SIGKILL"));
   const output = { stdout: "", stderr: "" };
   child.stderr.on("data", (chunk) => (output.stderr += String(chunk)));
   const ended = once(child, "close").then(([code, signal]) => ({
