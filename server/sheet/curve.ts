@@ -83,13 +83,11 @@ function drawLevels(doc: PDFKit.PDFDocument, { left, y }: Frame, ticks: readonly
       .moveTo(left - 3, y(tick))
       .lineTo(left, y(tick))
       .stroke();
-    doc
-      .fillColor(ink.text)
-      .text(`${formatQuantity(tick, "mg/L")} `, marginPt - 14, y(tick) - 4, {
-        width: leftPt + 9,
-        align: "right",
-        lineBreak: false,
-      });
+    doc.fillColor(ink.text).text(`${formatQuantity(tick, "mg/L")} `, marginPt - 14, y(tick) - 4, {
+      width: leftPt + 9,
+      align: "right",
+      lineBreak: false,
+    });
   }
 }
 

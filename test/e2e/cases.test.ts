@@ -93,13 +93,11 @@ describe("cases", () => {
         .setInputFiles({ name, mimeType: "application/json", buffer: Buffer.from(changed) });
       await page.getByRole("alert").filter({ hasText: says }).waitFor();
     }
-    await page
-      .getByLabel("Case file")
-      .setInputFiles({
-        name: "latin1.json",
-        mimeType: "application/json",
-        buffer: Buffer.from('{"a":"\xe9"}', "latin1"),
-      });
+    await page.getByLabel("Case file").setInputFiles({
+      name: "latin1.json",
+      mimeType: "application/json",
+      buffer: Buffer.from('{"a":"\xe9"}', "latin1"),
+    });
     await page.getByRole("alert").filter({ hasText: "must be encoded in UTF-8" }).waitFor();
     await page.context().close();
   });
