@@ -1,8 +1,8 @@
+import type { RegimenWithLatest } from "../../shared/contract/answers.ts";
 import type { Alternative } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { alternativeOf } from "../case/document-of-case.ts";
 import type { Failure } from "../http/answer.ts";
-import type { LatestOfRegimen } from "../http/cases-api.ts";
 import { appended, withoutAlternative } from "./alternative-edits.ts";
 
 /**
@@ -17,7 +17,7 @@ export async function retireAlternative(page: CasePage, { key, regimenId }: Alte
 }
 
 /** Puts a retired alternative back on the page, as its newest revision has it. */
-export async function bringBack(page: CasePage, regimen: LatestOfRegimen): Promise<Failure | undefined> {
+export async function bringBack(page: CasePage, regimen: RegimenWithLatest): Promise<Failure | undefined> {
   const failure = await changeRetired(page, regimen.id, "in use");
   if (failure === undefined) page.model.rewrite((document) => appended(document, alternativeOf(regimen)));
   return failure;
@@ -25,7 +25,7 @@ export async function bringBack(page: CasePage, regimen: LatestOfRegimen): Promi
 
 async function changeRetired(
   page: CasePage,
-  regimenId: LatestOfRegimen["id"],
+  regimenId: RegimenWithLatest["id"],
   state: "retired" | "in use",
 ): Promise<Failure | undefined> {
   const { changeRegimen } = await import("../http/cases-api.ts");

@@ -1,11 +1,11 @@
 import { computed, type ReadonlySignal, type Signal, signal } from "@preact/signals";
 import { cautionsForContent } from "../../shared/cautions/gather.ts";
 import { standingCaution } from "../../shared/cautions/standing.ts";
+import type { WholeCase } from "../../shared/contract/answers.ts";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { Caution } from "../../shared/contract/caution.ts";
 import { DomainError } from "../../shared/errors.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
-import type { WholeCase } from "../http/cases-api.ts";
 import { type Alternative, type CaseDocument, contentOf } from "./case-document.ts";
 import { type CaseModel, createCaseModel } from "./case-model.ts";
 import { documentOfCase } from "./document-of-case.ts";

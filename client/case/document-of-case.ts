@@ -1,4 +1,4 @@
-import type { WholeCase } from "../http/cases-api.ts";
+import type { WholeCase } from "../../shared/contract/answers.ts";
 import type { Alternative, CaseDocument } from "./case-document.ts";
 import { formOfSetting } from "./form-of-setting.ts";
 

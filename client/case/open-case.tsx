@@ -1,8 +1,8 @@
 import { useSignal } from "@preact/signals";
 import { useEffect } from "preact/hooks";
 import { standingCaution } from "../../shared/cautions/standing.ts";
+import type { WholeCase } from "../../shared/contract/answers.ts";
 import type { Failure } from "../http/answer.ts";
-import type { WholeCase } from "../http/cases-api.ts";
 import { dropKept, keptName, readKept } from "../keeping/kept-text.ts";
 import type { KeptWork } from "../keeping/unsaved-form.ts";
 import { UnsavedOffer } from "../keeping/unsaved-offer.tsx";

@@ -1,27 +1,18 @@
-import { z } from "zod";
+import type { z } from "zod";
+import { CaseAnswer, CaseList, RevisionAnswer, RevisionList, WholeCase } from "../../shared/contract/answers.ts";
 import {
-  Case,
   type CaseChange,
   type CaseDraft,
   Regimen,
   type RegimenChange,
   type RegimenDraft,
-  Revision,
   type RevisionDraft,
 } from "../../shared/contract/case.ts";
 import type { Answer } from "./answer.ts";
 import { ask } from "./ask.ts";
 import { doneWith, keyFor } from "./intention-keys.ts";
 
-const LatestOfRegimen = z.strictObject({ ...Regimen.shape, latest: Revision.exactOptional() });
-export type LatestOfRegimen = z.infer<typeof LatestOfRegimen>;
-const WholeCase = z.strictObject({ case: Case, regimens: z.array(LatestOfRegimen) });
-export type WholeCase = z.infer<typeof WholeCase>;
-
-const CaseList = z.strictObject({ cases: z.array(Case) });
-const RevisionList = z.strictObject({ revisions: z.array(Revision) });
-
-export function listCases(archived: "none" | "only"): Promise<Answer<z.infer<typeof CaseList>>> {
+export function listCases(archived: "none" | "only"): Promise<Answer<CaseList>> {
   const path = archived === "only" ? "/api/cases?archived=only" : "/api/cases";
   return ask({ method: "GET", path, reader: CaseList });
 }
@@ -30,17 +21,17 @@ export function loadCase(id: string): Promise<Answer<WholeCase>> {
   return ask({ method: "GET", path: `/api/cases/${id}`, reader: WholeCase });
 }
 
-export function makeCase(draft: z.input<typeof CaseDraft>): Promise<Answer<Case>> {
-  return write("POST", "/api/cases", draft, Case);
+export function makeCase(draft: z.input<typeof CaseDraft>): Promise<Answer<CaseAnswer>> {
+  return write("POST", "/api/cases", draft, CaseAnswer);
 }
 
-export function changeCase(id: string, change: z.input<typeof CaseChange>): Promise<Answer<Case>> {
-  return write("PATCH", `/api/cases/${id}`, change, Case);
+export function changeCase(id: string, change: z.input<typeof CaseChange>): Promise<Answer<CaseAnswer>> {
+  return write("PATCH", `/api/cases/${id}`, change, CaseAnswer);
 }
 
 /** @param file what was read from the file; the server checks every part of it, hashes included */
-export function uploadCase(file: unknown): Promise<Answer<Case>> {
-  return write("POST", "/api/case-files", file, Case);
+export function uploadCase(file: unknown): Promise<Answer<CaseAnswer>> {
+  return write("POST", "/api/case-files", file, CaseAnswer);
 }
 
 export function makeRegimen(caseId: string, draft: RegimenDraft): Promise<Answer<Regimen>> {
@@ -55,11 +46,11 @@ export function saveRevision(
   caseId: string,
   regimenId: string,
   draft: z.input<typeof RevisionDraft>,
-): Promise<Answer<Revision>> {
-  return write("POST", `/api/cases/${caseId}/regimens/${regimenId}/revisions`, draft, Revision);
+): Promise<Answer<RevisionAnswer>> {
+  return write("POST", `/api/cases/${caseId}/regimens/${regimenId}/revisions`, draft, RevisionAnswer);
 }
 
-export function listRevisions(caseId: string, regimenId: string): Promise<Answer<z.infer<typeof RevisionList>>> {
+export function listRevisions(caseId: string, regimenId: string): Promise<Answer<RevisionList>> {
   return ask({ method: "GET", path: `/api/cases/${caseId}/regimens/${regimenId}/revisions`, reader: RevisionList });
 }
 

@@ -1,5 +1,5 @@
+import type { WholeCase } from "../../shared/contract/answers.ts";
 import { sayInstant } from "../controls/moment-field.tsx";
-import type { WholeCase } from "../http/cases-api.ts";
 import type { KeptWork } from "./unsaved-form.ts";
 import "./unsaved-offer.css";
 

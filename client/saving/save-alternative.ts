@@ -1,8 +1,8 @@
-import type { CautionReason, RegimenContent, RegimenId, Revision } from "../../shared/contract/case.ts";
+import type { RegimenWithLatest, RevisionAnswer } from "../../shared/contract/answers.ts";
+import type { CautionReason, RegimenContent, RegimenId } from "../../shared/contract/case.ts";
 import type { Caution } from "../../shared/contract/caution.ts";
 import { type Alternative, contentOf, withAlternative } from "../case/case-document.ts";
 import { type CasePage, judge } from "../case/case-page.ts";
-import type { LatestOfRegimen } from "../http/cases-api.ts";
 import { isAbout } from "./is-about.ts";
 import { failedWith, type Outcome, saveDetails, staleWith } from "./save-details.ts";
 
@@ -11,7 +11,7 @@ export interface SaveWords {
   readonly preparedBy: string;
 }
 
-export type SaveOutcome = Outcome | { readonly kind: "saved"; readonly revision: Revision };
+export type SaveOutcome = Outcome | { readonly kind: "saved"; readonly revision: RevisionAnswer };
 
 /**
  * Saves the case's details where they changed, makes the alternative known to the server where it is new,
@@ -72,7 +72,7 @@ async function knownToServer(page: CasePage, key: string): Promise<Outcome> {
 }
 
 /** The page's alternative becomes what the server stored: what was typed meanwhile stays on top of it. */
-function takeIn(page: CasePage, key: string, sent: Alternative, revision: Revision): void {
+function takeIn(page: CasePage, key: string, sent: Alternative, revision: RevisionAnswer): void {
   const { content, number } = revision;
   page.model.rewrite((document) =>
     withAlternative(document, key, (each) => ({
@@ -86,7 +86,7 @@ function takeIn(page: CasePage, key: string, sent: Alternative, revision: Revisi
   if (known !== undefined) store(page, { ...known, latest: revision, latestRevisionNumber: number });
 }
 
-function store(page: CasePage, regimen: LatestOfRegimen): void {
+function store(page: CasePage, regimen: RegimenWithLatest): void {
   const { regimens, ...rest } = page.stored.peek();
   const known = regimens.some(({ id }: { id: RegimenId }) => id === regimen.id);
   page.stored.value = {

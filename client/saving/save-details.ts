@@ -1,6 +1,6 @@
+import type { WholeCase } from "../../shared/contract/answers.ts";
 import { type CasePage, haveDetailsChanged } from "../case/case-page.ts";
 import type { Failure } from "../http/answer.ts";
-import type { WholeCase } from "../http/cases-api.ts";
 
 /** Somebody saved in between: what the server has now, to be looked at before anything is replaced. */
 export interface Stale {

@@ -1,20 +1,26 @@
 import { z } from "zod";
 import {
-  Case,
+  CaseAnswer,
+  CaseList,
+  RegimenList,
+  RevisionAnswer,
+  RevisionList,
+  WholeCase,
+} from "../../shared/contract/answers.ts";
+import {
   CaseChange,
   CaseDraft,
   CaseFile,
   Regimen,
   RegimenChange,
   RegimenDraft,
-  Revision,
   RevisionDraft,
 } from "../../shared/contract/case.ts";
 import { PredictionRequest, PredictionResponse } from "../../shared/contract/prediction.ts";
 import { SteadyStateRequest, SteadyStateResponse } from "../../shared/contract/steady-state.ts";
 import { CaseListQuery } from "../routes/case-routes.ts";
 import { SheetQuery } from "../routes/revision-routes.ts";
-import { CaseList, Health, RegimenList, RevisionList, WholeCase } from "./answers.ts";
+import { Health } from "./answers.ts";
 import type { Operation } from "./operation.ts";
 
 const ok = (description: string, schema: z.ZodType) => ({ status: 200, description, schema }) as const;
@@ -56,7 +62,7 @@ export const operations: readonly Operation[] = [
     summary: "Make a case",
     description: "Enter no names and no identifiers.",
     body: CaseDraft,
-    answer: made("The case", Case),
+    answer: made("The case", CaseAnswer),
     problems: [413, 415, 422],
   },
   {
@@ -72,7 +78,7 @@ export const operations: readonly Operation[] = [
     summary: "Change or archive a case",
     description: "Names the version it was made from; 409 if somebody saved in between.",
     body: CaseChange,
-    answer: ok("The case as it is now", Case),
+    answer: ok("The case as it is now", CaseAnswer),
     problems: [404, 409, 413, 415, 422],
   },
   {
@@ -90,7 +96,7 @@ export const operations: readonly Operation[] = [
     description:
       "At most 20 MB. Every hash is checked and every second opinion computed again; all of it is taken in or nothing.",
     body: CaseFile,
-    answer: made("The new case", Case),
+    answer: made("The new case", CaseAnswer),
     problems: [413, 415, 422],
   },
   {
@@ -131,14 +137,14 @@ export const operations: readonly Operation[] = [
     description:
       "Immutable and numbered. 409 if it is based on an older one than the newest; 422 if a caution that stops has no reason, or if two independent calculations do not agree.",
     body: RevisionDraft,
-    answer: made("The revision with its number, hash and second opinion", Revision),
+    answer: made("The revision with its number, hash, second opinion and cautions", RevisionAnswer),
     problems: [404, 409, 413, 415, 422],
   },
   {
     method: "get",
     path: "/revisions/{revisionId}",
     summary: "One revision",
-    answer: ok("The revision", Revision),
+    answer: ok("The revision", RevisionAnswer),
     problems: [404],
   },
   {

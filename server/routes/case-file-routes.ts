@@ -12,6 +12,7 @@ import { only } from "../methods.ts";
 import { readId } from "../read.ts";
 import { RequestError } from "../request-errors.ts";
 import { type Appraise, judgeContent } from "../revisions/judge-content.ts";
+import { withStanding } from "../with-cautions.ts";
 
 /** For all the second opinions of one file. */
 const mostMs = 60_000;
@@ -46,7 +47,7 @@ export function caseFileRoutes({ stores, clock, ids, appraise }: Needs): Router 
       const intention = intentionOf(request, clock());
       const answered = await stores.answers.find(intention, Case);
       const kept = answered ?? (await stores.wholeCases.add(intention, await newCase(readCaseFile(request.body))));
-      response.status(201).location(`/api/cases/${kept.id}`).json(kept);
+      response.status(201).location(`/api/cases/${kept.id}`).json(withStanding(kept));
     })
     .all(only("POST"));
   return router;

@@ -10,6 +10,7 @@ import { intentionOf } from "../intention.ts";
 import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { read, readId } from "../read.ts";
+import { revisionAnswer, withStanding } from "../with-cautions.ts";
 
 export const CaseListQuery = z.strictObject({
   archived: z.enum(["none", "only"], { error: 'must be "none" or "only"' }).default("none"),
@@ -27,7 +28,7 @@ export function caseRoutes({ stores: { cases, regimens, revisions }, clock, ids 
     .route("/cases")
     .get(async (request, response) => {
       const { archived } = read(CaseListQuery, request.query);
-      response.json({ cases: await cases.list(archived) });
+      response.json(withStanding({ cases: await cases.list(archived) }));
     })
     .post(jsonBody("usual"), async (request, response) => {
       const intention = intentionOf(request, clock());
@@ -43,7 +44,7 @@ export function caseRoutes({ stores: { cases, regimens, revisions }, clock, ids 
         changedAt: now,
       });
       const kept = await cases.add(intention, made);
-      response.status(201).location(`/api/cases/${kept.id}`).json(kept);
+      response.status(201).location(`/api/cases/${kept.id}`).json(withStanding(kept));
     })
     .all(only("GET", "POST"));
   router
@@ -55,14 +56,14 @@ export function caseRoutes({ stores: { cases, regimens, revisions }, clock, ids 
       const latest = new Map((await revisions.latestOfCase(id)).map((revision) => [revision.regimenId, revision]));
       const alternatives = (await regimens.listOfCase(id)).map((regimen) => {
         const newest = latest.get(regimen.id);
-        return newest === undefined ? regimen : { ...regimen, latest: newest };
+        return newest === undefined ? regimen : { ...regimen, latest: revisionAnswer(newest) };
       });
-      response.json({ case: found, regimens: alternatives });
+      response.json(withStanding({ case: found, regimens: alternatives }));
     })
     .patch(jsonBody("usual"), async (request, response) => {
       const intention = intentionOf(request, clock());
       const id = readId(CaseId, request.params.caseId, "case");
-      response.json(await cases.change(intention, id, read(CaseChange, request.body)));
+      response.json(withStanding(await cases.change(intention, id, read(CaseChange, request.body))));
     })
     .all(only("GET", "PATCH"));
   return router;

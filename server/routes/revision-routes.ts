@@ -11,6 +11,7 @@ import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
 import { read, readId } from "../read.ts";
 import { type Appraise, judgeContent } from "../revisions/judge-content.ts";
+import { revisionAnswer, withStanding } from "../with-cautions.ts";
 
 export const SheetQuery = z.strictObject({
   paper: z.enum(["A4", "Letter"], { error: 'must be "A4" or "Letter"' }).default("A4"),
@@ -53,19 +54,20 @@ export function revisionRoutes({
     .route("/cases/:caseId/regimens/:regimenId/revisions")
     .get(async (request, response) => {
       const regimen = await regimenAt(request.params);
-      response.json({ revisions: await revisions.listOfRegimen(regimen.id) });
+      const listed = (await revisions.listOfRegimen(regimen.id)).map(revisionAnswer);
+      response.json(withStanding({ revisions: listed }));
     })
     .post(jsonBody("usual"), async (request, response) => {
       const intention = intentionOf(request, clock());
       const answered = await answers.find(intention, Revision);
       const saved = answered ?? (await save(intention, request.params, request.body));
-      response.status(201).location(`/api/revisions/${saved.id}`).json(saved);
+      response.status(201).location(`/api/revisions/${saved.id}`).json(revisionAnswer(saved));
     })
     .all(only("GET", "POST"));
   router
     .route("/revisions/:revisionId")
     .get(async (request, response) => {
-      response.json(await revisionAt(request.params));
+      response.json(revisionAnswer(await revisionAt(request.params)));
     })
     .all(only("GET"));
   router

@@ -24,11 +24,10 @@ export const SteadyStateRequest = z
     const refuse = (path: (string | number)[], message: string) => context.addIssue({ code: "custom", path, message });
     request.doses.forEach((dose, index) => {
       if (dose.kind === "pump") {
-        if (dose.steps.at(-1)!.rateMgPerH !== 0 || dose.steps.at(-1)!.atH > request.cycleH)
-          refuse(
-            ["doses", index, "steps"],
-            `must end with a rate of 0 mg/h by the end of the cycle (${request.cycleH} h)`,
-          );
+        if (dose.steps.at(-1)!.rateMgPerH !== 0)
+          refuse(["doses", index, "steps"], "must end with a rate of 0 mg/h, so that the pump stops");
+        if (dose.steps[0]!.atH >= request.cycleH)
+          refuse(["doses", index, "steps", 0, "atH"], `must be before the end of the cycle (${request.cycleH} h)`);
       } else if (dose.atH >= request.cycleH)
         refuse(["doses", index, "atH"], `must be before the end of the cycle (${request.cycleH} h), got ${dose.atH} h`);
     });

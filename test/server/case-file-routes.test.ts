@@ -1,7 +1,8 @@
 import request from "supertest";
 import { describe, expect, test } from "vitest";
 import { contentHashOf } from "../../db/seal.ts";
-import { CaseFile, Revision } from "../../shared/contract/case.ts";
+import { RevisionAnswer } from "../../shared/contract/answers.ts";
+import { CaseFile } from "../../shared/contract/case.ts";
 import { makeApp, makeRevision, write } from "./support/make-app.ts";
 import { draft } from "./support/samples.ts";
 
@@ -27,7 +28,7 @@ describe("a case file", () => {
     const { body: list } = await request(app)
       .get(`/api/cases/${made.id}/regimens/${body.regimens[0].id}/revisions`)
       .expect(200);
-    const hashes = list.revisions.map((revision: unknown) => Revision.parse(revision).contentHash);
+    const hashes = list.revisions.map((revision: unknown) => RevisionAnswer.parse(revision).contentHash);
     expect(hashes.reverse()).toEqual(file.regimens[0]!.revisions.map(({ contentHash }) => contentHash));
     const { body: again } = await request(app).get(`/api/cases/${made.id}/file`).expect(200);
     expect({ ...again, exportedAt: "" }).toEqual({ ...file, exportedAt: "" });

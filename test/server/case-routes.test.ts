@@ -1,8 +1,8 @@
 import { randomUUID } from "node:crypto";
 import request from "supertest";
 import { describe, expect, test } from "vitest";
-import { WholeCase } from "../../server/openapi/answers.ts";
-import { Case } from "../../shared/contract/case.ts";
+import { CaseAnswer, WholeCase } from "../../shared/contract/answers.ts";
+import type { Case } from "../../shared/contract/case.ts";
 import { makeApp, makeCase, makeRevision, now, write } from "./support/make-app.ts";
 import { caseDraft, setting } from "./support/samples.ts";
 
@@ -10,7 +10,7 @@ describe("POST /api/cases", () => {
   test("makes a case and says where it is", async () => {
     const { app } = makeApp();
     const { body, headers } = await write(app, "post", "/api/cases", caseDraft).expect(201);
-    expect(Case.parse(body)).toMatchObject({
+    expect(CaseAnswer.parse(body)).toMatchObject({
       label: "Bed 4",
       version: 1,
       archived: false,

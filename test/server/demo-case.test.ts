@@ -1,7 +1,7 @@
 import request from "supertest";
 import { describe, expect, test } from "vitest";
 import { insertDemoCase } from "../../server/demo/demo-case.ts";
-import { WholeCase } from "../../server/openapi/answers.ts";
+import { WholeCase } from "../../shared/contract/answers.ts";
 import { givenDoses } from "../../shared/schedule/doses-given.ts";
 import { makeApp, now } from "./support/make-app.ts";
 

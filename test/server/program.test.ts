@@ -10,7 +10,8 @@ import { closeDatabase, openDatabase } from "../../db/open-database.ts";
 import { projectFolder } from "../../db/project-folder.ts";
 import type { jobRunner as JobRunner } from "../../server/jobs/job-runner.ts";
 import { appraise } from "../../server/revisions/appraise.ts";
-import { RegimenContent, Revision } from "../../shared/contract/case.ts";
+import { RevisionAnswer } from "../../shared/contract/answers.ts";
+import { RegimenContent, type Revision } from "../../shared/contract/case.ts";
 import { buildServer, type Program, runToItsEnd, startProgram } from "./support/program.ts";
 import { caseDraft, draft } from "./support/samples.ts";
 
@@ -42,7 +43,7 @@ async function makeRegimen(address: string): Promise<string> {
 
 async function revisionsOf(address: string, path: string): Promise<Revision[]> {
   const { revisions } = (await (await fetch(address + path)).json()) as { revisions: unknown[] };
-  return revisions.map((revision) => Revision.parse(revision));
+  return revisions.map((revision) => RevisionAnswer.parse(revision));
 }
 
 function expectWhole(file: string): void {

@@ -2,6 +2,7 @@ import { createHash, randomUUID } from "node:crypto";
 import request from "supertest";
 import { describe, expect, test } from "vitest";
 import { canonicalJson } from "../../db/seal.ts";
+import { RevisionAnswer } from "../../shared/contract/answers.ts";
 import { Revision } from "../../shared/contract/case.ts";
 import { makeApp, makeRegimen, makeRevision, now, write } from "./support/make-app.ts";
 import { content, draft, setting } from "./support/samples.ts";
@@ -19,7 +20,7 @@ const hugeDose = {
 describe("POST .../revisions", () => {
   test("saves a numbered revision with the hash of what it says and a second opinion", async () => {
     const { app } = makeApp();
-    const revision = Revision.parse(await makeRevision(app));
+    const revision = RevisionAnswer.parse(await makeRevision(app));
     const { number, createdAt, reason, preparedBy } = revision;
     expect({ number, createdAt, reason, preparedBy }).toEqual({
       number: 1,

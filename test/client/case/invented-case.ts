@@ -1,5 +1,6 @@
-import type { WholeCase } from "../../../client/http/cases-api.ts";
-import { Case, Regimen, type RegimenContent, Revision } from "../../../shared/contract/case.ts";
+import { standingCaution } from "../../../shared/cautions/standing.ts";
+import { RevisionAnswer, type WholeCase } from "../../../shared/contract/answers.ts";
+import { Case, Regimen, type RegimenContent } from "../../../shared/contract/case.ts";
 import { inventedContent } from "../../invented-content.ts";
 
 export const caseId = "00000000-0000-4000-8000-000000000001";
@@ -25,8 +26,8 @@ export function inventedCase(change: Partial<Case> = {}): Case {
 }
 
 /** An invented revision of the one alternative; its hash is of the right shape, not of the content. */
-export function inventedRevision(number: number, content: RegimenContent = inventedContent()): Revision {
-  return Revision.parse({
+export function inventedRevision(number: number, content: RegimenContent = inventedContent()): RevisionAnswer {
+  return RevisionAnswer.parse({
     id: `00000000-0000-4000-8000-0000000000${10 + number}`,
     caseId,
     regimenId,
@@ -37,6 +38,7 @@ export function inventedRevision(number: number, content: RegimenContent = inven
     content,
     contentHash: "0".repeat(64),
     secondOpinion: { largestDifferenceMgPerL: 0, atH: 0, largestLevelMgPerL: 12, relative: 0, points: 10 },
+    cautions: [standingCaution],
   });
 }
 
@@ -50,5 +52,5 @@ export function inventedWholeCase(): WholeCase {
     createdAt: "2026-03-02T07:00:00Z",
     latestRevisionNumber: 1,
   });
-  return { case: inventedCase(), regimens: [{ ...regimen, latest: inventedRevision(1) }] };
+  return { case: inventedCase(), regimens: [{ ...regimen, latest: inventedRevision(1) }], cautions: [standingCaution] };
 }

@@ -3,6 +3,7 @@ import { withNewAlternative } from "../../../client/alternatives/alternative-edi
 import { withAlternative, withSchedule } from "../../../client/case/case-document.ts";
 import { createCasePage, hasUnsaved, savedStateOf } from "../../../client/case/case-page.ts";
 import { saveAlternative } from "../../../client/saving/save-alternative.ts";
+import { standingCaution } from "../../../shared/cautions/standing.ts";
 import { inventedContent } from "../../invented-content.ts";
 import { caseId, inventedCase, inventedRevision, inventedWholeCase, regimenId } from "../case/invented-case.ts";
 import { problem, stubNetwork } from "./stub-server.ts";
@@ -106,7 +107,7 @@ describe("saveAlternative", () => {
     const page = createCasePage(inventedWholeCase());
     page.model.change("notes", (document) => ({ ...document, notes: "new" }));
     const asked = stubNetwork([
-      { status: 200, body: inventedCase({ version: 2, notes: "new" }) },
+      { status: 200, body: { ...inventedCase({ version: 2, notes: "new" }), cautions: [standingCaution] } },
       { status: 201, body: inventedRevision(2) },
     ]);
     await saveAlternative(page, regimenId, words);
