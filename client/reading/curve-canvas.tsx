@@ -2,6 +2,7 @@ import { effect, type ReadonlySignal, useSignal } from "@preact/signals";
 import { useEffect, useRef } from "preact/hooks";
 import type { CurvePicture } from "./curve-picture.ts";
 import type { LevelChart } from "./level-chart.ts";
+import { whenNear } from "./when-near.ts";
 import "./curve-canvas.css";
 
 interface CurveCanvasProps {
@@ -10,29 +11,33 @@ interface CurveCanvasProps {
   readonly label: string;
 }
 
-/** A canvas that always shows the newest picture. The chart library is loaded with the first one. */
+/** A canvas that always shows the newest picture. The chart library is loaded when one is about to be seen. */
 export function CurveCanvas({ picture, label }: CurveCanvasProps) {
   const canvas = useRef<HTMLCanvasElement>(null);
   const failed = useSignal(false);
   useEffect(() => {
+    const drawn = canvas.current;
+    if (drawn === null) return;
     let chart: LevelChart | undefined;
     let stop: (() => void) | undefined;
     let gone = false;
-    import("./level-chart.ts").then(
-      ({ createLevelChart }) => {
-        if (gone || canvas.current === null) return;
-        chart = createLevelChart(canvas.current);
-        const made = chart;
+    const draw = async () => {
+      try {
+        const { createLevelChart } = await import("./level-chart.ts");
+        if (gone) return;
+        const made = createLevelChart(drawn);
+        chart = made;
         stop = effect(() => {
           if (picture.value !== undefined) made.draw(picture.value);
         });
-      },
-      () => {
+      } catch {
         failed.value = true;
-      },
-    );
+      }
+    };
+    const wait = whenNear(drawn, () => void draw());
     return () => {
       gone = true;
+      wait();
       stop?.();
       chart?.destroy();
     };
