@@ -38,6 +38,7 @@ describe("saving", () => {
     await changeAmount(page, "400");
     await save(page, "smaller doses", 2);
     await page.getByRole("button", { name: "Compare any two revisions" }).click();
+    await page.getByRole("heading", { name: "Two revisions compared" }).waitFor();
     const choices = await page.locator("#compare-before option").allInnerTexts();
     await page
       .locator("#compare-before")
@@ -52,14 +53,7 @@ describe("saving", () => {
     ]);
     await expectSound(page);
     await page.getByRole("button", { name: /^Take up .*again.* revision 1$/ }).click();
-    await expect
-      .poll(() =>
-        page
-          .getByText(/Order 1:/)
-          .first()
-          .innerText(),
-      )
-      .toMatch(/500\s*mg/);
+    await expect.poll(() => page.locator("#order-0").innerText()).toMatch(/500\s*mg/);
     await save(page, "back to the first", 3);
     expect(faults).toEqual([]);
     await page.context().close();
