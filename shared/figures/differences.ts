@@ -16,8 +16,10 @@ export function differencesOf(before: RegimenContent, after: RegimenContent): Di
   return [...new Set([...fresh.keys(), ...old.keys()])].flatMap((path) => {
     const one = old.get(path);
     const other = fresh.get(path);
-    const words = [one, other].map((fact) => (fact === undefined ? "" : withOrigin(fact)));
-    return words[0] === words[1] ? [] : [{ path, label: (other ?? one)!.label, before: words[0]!, after: words[1]! }];
+    const [said, saidThen] = [one, other].map((fact) => (fact === undefined ? "" : withOrigin(fact)));
+    if (said === saidThen && one?.whole === other?.whole) return [];
+    const after = said === saidThen ? `${saidThen}; other steps among those not shown` : saidThen!;
+    return [{ path, label: (other ?? one)!.label, before: said!, after }];
   });
 }
 

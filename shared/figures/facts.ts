@@ -1,6 +1,6 @@
 import type { RegimenContent } from "../contract/case.ts";
 import { limits } from "../contract/limits.ts";
-import type { DoseRecord, Order } from "../contract/schedule.ts";
+import type { DoseRecord, Give, Order } from "../contract/schedule.ts";
 import type { DatedEliminationChange, Origin, StatedKinetics } from "../contract/setting.ts";
 import { hoursBetween, sayClock } from "../schedule/clock.ts";
 import { sayGive, sayWhen } from "../schedule/say-order.ts";
@@ -13,6 +13,8 @@ export interface Fact {
   readonly words: string;
   /** Where it came from, where that is kept. */
   readonly origin?: string;
+  /** All of it, where `words` are cut: what tells two long pump logs apart. */
+  readonly whole?: string;
 }
 
 /** Digits with which an entered value is repeated: all that anybody types. */
@@ -72,11 +74,11 @@ export function scheduleFacts(content: RegimenContent): Fact[] {
       label: `Given: order ${numberOf(record.orderId)}, dose ${record.occurrence + 1}`,
       words: withNote(sayOutcome(record, timeZone), record.note),
     })),
-    ...schedule.extras.map(({ id, at, give, note }) => ({
-      path: `schedule/extras/${id}`,
-      label: "Extra dose given",
-      words: withNote(`${sayGive(give)}, ${sayClock(at, timeZone)}`, note),
-    })),
+    ...schedule.extras.map(({ id, at, give, note }) => {
+      const { words, ...rest } = giveWords(give);
+      const dated = withNote(`${words}, ${sayClock(at, timeZone)}`, note);
+      return { path: `schedule/extras/${id}`, label: "Extra dose given", words: dated, ...rest };
+    }),
     ...content.cautionReasons.map(({ code, about, text, reason }) => ({
       path: `cautionReasons/${code}/${about}`,
       label: "Reason given for a caution",
@@ -108,12 +110,8 @@ function kineticFacts(kinetics: StatedKinetics): Fact[] {
 
 function orderFacts(order: Order, number: number, timeZone: string): Fact[] {
   const path = `schedule/orders/${order.id}`;
-  const steps =
-    order.give.kind === "pump"
-      ? `: ${order.give.steps.map(({ afterH, rateMgPerH }) => `${entered(rateMgPerH, "mg per hour")} from ${entered(afterH, "h")}`).join(", ")}`
-      : "";
   return [
-    { path: `${path}/give`, label: `Order ${number}: what`, words: `${sayGive(order.give)}${steps}` },
+    { path: `${path}/give`, label: `Order ${number}: what`, ...giveWords(order.give) },
     { path: `${path}/when`, label: `Order ${number}: when`, words: sayWhen(order.when, timeZone) },
     ...(order.note === "" ? [] : [{ path: `${path}/note`, label: `Order ${number}: note`, words: order.note }]),
     ...order.exceptions.map((exception) => ({
@@ -122,6 +120,19 @@ function orderFacts(order: Order, number: number, timeZone: string): Fact[] {
       words: "skip" in exception ? "left out" : sayChange(exception, timeZone),
     })),
   ];
+}
+
+/** More steps of a pump than this are not read; how many there are is said. */
+const mostSteps = 40;
+
+function giveWords(give: Give): Pick<Fact, "words" | "whole"> {
+  if (give.kind !== "pump") return { words: sayGive(give) };
+  const steps = give.steps.map(
+    ({ afterH, rateMgPerH }) => `${entered(rateMgPerH, "mg per hour")} from ${entered(afterH, "h")}`,
+  );
+  const rest = steps.length - mostSteps;
+  const shown = `${sayGive(give)}: ${steps.slice(0, mostSteps).join(", ")}`;
+  return rest > 0 ? { words: `${shown}, and ${rest} more steps`, whole: steps.join(", ") } : { words: shown };
 }
 
 function sayOutcome({ outcome }: DoseRecord, timeZone: string): string {

@@ -44,4 +44,23 @@ describe("differencesOf", () => {
     });
     expect(differencesOf(inventedContent(), noted)).toHaveLength(1);
   });
+
+  test("tells two long pump logs apart, also where the steps that differ are not read out", () => {
+    const log = (lastRate: number) => ({
+      kind: "pump" as const,
+      steps: [
+        ...Array.from({ length: 60 }, (_, index) => ({ afterH: index / 4, rateMgPerH: index === 59 ? lastRate : 20 })),
+        { afterH: 15, rateMgPerH: 0 },
+      ],
+    });
+    const ordered = (rate: number) => inventedContent({ schedule: { orders: [{ ...everyEight, give: log(rate) }] } });
+    const extra = (rate: number) =>
+      inventedContent({ schedule: { extras: [{ id: "x", at: "2026-03-02T12:00:00Z", give: log(rate) }] } });
+    expect(differencesOf(ordered(20), ordered(19))).toMatchObject([{ label: "Order 1: what" }]);
+    expect(differencesOf(ordered(20), ordered(19))[0]!.after).toContain(
+      "and 21 more steps; other steps among those not shown",
+    );
+    expect(differencesOf(extra(20), extra(19))).toMatchObject([{ label: "Extra dose given" }]);
+    expect(differencesOf(extra(20), extra(20))).toEqual([]);
+  });
 });
