@@ -36,7 +36,7 @@ export function writeChecking(paper: Paper, revision: Revision): void {
   table(
     paper,
     [
-      { title: "Signature", share: 2.2 },
+      { title: "Who", share: 2.2 },
       { title: "Name and role", share: 3.2 },
       { title: "Signature", share: 2.8 },
       { title: "Date and 24-hour time", share: 2.2 },
