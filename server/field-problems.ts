@@ -18,16 +18,22 @@ function problemsOf(issue: Issue, above: readonly PropertyKey[], body: unknown):
       pointer: pointerTo([...path, key.slice(0, 100)]),
       detail: "is not a known field",
     }));
-  if (issue.code === "invalid_union" && issue.errors.length > 0)
-    return nearest(issue.errors).flatMap((inner) => problemsOf(inner, path, body));
-  return [{ pointer: pointerTo(path), detail: `${issue.message}${got(issue, valueAt(body, path))}` }];
+  if (issue.code === "invalid_union") {
+    const inner = nearest(issue.errors);
+    if (inner !== undefined) return inner.flatMap((each) => problemsOf(each, path, body));
+  }
+  return [{ pointer: pointerTo(path), detail: detailOf(issue, valueAt(body, path)) }];
 }
 
-/** Of the shapes a value might have had, the one it misses by least. */
-function nearest(branches: readonly (readonly Issue[])[]): readonly Issue[] {
-  const miss = (branch: readonly Issue[]) =>
-    branch.reduce((total, issue) => total + (issue.code === "unrecognized_keys" ? issue.keys.length : 1), 0);
-  return branches.reduce((best, branch) => (miss(branch) < miss(best) ? branch : best));
+/** Of the shapes a value might have had, the one it misses by least; none where two are as near. */
+function nearest(branches: readonly (readonly Issue[])[]): readonly Issue[] | undefined {
+  const [best, next] = branches.map((branch) => ({ branch, miss: missOf(branch) })).sort((a, b) => a.miss - b.miss);
+  return best === undefined || best.miss === next?.miss ? undefined : best.branch;
+}
+
+/** A field that a shape does not know speaks against it more than one with a bad value. */
+function missOf(branch: readonly Issue[]): number {
+  return branch.reduce((total, issue) => total + (issue.code === "unrecognized_keys" ? 1.5 * issue.keys.length : 1), 0);
 }
 
 function valueAt(body: unknown, path: readonly PropertyKey[]): unknown {
@@ -40,11 +46,24 @@ function valueAt(body: unknown, path: readonly PropertyKey[]): unknown {
   );
 }
 
-/** The value that came, unless the message has it already or it is too long to help. */
-function got(issue: Issue, value: unknown): string {
-  if (/\b(got|received)\b/.test(issue.message)) return "";
-  if (value === undefined) return issue.code === "invalid_type" || issue.code === "invalid_union" ? ", is missing" : "";
-  if (typeof value === "object" && value !== null) return "";
+/** What is allowed, and the value that came, unless the message has it already. */
+function detailOf(issue: Issue, value: unknown): string {
+  const { code, message } = issue;
+  if (/\bgot\b/.test(message)) return message;
+  if (value !== undefined) return `${message}${got(issue, value)}`;
+  return code === "invalid_type" || code === "invalid_union" || code === "invalid_value"
+    ? `is missing: ${message}`
+    : message;
+}
+
+/** A long value helps nobody, and its length does only where that is what is wrong. */
+function got({ code }: Issue, value: unknown): string {
+  const isCounted = code === "too_big" || code === "too_small";
+  if (Array.isArray(value)) return isCounted ? `, got ${value.length}` : code === "invalid_type" ? ", got a list" : "";
+  if (typeof value === "object" && value !== null) return code === "invalid_type" ? ", got an object" : "";
+  // JSON has no infinity, but 1e999 is read as one.
+  if (typeof value === "number" && !Number.isFinite(value)) return ", got a number too large to hold";
   const text = JSON.stringify(value);
-  return text.length > 60 ? "" : `, got ${text}`;
+  if (text.length <= 60) return `, got ${text}`;
+  return isCounted && typeof value === "string" ? `, got ${value.length}` : "";
 }

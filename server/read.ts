@@ -2,6 +2,7 @@ import type { z } from "zod";
 import { NotFoundError } from "../db/store-errors.ts";
 import { fieldProblems } from "./field-problems.ts";
 import { RequestError } from "./request-errors.ts";
+import { sayIssue } from "./say-issue.ts";
 
 /**
  * Something from outside, as its contract has it.
@@ -9,7 +10,7 @@ import { RequestError } from "./request-errors.ts";
  * @throws {RequestError} naming each bad field, its value and what is allowed
  */
 export function read<Schema extends z.ZodType>(schema: Schema, value: unknown): z.output<Schema> {
-  const parsed = schema.safeParse(value);
+  const parsed = schema.safeParse(value, { error: sayIssue });
   if (parsed.success) return parsed.data;
   const errors = fieldProblems(parsed.error, value);
   throw new RequestError(

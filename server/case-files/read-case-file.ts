@@ -2,8 +2,10 @@ import { z } from "zod";
 import { contentHashOf } from "../../db/seal.ts";
 import { CaseFile } from "../../shared/contract/case.ts";
 import { counts } from "../../shared/contract/limits.ts";
+import { fieldProblems } from "../field-problems.ts";
 import { read } from "../read.ts";
 import { type FieldProblem, pointerTo, RequestError } from "../request-errors.ts";
+import { sayIssue } from "../say-issue.ts";
 
 const Heading = z.looseObject({ format: CaseFile.shape.format, formatVersion: CaseFile.shape.formatVersion });
 
@@ -15,9 +17,9 @@ const Heading = z.looseObject({ format: CaseFile.shape.format, formatVersion: Ca
  */
 export function readCaseFile(body: unknown): CaseFile {
   // Format and version first: what a later version looks like inside says nothing to the reader.
-  const heading = Heading.safeParse(body);
+  const heading = Heading.safeParse(body, { error: sayIssue });
   if (!heading.success) {
-    const errors = heading.error.issues.map(({ path, message }) => ({ pointer: pointerTo(path), detail: message }));
+    const errors = fieldProblems(heading.error, body);
     throw new RequestError("case-file", "only a case file of version 1 can be read", { errors });
   }
   const file = read(CaseFile, body);

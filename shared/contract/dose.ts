@@ -25,8 +25,8 @@ const Pump = z.strictObject({
   kind: z.literal("pump"),
   steps: z
     .array(PumpStep)
-    .min(1)
-    .max(counts.pumpSteps)
+    .min(1, { error: "must hold at least one step", abort: true })
+    .max(counts.pumpSteps, { error: `must hold at most ${counts.pumpSteps} steps` })
     .superRefine((steps, context) => {
       const late = steps.findIndex((step, index) => index > 0 && !(step.atH > steps[index - 1]!.atH));
       if (late > 0)
@@ -47,13 +47,19 @@ export type Dose = z.infer<typeof Dose>;
  * span (a dialysis session). Added clearances may overlap; they add up on whatever holds at the time.
  */
 export const EliminationChange = z
-  .union([
-    z.strictObject({ fromH: AtH, eliminationRatePerH: quantity("changedRatePerH") }),
-    z.strictObject({ fromH: AtH, clearanceLPerH: quantity("changedClearanceLPerH") }),
-    z
-      .strictObject({ fromH: AtH, toH: AtH, addedClearanceLPerH: quantity("addedClearanceLPerH") })
-      .refine((span) => span.toH > span.fromH, { path: ["toH"], error: "must be later than fromH" }),
-  ])
+  .union(
+    [
+      z.strictObject({ fromH: AtH, eliminationRatePerH: quantity("changedRatePerH") }),
+      z.strictObject({ fromH: AtH, clearanceLPerH: quantity("changedClearanceLPerH") }),
+      z
+        .strictObject({ fromH: AtH, toH: AtH, addedClearanceLPerH: quantity("addedClearanceLPerH") })
+        .refine((span) => span.toH > span.fromH, { path: ["toH"], error: "must be later than fromH" }),
+    ],
+    {
+      error:
+        "must be an object of one kind: fromH with eliminationRatePerH, fromH with clearanceLPerH, or fromH and toH with addedClearanceLPerH",
+    },
+  )
   .meta({ id: "EliminationChange" });
 export type EliminationChange = z.infer<typeof EliminationChange>;
 

@@ -3,7 +3,7 @@ import { Caution } from "./caution.ts";
 import { Dose, EliminationChange, RangeMgPerL } from "./dose.ts";
 import { counts } from "./limits.ts";
 import { Parameters } from "./parameters.ts";
-import { AtH, quantity } from "./quantity.ts";
+import { AtH, quantity, SampleEveryH } from "./quantity.ts";
 
 const Window = z
   .strictObject({ fromH: AtH, toH: AtH })
@@ -17,10 +17,7 @@ export const PredictionRequest = z
     startConcentrationMgPerL: quantity("concentrationMgPerL").default(0),
     doses: z.array(Dose).max(counts.doses, { error: `must hold at most ${counts.doses} doses` }),
     horizonH: quantity("horizonH"),
-    sampleEveryH: z
-      .number()
-      .min(1 / 60, { error: "must be at least 1 minute (0.0166667 h)" })
-      .exactOptional(),
+    sampleEveryH: SampleEveryH.exactOptional(),
     sampleTimesH: z.array(AtH).min(1).max(counts.sampleTimes).exactOptional(),
     window: Window.exactOptional(),
     rangeMgPerL: RangeMgPerL.exactOptional(),

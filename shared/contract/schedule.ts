@@ -18,8 +18,8 @@ const GivePump = z.strictObject({
   /** Hours after the order's time; the last rate must be 0, so that the log says when the pump stopped. */
   steps: z
     .array(z.strictObject({ afterH: z.number().min(0).max(17_568), rateMgPerH: quantity("rateMgPerH") }))
-    .min(2, { error: "must hold at least two steps: a rate and a stop" })
-    .max(counts.pumpSteps)
+    .min(2, { error: "must hold at least two steps: a rate and a stop", abort: true })
+    .max(counts.pumpSteps, { error: `must hold at most ${counts.pumpSteps} steps` })
     .superRefine((steps, context) => {
       const late = steps.findIndex((step, index) => index > 0 && !(step.afterH > steps[index - 1]!.afterH));
       if (late > 0)

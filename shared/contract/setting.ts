@@ -46,12 +46,17 @@ export const DatedEliminationChange = z
       ...changeCommon,
       clearanceLPerH: quantity("changedClearanceLPerH"),
     }),
-    z.strictObject({
-      kind: z.literal("added-clearance"),
-      ...changeCommon,
-      until: Instant,
-      addedClearanceLPerH: quantity("addedClearanceLPerH"),
-    }),
+    z
+      .strictObject({
+        kind: z.literal("added-clearance"),
+        ...changeCommon,
+        until: Instant,
+        addedClearanceLPerH: quantity("addedClearanceLPerH"),
+      })
+      .refine(({ from, until }) => Date.parse(until) > Date.parse(from), {
+        path: ["until"],
+        error: "must be later than from",
+      }),
   ])
   .meta({ id: "DatedEliminationChange" });
 export type DatedEliminationChange = z.infer<typeof DatedEliminationChange>;

@@ -4,7 +4,7 @@ import { Dose, EliminationChange, RangeMgPerL } from "./dose.ts";
 import { counts } from "./limits.ts";
 import { Parameters } from "./parameters.ts";
 import { Exposure } from "./prediction.ts";
-import { quantity } from "./quantity.ts";
+import { quantity, SampleEveryH } from "./quantity.ts";
 
 /** Doses of one cycle, atH from 0 up to cycleH, repeated for ever. Anything may overlap the cycle's end. */
 export const SteadyStateRequest = z
@@ -13,12 +13,12 @@ export const SteadyStateRequest = z
     /** Changes of elimination inside the cycle, repeated with it (a dialysis session every 48 h). */
     eliminationChanges: z.array(EliminationChange).max(counts.eliminationChanges).default([]),
     cycleH: quantity("intervalH"),
-    doses: z.array(Dose).min(1).max(counts.doses),
+    doses: z
+      .array(Dose)
+      .min(1, { error: "must hold at least one dose" })
+      .max(counts.doses, { error: `must hold at most ${counts.doses} doses` }),
     rangeMgPerL: RangeMgPerL.exactOptional(),
-    sampleEveryH: z
-      .number()
-      .min(1 / 60)
-      .exactOptional(),
+    sampleEveryH: SampleEveryH.exactOptional(),
   })
   .superRefine((request, context) => {
     const refuse = (path: (string | number)[], message: string) => context.addIssue({ code: "custom", path, message });
@@ -30,6 +30,18 @@ export const SteadyStateRequest = z
           refuse(["doses", index, "steps", 0, "atH"], `must be before the end of the cycle (${request.cycleH} h)`);
       } else if (dose.atH >= request.cycleH)
         refuse(["doses", index, "atH"], `must be before the end of the cycle (${request.cycleH} h), got ${dose.atH} h`);
+    });
+    request.eliminationChanges.forEach((change, index) => {
+      if (change.fromH >= request.cycleH)
+        refuse(
+          ["eliminationChanges", index, "fromH"],
+          `must be before the end of the cycle (${request.cycleH} h), got ${change.fromH} h`,
+        );
+      if ("toH" in change && change.toH > request.cycleH)
+        refuse(
+          ["eliminationChanges", index, "toH"],
+          `must be at most the end of the cycle (${request.cycleH} h), got ${change.toH} h: state what runs on as a span from 0 h`,
+        );
     });
     if (request.parameters.absorptionRatePerH === undefined && request.doses.some((dose) => dose.kind === "absorbed"))
       refuse(["parameters", "absorptionRatePerH"], "is needed because a dose is absorbed");

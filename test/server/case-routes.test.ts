@@ -41,6 +41,30 @@ describe("POST /api/cases", () => {
     ]);
   });
 
+  test("refuses a span of added clearance that ends before it begins, in whatever offsets", async () => {
+    const session = {
+      id: "s",
+      kind: "added-clearance",
+      from: "2026-05-04T14:00:00+01:00",
+      addedClearanceLPerH: 3.5,
+      origin: { kind: "typed" },
+    };
+    const { app } = makeApp();
+    const made = (until: string) =>
+      write(app, "post", "/api/cases", {
+        ...caseDraft,
+        setting: { ...setting, eliminationChanges: [{ ...session, until }] },
+      });
+    const { body } = await made("2026-05-04T13:00:00Z").expect(422);
+    expect(body.errors).toEqual([
+      {
+        pointer: "#/setting/eliminationChanges/0/until",
+        detail: 'must be later than from, got "2026-05-04T13:00:00Z"',
+      },
+    ]);
+    await made("2026-05-04T13:30:00Z").expect(201);
+  });
+
   test.for(["a\u0000b", "a\ud800"])(
     "refuses text that the database would not give back as it came (%j)",
     async (label) => {

@@ -2,6 +2,7 @@ import request from "supertest";
 import { describe, expect, test } from "vitest";
 import { answerWriter } from "../../server/grid-text.ts";
 import { refuseNaN } from "../../server/refuse-nan.ts";
+import type { FieldProblem } from "../../server/request-errors.ts";
 import { PredictionRequest, PredictionResponse } from "../../shared/contract/prediction.ts";
 import { SteadyStateResponse } from "../../shared/contract/steady-state.ts";
 import { predict } from "../../shared/kinetics/predict.ts";
@@ -107,8 +108,55 @@ describe("POST /api/predictions", () => {
     const missing = await post("/api/predictions", without).expect(422);
     expect(missing.body.errors[0]).toEqual({
       pointer: "#/horizonH",
-      detail: "must be a number, must be from 0.1 to 17568 h, is missing",
+      detail: "is missing: must be a number from 0.1 to 17568 h",
     });
+  });
+
+  test.for([
+    {
+      change: { doses: [{ kind: "pump", steps: [] }] },
+      said: "#/doses/0/steps: must hold at least one step, got 0",
+    },
+    {
+      change: { doses: 7 },
+      said: "#/doses: must be a list, got 7",
+    },
+    {
+      change: { doses: [{ kind: "Bolus", atH: 0, amountMg: 1 }] },
+      said: '#/doses/0/kind: must be "bolus", "infusion", "absorbed" or "pump", got "Bolus"',
+    },
+    {
+      change: { window: "all" },
+      said: '#/window: must be an object, got "all"',
+    },
+    {
+      change: { sampleTimesH: undefined, sampleEveryH: "0.1" },
+      said: '#/sampleEveryH: must be a number of hours, got "0.1"',
+    },
+    {
+      change: { eliminationChanges: [{ fromH: 1 }] },
+      said: "#/eliminationChanges/0: must be an object of one kind: fromH with eliminationRatePerH, fromH with clearanceLPerH, or fromH and toH with addedClearanceLPerH",
+    },
+    {
+      change: { eliminationChanges: [{ fromH: 1, clearanceLPerH: "4" }] },
+      said: '#/eliminationChanges/0/clearanceLPerH: must be a number from 0 to 5000 L/h, got "4"',
+    },
+    {
+      change: { eliminationChanges: [{ fromH: 1, toH: 4 }] },
+      said: "#/eliminationChanges/0/addedClearanceLPerH: is missing: must be a number from 0.00001 to 5000 L/h",
+    },
+  ])("says $said", async ({ change, said }) => {
+    const { body } = await post("/api/predictions", { ...prediction, ...change }).expect(422);
+    expect(body.errors.map(({ pointer, detail }: FieldProblem) => `${pointer}: ${detail}`)).toEqual([said]);
+  });
+
+  test("says of 1e999 that it is no number it can hold, not that it is null", async () => {
+    const { body } = await request(makeApp().app)
+      .post("/api/predictions")
+      .set("Content-Type", "application/json")
+      .send(JSON.stringify(prediction).replace('"horizonH":24', '"horizonH":1e999'))
+      .expect(422);
+    expect(body.errors[0].detail).toBe("must be a number from 0.1 to 17568 h, got a number too large to hold");
   });
 
   test.for(["1e999", "NaN", "-Infinity"])("refuses the number %s", async (text) => {

@@ -55,7 +55,7 @@ describe("PredictionRequest", () => {
     [
       "an amount that is not a number",
       dose({ amountMg: Number.NaN }),
-      "doses/0/amountMg: must be a number, must be from 0.000001 to 1000000 mg",
+      "doses/0/amountMg: must be a number from 0.000001 to 1000000 mg",
     ],
     ["an infinite amount", dose({ amountMg: Number.POSITIVE_INFINITY }), /^doses\/0\/amountMg: must be/],
     ["an amount as text", dose({ amountMg: "500" }), /^doses\/0\/amountMg: must be a number/],

@@ -47,6 +47,11 @@ describe("Schedule", () => {
       when({ kind: "every", from, intervalH: 0, end: { kind: "open" } }),
       "orders/0/when/intervalH: must be from 0.25 to 2160 h",
     ],
+    [
+      "a pump log without steps",
+      { orders: [{ ...order, give: { kind: "pump", steps: [] } }] },
+      "orders/0/give/steps: must hold at least two steps: a rate and a stop",
+    ],
     ["a count of zero", when({ ...order.when, end: { kind: "count", doses: 0 } }), /^orders\/0\/when\/end\/doses: /],
     [
       "a time without an offset",

@@ -27,7 +27,7 @@ describe("SteadyStateRequest", () => {
   test.for<[string, object, string | RegExp]>([
     ["no dose", { doses: [] }, /^doses: /],
     ["a cycle of no length", { cycleH: 0 }, "cycleH: must be from 0.25 to 2160 h"],
-    ["a cycle that is not a number", { cycleH: Number.NaN }, "cycleH: must be a number, must be from 0.25 to 2160 h"],
+    ["a cycle that is not a number", { cycleH: Number.NaN }, "cycleH: must be a number from 0.25 to 2160 h"],
     ["a dose at the cycle's end", at(12), "doses/0/atH: must be before the end of the cycle (12 h), got 12 h"],
     [
       "a dose before the cycle",
@@ -38,6 +38,19 @@ describe("SteadyStateRequest", () => {
       "a pump left running",
       { doses: [{ kind: "pump", steps: [{ atH: 0, rateMgPerH: 5 }] }] },
       /^doses\/0\/steps: must end with a rate of 0 mg\/h/,
+    ],
+    // An empty log once threw a TypeError where its last step was looked at.
+    ["an empty pump log", { doses: [{ kind: "pump", steps: [] }] }, "doses/0/steps: must hold at least one step"],
+    // Changes past the end were once dropped without a word: 4 h of dialysis counted as 2 h.
+    [
+      "a change of elimination after the cycle",
+      { eliminationChanges: [{ fromH: 12, eliminationRatePerH: 0.2 }] },
+      "eliminationChanges/0/fromH: must be before the end of the cycle (12 h), got 12 h",
+    ],
+    [
+      "added clearance over the cycle's end",
+      { eliminationChanges: [{ fromH: 10, toH: 14, addedClearanceLPerH: 3.5 }] },
+      "eliminationChanges/0/toH: must be at most the end of the cycle (12 h), got 14 h: state what runs on as a span from 0 h",
     ],
     [
       "an absorbed dose without ka",
