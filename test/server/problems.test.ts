@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import { Agent, request as send } from "node:http";
 import request from "supertest";
 import { describe, expect, test } from "vitest";
@@ -124,6 +125,33 @@ describe("hostile JSON", () => {
 
   test("that writes a forbidden name with an escape is refused all the same", async () => {
     expectProblem(await json(makeApp().app, '{"\\u005f_proto__":{"polluted":true}}'), 422);
+  });
+
+  test.for([
+    { text: '{"horizonH":24,"doses":[],"horizonH":48}', pointers: ["#/horizonH"] },
+    { text: '{"doses":[{"atH":0},{"amountMg":50,"atH":0,"\\u0061mountMg":500}]}', pointers: ["#/doses/1/amountMg"] },
+    { text: '{"a":{"x":"\\"x\\":1,","x":[{"y":1},{"y":{},"y":[]}]}}', pointers: ["#/a/x", "#/a/x/1/y"] },
+  ])("that gives a field twice is refused: $text", async ({ text, pointers }) => {
+    const { errors } = expectProblem(await json(makeApp().app, text), 422);
+    expect(errors!.map(({ pointer }) => pointer)).toEqual(pointers);
+    expect(errors![0]!.detail).toBe("is given more than once in one object");
+  });
+
+  test("may name a field in several objects, and have colons in its text", async () => {
+    const { errors } = expectProblem(await json(makeApp().app, '[{"a":"b:c"},{"a":"\\":{"}]'), 422);
+    expect(errors!.map(({ pointer }) => pointer)).toEqual(["#"]);
+  });
+
+  test("that is not UTF-8 is refused, never kept with other signs in it", async () => {
+    const { app } = makeApp();
+    const { port } = await listening(app);
+    const answer = await fetch(`http://127.0.0.1:${port}/api/cases`, {
+      method: "POST",
+      headers: { "Content-Type": "application/json", "Idempotency-Key": randomUUID() },
+      body: Buffer.from(JSON.stringify({ ...caseDraft, label: "M\u00fcller ward" }), "latin1"),
+    });
+    expect(await answer.json()).toMatchObject({ status: 400, detail: "the body is not UTF-8 text" });
+    expect((await request(app).get("/api/cases")).body.cases).toEqual([]);
   });
 
   test.for([25, 40_000, 1_000_000])("of %i levels is refused", async (depth) => {
