@@ -1,9 +1,10 @@
-import { limits } from "../contract/limits.ts";
+import { counts, limits } from "../contract/limits.ts";
 import type { Instant } from "../contract/schedule.ts";
 import { readCsv } from "../csv/read-csv.ts";
 import { DomainError } from "../errors.ts";
 import { readNumber } from "../units/read-number.ts";
 import { hoursBetween, toInstant } from "./clock.ts";
+import { headingProblem, isHeading } from "./pump-log-heading.ts";
 
 export interface PumpLogStep {
   readonly afterH: number;
@@ -28,6 +29,11 @@ interface Row {
 
 const clockPattern = /^\d{4}-\d\d-\d\d[T ]\d\d:\d\d(:\d\d)?$/;
 const [, highestRate] = limits.rateMgPerH.hard;
+const [, longestH] = limits.horizonH.hard;
+/** Ten thousand lines of date and rate are a third of this. */
+const mostCharacters = 1_000_000;
+/** More tells nobody more. */
+const mostProblems = 50;
 
 /**
  * A pump log from a pasted table or a CSV file: a time and a rate in mg/h on each line, the rate holding
@@ -35,21 +41,19 @@ const [, highestRate] = limits.rateMgPerH.hard;
  * one way throughout. Everything doubtful is refused with its line; nothing is guessed.
  */
 export function readPumpLog(source: string, setting: PumpLogSetting): PumpLog {
+  if (source.length > mostCharacters)
+    return refused(1, `the log is longer than ${counts.pumpSteps} lines can be: give the part that this order needs`);
   const table = readCsv(source);
-  if (!table.ok) return { ok: false, problems: [{ line: table.line, detail: `the log ${table.detail}` }] };
-  const [head] = table.rows;
-  if (head === undefined)
-    return { ok: false, problems: [{ line: 1, detail: "the log is empty: give lines of time and rate" }] };
-  const headed = !/\d/.test(head.cells[0] ?? "");
-  const heading = headed ? head.cells.join(" ").toLowerCase() : "";
-  if (/ml|microg|µg|mcg/.test(heading))
-    return {
-      ok: false,
-      problems: [
-        { line: head.line, detail: `the heading names another unit (${head.cells.join(", ")}): rates must be in mg/h` },
-      ],
-    };
-  return readRows(headed ? table.rows.slice(1) : table.rows, setting);
+  if (!table.ok) return refused(table.line, `the log ${table.detail}`);
+  const [head, ...rest] = table.rows;
+  if (head === undefined) return refused(1, "the log is empty: give lines of time and rate");
+  if (!isHeading(head.cells)) return readRows(table.rows, setting);
+  const problem = headingProblem(head.cells);
+  return problem === undefined ? readRows(rest, setting) : refused(head.line, problem);
+}
+
+function refused(line: number, detail: string): PumpLog {
+  return { ok: false, problems: [{ line, detail }] };
 }
 
 function readRows(rows: readonly { line: number; cells: readonly string[] }[], setting: PumpLogSetting): PumpLog {
@@ -58,6 +62,7 @@ function readRows(rows: readonly { line: number; cells: readonly string[] }[], s
   const steps: PumpLogStep[] = [];
   const byClock = clockPattern.test(rows[0]?.cells[0] ?? "");
   for (const { line, cells } of rows) {
+    if (problems.length >= mostProblems) break;
     const row = rowOf(line, cells);
     if (typeof row === "string") problems.push({ line, detail: row });
     else {
@@ -68,21 +73,15 @@ function readRows(rows: readonly { line: number; cells: readonly string[] }[], s
   }
   if (problems.length > 0) return { ok: false, problems };
   const lastLine = rows.at(-1)?.line ?? 1;
-  if (steps.length < 2)
-    return {
-      ok: false,
-      problems: [{ line: lastLine, detail: "the log must hold at least two lines: a rate and a stop" }],
-    };
-  if (steps.at(-1)!.rateMgPerH !== 0)
-    return {
-      ok: false,
-      problems: [
-        {
-          line: lastLine,
-          detail: `the last rate must be 0 mg/h, so that the log says when the pump stopped, got ${steps.at(-1)!.rateMgPerH}`,
-        },
-      ],
-    };
+  if (steps.length < 2) return refused(lastLine, "the log must hold at least two lines: a rate and a stop");
+  if (steps.length > counts.pumpSteps)
+    return refused(lastLine, `the log must hold at most ${counts.pumpSteps} lines, got ${steps.length}`);
+  const lastRate = steps.at(-1)!.rateMgPerH;
+  if (lastRate !== 0)
+    return refused(
+      lastLine,
+      `the last rate must be 0 mg/h, so that the log says when the pump stopped, got ${lastRate}`,
+    );
   return { ok: true, steps, notes };
 }
 
@@ -106,6 +105,7 @@ function stepOf(
   const afterH = byClock ? clockHours(row, setting, notes) : plainHours(row);
   if (typeof afterH === "string") return afterH;
   if (!(afterH >= 0)) return `the time ${row.time} is before the order's time`;
+  if (!(afterH <= longestH)) return `the time ${row.time} is more than ${longestH} h after the order's time`;
   if (beforeH !== undefined && !(afterH > beforeH))
     return `the time ${row.time} is not later than the line before it: the log is out of order`;
   const rate = readNumber(row.rate);
@@ -131,7 +131,7 @@ function clockHours({ line, time }: Row, { timeZone, startsAt }: PumpLogSetting,
       notes.push(`line ${line}: ${time} does not exist that day; it is moved later by the gap`);
     return hoursBetween(startsAt, instant);
   } catch (error) {
-    if (error instanceof DomainError) return error.message;
+    if (error instanceof DomainError) return `the ${error.message}`;
     throw error;
   }
 }

@@ -37,7 +37,20 @@ describe("readPumpLog", () => {
     ["0,50\n3,-1\n8,0", 2, "the rate must be from 0 to 1000000 mg/h, got -1"],
     ["0,50\n3,abc\n8,0", 2, "the rate must be a plain number, such as 0.5 or 12, got abc"],
     ["-1,50\n8,0", 1, "the time -1 is before the order's time"],
-    ["time,rate in mL/h\n0,50\n8,0", 1, "the heading names another unit (time, rate in mL/h): rates must be in mg/h"],
+    [
+      "time,rate in mL/h\n0,50\n8,0",
+      1,
+      "the heading names another unit (time, rate in mL/h): times must be in hours and rates in mg/h",
+    ],
+    // A first line without a time was once taken for a heading and left out.
+    [",50\n3,40\n8,0", 1, "has no time"],
+    ["\u0660,50\n3,40\n8,0", 1, "the time must be a plain number, such as 0.5 or 12, got \u0660"],
+    ["0,50\n20000,0", 2, "the time 20000 is more than 17568 h after the order's time"],
+    [
+      "2026-02-30 08:00,50\n2026-03-02 16:00,0",
+      1,
+      "the time must be a date and 24-hour time such as 2026-03-29 08:00, from the year 1975 to 2199, got 2026-02-30 08:00",
+    ],
     [
       "0,50\n2026-03-02 10:00,0",
       2,
@@ -57,6 +70,58 @@ describe("readPumpLog", () => {
     if (!read.ok) expect(read.problems.map((problem) => problem.detail)).toContain(detail);
     if (!read.ok && source !== '0,50\n"3,40\n8,0')
       expect(read.problems.some((problem) => problem.line === line)).toBe(true);
+  });
+
+  // Each of these was once read as mg/h and hours.
+  test.for([
+    "time,rate (mg/min)",
+    "time,g/h",
+    "time,ng/h",
+    "time,\u03bcg/h",
+    "time,\u00b5g/h",
+    "time,mg/kg/h",
+    "time,units/h",
+    "minutes,rate (mg/h)",
+    "time (s),rate",
+    "day,mg/h",
+    "time,pump rate in percent",
+  ])("refuses the units of the heading %j", (heading) => {
+    expect(readPumpLog(`${heading}\n0,50\n8,0`, setting)).toEqual({
+      ok: false,
+      problems: [
+        {
+          line: 1,
+          detail: `the heading names another unit (${heading.replace(",", ", ")}): times must be in hours and rates in mg/h`,
+        },
+      ],
+    });
+  });
+
+  test.for([
+    ["rate (mg/h),time (h)", "the heading names the rate first (rate (mg/h), time (h)): the time must come first"],
+    ["time (h),dose (mg)", "the heading names an amount (time (h), dose (mg)): rates must be in mg/h"],
+  ] as const)("refuses the columns of the heading %j", ([heading, detail]) => {
+    expect(readPumpLog(`${heading}\n0,50\n8,0`, setting)).toEqual({ ok: false, problems: [{ line: 1, detail }] });
+  });
+
+  test.for(["Time,Rate", "hours;mg per hour", "elapsed hours\trate in mg/hr", "Zeit;Rate (mg/h)", "t,R"])(
+    "takes the heading %j",
+    (heading) => {
+      const sign = /[;\t,]/.exec(heading)![0];
+      expect(readPumpLog(`${heading}\n0${sign}50\n8${sign}0`, setting).ok).toBe(true);
+    },
+  );
+
+  test("holds no more lines than an order can, and says no more than helps", () => {
+    const lines = (count: number) => Array.from({ length: count }, (_, index) => `${index},1`).join("\n");
+    expect(readPumpLog(`${lines(9_999)}\n9999,0`, setting).ok).toBe(true);
+    expect(readPumpLog(`${lines(10_000)}\n10000,0`, setting)).toEqual({
+      ok: false,
+      problems: [{ line: 10_001, detail: "the log must hold at most 10000 lines, got 10001" }],
+    });
+    const bad = readPumpLog("0,x\n".repeat(10_000), setting);
+    expect(bad.ok ? [] : bad.problems).toHaveLength(50);
+    expect(readPumpLog(" ".repeat(1_000_001), setting)).toMatchObject({ ok: false });
   });
 
   test("says which lines it had to resolve on the night the clock goes back", () => {
