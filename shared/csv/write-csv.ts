@@ -1,5 +1,5 @@
 import { stringify } from "csv-stringify/browser/esm/sync";
-import { guarded } from "./guarded.ts";
+import { needsGuard } from "./guarded.ts";
 
 /**
  * A table as CSV (RFC 4180: CRLF, quotes where needed) that a spreadsheet takes as data: a text that it
@@ -9,13 +9,14 @@ import { guarded } from "./guarded.ts";
  * @param rows    one cell per column
  */
 export function writeCsv(columns: readonly string[], rows: readonly (readonly (string | number)[])[]): string {
-  return stringify([[...columns], ...rows.map((row) => row.map(apart))], {
-    escape_formulas: true,
+  return stringify([columns.map(safe), ...rows.map((row) => row.map(safe))], {
     record_delimiter: "windows",
+    // A spreadsheet also breaks a line at a lone CR or LF, and in half of Europe a field at a semicolon:
+    // what comes after an unquoted one would be a cell of its own, and could be a formula.
+    quoted_match: /[;\t\r\n]/,
   });
 }
 
-/** A text that begins as a guarded one does gets an apostrophe of its own, so that reading takes off just the guard. */
-function apart(cell: string | number): string | number {
-  return typeof cell === "string" && guarded.test(cell) ? `'${cell}` : cell;
+function safe(cell: string | number): string | number {
+  return typeof cell === "string" && needsGuard.test(cell) ? `'${cell}` : cell;
 }

@@ -10,10 +10,20 @@ describe("writeCsv", () => {
     );
   });
 
-  test.for(["=1+1", "+1", "-1", "@x", "\t=1", "\r=1", "＝1"])("takes the formula out of the text %j", (text) => {
-    const [, cell] = writeCsv(["a"], [[text]]).split("\r\n");
-    expect(cell!.replace(/^"/, "").startsWith("'")).toBe(true);
-  });
+  test.for(["=1+1", "+1", "-1", "@x", "\t=1", "\r=1", "\n=1", "＝1"])(
+    "takes the formula out of the text %j",
+    (text) => {
+      const [, cell] = writeCsv(["a"], [[text]]).split("\r\n");
+      expect(cell!.replace(/^"/, "").startsWith("'")).toBe(true);
+    },
+  );
+
+  test.for(["a\n=1", "a\r=1", "a\t=1", "a;=1"])(
+    "keeps %j in one cell, whatever a spreadsheet takes for the end of a line or a field",
+    (text) => {
+      expect(writeCsv([text], [])).toBe(`"${text}"\r\n`);
+    },
+  );
 
   test("leaves numbers as they are, below 0 too", () => {
     expect(writeCsv(["a", "b"], [[-5, 1e-7]])).toBe("a,b\r\n-5,1e-7\r\n");
