@@ -1,6 +1,6 @@
 import type { Dose } from "../contract/dose.ts";
 import type { Give } from "../contract/schedule.ts";
-import { type Figure, isValue } from "./figure.ts";
+import type { Figure, Value } from "./figure.ts";
 import { momentAt } from "./moment.ts";
 import type { Prepared } from "./prepared.ts";
 
@@ -13,11 +13,12 @@ export function amountGivenMg(give: Give): number {
   }, 0);
 }
 
-/** Highest rate of one dose, mg per hour; undefined where the whole amount enters at once or by absorption. */
-export function highestRateMgPerH(give: Give): number | undefined {
-  if (give.kind === "infusion") return give.amountMg / give.durationH;
-  if (give.kind === "pump") return Math.max(...give.steps.map(({ rateMgPerH }) => rateMgPerH));
-  return undefined;
+/** Highest rate of one dose and how long after its time; undefined where it enters at once or by absorption. */
+export function highestRateIn(give: Give): { readonly mgPerH: number; readonly afterH: number } | undefined {
+  if (give.kind === "infusion") return { mgPerH: give.amountMg / give.durationH, afterH: 0 };
+  if (give.kind !== "pump") return undefined;
+  const step = give.steps.reduce((best, next) => (next.rateMgPerH > best.rateMgPerH ? next : best));
+  return { mgPerH: step.rateMgPerH, afterH: step.afterH };
 }
 
 /** All amounts given over the plan, as ordered. */
@@ -34,26 +35,27 @@ export function amountPerDay({ settled }: Prepared): Figure {
 }
 
 export function highestAmount(prepared: Prepared): Figure {
-  return highest(prepared, "no dose is given", ({ give }) => ({ value: amountGivenMg(give), unit: "mg" }));
+  return highest(prepared, "no dose is given", ({ give, atH }) => ({ value: amountGivenMg(give), unit: "mg", atH }));
 }
 
 export function highestRate(prepared: Prepared): Figure {
-  return highest(prepared, "nothing is given at a rate", ({ give }) => {
-    const rate = highestRateMgPerH(give);
-    return rate === undefined ? undefined : { value: rate, unit: "mg per hour" };
+  return highest(prepared, "nothing is given at a rate", ({ give, atH }) => {
+    const rate = highestRateIn(give);
+    return rate && { value: rate.mgPerH, unit: "mg per hour", atH: atH + rate.afterH };
   });
 }
 
 type Scheduled = Prepared["doses"][number];
 
-function highest({ content, doses }: Prepared, absent: string, read: (dose: Scheduled) => Figure | undefined): Figure {
-  let best: Figure = { absent };
+type Timed = Value & { readonly atH: number };
+
+function highest({ content, doses }: Prepared, absent: string, read: (dose: Scheduled) => Timed | undefined): Figure {
+  let best: Timed | undefined;
   for (const dose of doses) {
     const figure = read(dose);
-    if (figure === undefined || !isValue(figure)) continue;
-    if (!isValue(best) || figure.value > best.value) best = { ...figure, ...momentAt(content, dose.atH) };
+    if (figure !== undefined && (best === undefined || figure.value > best.value)) best = figure;
   }
-  return best;
+  return best === undefined ? { absent } : { ...best, ...momentAt(content, best.atH) };
 }
 
 function cycleDoseMg(dose: Dose): number {

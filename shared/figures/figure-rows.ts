@@ -17,9 +17,15 @@ export const figureGroups: readonly FigureGroup[] = [
   {
     title: "Peaks and troughs",
     rows: [
+      { name: "highest", label: "Highest level", meaning: "anywhere in the plan" },
+      { name: "lowest", label: "Lowest level", meaning: "anywhere in the plan after the first peak" },
       { name: "firstPeak", label: "First peak", meaning: "highest level between the first dose and the next" },
       { name: "firstTrough", label: "First trough", meaning: "lowest level after that peak, before the next dose" },
-      { name: "lastPeak", label: "Last peak", meaning: "highest level of the last complete interval in the plan" },
+      {
+        name: "lastPeak",
+        label: "Last peak",
+        meaning: "highest level after the last dose whose interval the plan holds",
+      },
       { name: "lastTrough", label: "Last trough", meaning: "lowest level after that peak in the same interval" },
       {
         name: "steadyPeak",
@@ -95,7 +101,8 @@ export const figureGroups: readonly FigureGroup[] = [
       {
         name: "accumulationRatio",
         label: "Accumulation ratio",
-        meaning: "area of a settled cycle over that of the first cycle from nothing",
+        meaning:
+          "area of a settled cycle over that of the first cycle from nothing; A in the arithmetic compares levels",
       },
       { name: "swing", label: "Swing", meaning: "peak minus trough, divided by the trough, at steady state" },
       {
@@ -110,7 +117,7 @@ export const figureGroups: readonly FigureGroup[] = [
     rows: [
       { name: "amountPerDay", label: "Amount per day", meaning: "of the repeating orders, as ordered" },
       { name: "totalAmount", label: "Amount in the plan", meaning: "everything given within the plan, as ordered" },
-      { name: "highestAmount", label: "Highest single amount", meaning: "as ordered" },
+      { name: "highestAmount", label: "Highest single amount", meaning: "as ordered; a whole pump log is one" },
       { name: "highestRate", label: "Highest rate", meaning: "of a single infusion or pump" },
     ],
   },

@@ -2,11 +2,12 @@ import type { RegimenContent } from "../contract/case.ts";
 import { exposureOf } from "../kinetics/exposure.ts";
 import { amountPerDay, highestAmount, highestRate, totalAmount } from "./amounts.ts";
 import { areaOver } from "./area-over.ts";
-import type { Figure, FigureUnit } from "./figure.ts";
+import { type Figure, type FigureUnit, isValue } from "./figure.ts";
 import { firstEntryH } from "./first-entry.ts";
 import { firstInterval, type Interval, lastInterval } from "./intervals.ts";
 import { momentAt } from "./moment.ts";
 import { type Prepared, prepare, type Which } from "./prepared.ts";
+import { sayInCycle } from "./settled-clock.ts";
 import { settledFrom } from "./settling.ts";
 
 /**
@@ -15,6 +16,10 @@ import { settledFrom } from "./settling.ts";
  * lowest level after the peak of its interval, so that an empty start does not count as one.
  */
 export interface Figures {
+  /** Over the whole plan. */
+  readonly highest: Figure;
+  /** From the first peak to the end of the plan. */
+  readonly lowest: Figure;
   readonly firstPeak: Figure;
   readonly firstTrough: Figure;
   readonly lastPeak: Figure;
@@ -76,6 +81,7 @@ export function figuresOfPrepared(
     nothing ?? "only one dose is given, so there is no later interval",
   );
   return {
+    ...furthest(prepared, first.peak),
     firstPeak: first.peak,
     firstTrough: first.trough,
     lastPeak: last.peak,
@@ -90,6 +96,19 @@ export function figuresOfPrepared(
     firstInRange: firstInRange(content, prepared),
     timeTo90Percent: timeTo90Percent(prepared),
   };
+}
+
+/** The first rise is no trough, so the lowest level is looked for after the first peak. */
+function furthest({ content, made }: Prepared, firstPeak: Figure): Pick<Figures, "highest" | "lowest"> {
+  const level = ({ mgPerL, atH }: { mgPerL: number; atH: number }): Figure => ({
+    value: mgPerL,
+    unit: "mg/L",
+    ...momentAt(content, atH),
+  });
+  const highest = level(exposureOf(made, { fromH: 0, toH: made.horizonH }).peak);
+  const fromH = isValue(firstPeak) ? (firstPeak.atH ?? 0) : 0;
+  if (!(fromH < made.horizonH)) return { highest, lowest: { absent: "the level still rises when the plan ends" } };
+  return { highest, lowest: level(exposureOf(made, { fromH, toH: made.horizonH }).trough) };
 }
 
 function extremes(
@@ -172,21 +191,20 @@ type SteadyFigures = Pick<
 >;
 
 function steadyFigures(prepared: Prepared): SteadyFigures {
-  const { content, settled } = prepared;
+  const { settled } = prepared;
   if (settled.kind === "none") return allAbsent(settled.why);
-  const { steady, startsAtH } = settled;
+  const { steady } = settled;
   const { exposure, cycleH } = steady;
   const inCycle = (value: number, atH: number): Figure => ({
     value,
     unit: "mg/L",
-    ...momentAt(content, startsAtH + atH),
-    note: "time of the first cycle; later cycles repeat it",
+    note: sayInCycle(prepared, settled, atH),
   });
   const plain = (value: number | undefined, unit: FigureUnit, absent: string): Figure =>
     value === undefined ? { absent } : { value, unit };
   return {
     steadyPeak: inCycle(exposure.peak.mgPerL, exposure.peak.atH),
-    steadyTrough: inCycle(exposure.trough.mgPerL, exposure.trough.atH),
+    steadyTrough: inCycle(exposure.trough.mgPerL, exposure.trough.atH === 0 ? cycleH : exposure.trough.atH),
     steadyAverage: { value: exposure.averageMgPerL, unit: "mg/L" },
     steadyArea24: { value: steady.auc24MgHPerL, unit: "mg·h/L" },
     steadyPercentWithin: plain(

@@ -1,3 +1,4 @@
+import type { ScheduledDose } from "../schedule/scheduled-dose.ts";
 import type { Prepared } from "./prepared.ts";
 
 /** From one dose to the next, in elapsed hours. */
@@ -21,16 +22,18 @@ export function firstInterval({ doses, course }: Prepared): Interval | undefined
 }
 
 /**
- * The last complete interval. The last dose opens one where the plan goes on long enough after it: as
- * long as the gap one cycle earlier, or, without a cycle, as the gap before it.
+ * The last complete interval. In a cycle the last dose opens one where the plan goes on long enough after
+ * it: as long as the gap one cycle earlier. Without a cycle nothing follows the last dose, so its interval
+ * is the rest of the plan.
  */
 export function lastInterval({ doses, course, settled }: Prepared): Interval | undefined {
   const starts = startsOf(doses);
   if (starts.length < 2) return undefined;
   const lastH = starts.at(-1)!;
   const beforeH = starts.at(-2)!;
-  const cycleH = settled.kind === "cycle" ? settled.steady.cycleH : undefined;
-  const gapH = (cycleH && gapAt(starts, lastH - cycleH)) ?? lastH - beforeH;
+  if (settled.kind === "none")
+    return { fromH: lastH, toH: course.horizonH, note: "to the end of the plan, as no dose follows" };
+  const gapH = gapAt(starts, lastH - settled.steady.cycleH) ?? lastH - beforeH;
   const closesAtH = lastH + gapH;
   // Rounding of clock times to hours must not lose the interval that ends with the plan.
   if (closesAtH <= course.horizonH + togetherH) return { fromH: lastH, toH: Math.min(closesAtH, course.horizonH) };
@@ -38,8 +41,14 @@ export function lastInterval({ doses, course, settled }: Prepared): Interval | u
 }
 
 function startsOf(doses: Prepared["doses"]): number[] {
-  const sorted = doses.map(({ atH }) => atH).sort((one, other) => one - other);
+  const sorted = doses.map(beginsAtH).sort((one, other) => one - other);
   return sorted.filter((atH, index) => index === 0 || atH - sorted[index - 1]! > togetherH);
+}
+
+/** A pump log may wait before it gives anything. */
+function beginsAtH({ atH, give }: ScheduledDose): number {
+  if (give.kind !== "pump") return atH;
+  return atH + (give.steps.find(({ rateMgPerH }) => rateMgPerH > 0)?.afterH ?? 0);
 }
 
 function gapAt(starts: readonly number[], atH: number): number | undefined {

@@ -26,6 +26,8 @@ const better: Readonly<Partial<Record<FigureName, "most" | "fewest" | "earliest"
 };
 
 const levels: readonly FigureName[] = [
+  "highest",
+  "lowest",
   "firstPeak",
   "firstTrough",
   "lastPeak",

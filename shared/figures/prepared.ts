@@ -1,4 +1,5 @@
 import type { RegimenContent } from "../contract/case.ts";
+import type { Instant } from "../contract/schedule.ts";
 import { DomainError } from "../errors.ts";
 import type { Course } from "../kinetics/course.ts";
 import { type SteadyState, steadyState } from "../kinetics/steady-state.ts";
@@ -12,7 +13,15 @@ export type Which = "planned" | "given";
 
 /** The repeating part of a schedule and the cycle it settles into, or why there is none. */
 export type Settled =
-  | { readonly kind: "cycle"; readonly startsAtH: number; readonly course: Course; readonly steady: SteadyState }
+  | {
+      readonly kind: "cycle";
+      readonly startsAt: Instant;
+      readonly startsAtH: number;
+      /** Clock times are among its orders, so it keeps the clock where daylight saving begins or ends. */
+      readonly keepsClock: boolean;
+      readonly course: Course;
+      readonly steady: SteadyState;
+    }
   | { readonly kind: "none"; readonly why: string };
 
 /** One alternative made ready to be read: its course, walked once, and its steady state. */
@@ -51,7 +60,11 @@ function settledOf(content: RegimenContent, course: Course): Settled {
   const startsAtH = (Date.parse(cycle.startsAt) - Date.parse(content.setting.plan.start)) / 3_600_000;
   return solved(() => ({
     kind: "cycle",
+    startsAt: cycle.startsAt,
     startsAtH,
+    keepsClock: content.schedule.orders.some(
+      ({ id, when }) => when.kind === "clock-times" && cycle.orderIds.includes(id),
+    ),
     course: cycleCourse,
     steady: steadyState(cycleCourse, content.setting.rangeMgPerL),
   }));

@@ -1,5 +1,6 @@
 import { levelBefore } from "./level-before.ts";
 import type { Prepared } from "./prepared.ts";
+import { cycleStartH } from "./settled-clock.ts";
 
 /** Within this part of the steady-state level a cycle counts as settled. */
 export const settledWithin = 0.1;
@@ -10,13 +11,14 @@ export const settledWithin = 0.1;
  *
  * @returns its number (1 is the first cycle) and start in hours; undefined where the plan ends first
  */
-export function settledFrom({ made, doses, settled }: Prepared): { cycle: number; atH: number } | undefined {
+export function settledFrom(prepared: Prepared): { cycle: number; atH: number } | undefined {
+  const { made, doses, settled } = prepared;
   if (settled.kind === "none") return undefined;
-  const { startsAtH, steady } = settled;
+  const { steady } = settled;
   const lastDoseH = doses.reduce((latest, { atH }) => Math.max(latest, atH), 0);
   let found: { cycle: number; atH: number } | undefined;
   for (let cycle = 1; ; cycle++) {
-    const atH = startsAtH + (cycle - 1) * steady.cycleH;
+    const atH = cycleStartH(prepared, settled, cycle - 1);
     if (atH > Math.min(lastDoseH, made.horizonH)) return found;
     const apart = Math.abs(levelBefore(made, atH) - steady.startMgPerL);
     if (apart > settledWithin * steady.startMgPerL) found = undefined;

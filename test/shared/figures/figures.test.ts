@@ -79,6 +79,76 @@ describe("figuresOf", () => {
     expect(figuresOf(late, { which: "planned" }).firstPeak).toMatchObject({ atH: 1 });
   });
 
+  test("finds the highest and lowest level of the plan where neither the first nor the last interval has it", () => {
+    const omitted = (occurrence: number) => ({ orderId: "o1", occurrence, outcome: { kind: "omitted" } }) as const;
+    const extra = { id: "x", at: "2026-03-03T08:00:00Z", give: { kind: "bolus", amountMg: 800 } } as const;
+    const found = figuresOf(
+      inventedContent({
+        setting: { plan, kinetics },
+        schedule: { records: [omitted(1), omitted(2)], extras: [extra] },
+      }),
+    );
+    const before = firstPeak * Math.exp(-23 * k);
+    expect(found.lowest).toMatchObject({ atH: 24 });
+    expect(numberOf("lowest", found)).toBeCloseTo(before, 9);
+    // 800 mg at once, then 500 mg over the hour that begins with it.
+    expect(found.highest).toMatchObject({ atH: 25 });
+    expect(numberOf("highest", found)).toBeCloseTo((before + 20) * Math.exp(-k) + firstPeak, 9);
+  });
+
+  test("lets the last interval run to the end of a plan without a cycle, from the first rate of a pump log", () => {
+    const steps = [
+      { afterH: 0, rateMgPerH: 0 },
+      { afterH: 10, rateMgPerH: 50 },
+      { afterH: 20, rateMgPerH: 0 },
+    ];
+    const orders = [
+      { id: "o1", give: { kind: "bolus" as const, amountMg: 100 }, when: { kind: "once" as const, at: plan.start } },
+      { id: "o2", give: { kind: "pump" as const, steps }, when: { kind: "once" as const, at: "2026-03-02T10:00:00Z" } },
+    ];
+    const found = figuresOf(inventedContent({ setting: { plan, kinetics }, schedule: { orders } }));
+    expect(found.firstTrough).toMatchObject({ atH: 12 });
+    expect(found.lastPeak).toMatchObject({ atH: 22, note: "to the end of the plan, as no dose follows" });
+    expect(numberOf("lastPeak", found)).toBeCloseTo(2.5 * Math.exp(-22 * k) + 10 * (1 - Math.exp(-10 * k)), 9);
+    expect(found.lastTrough).toMatchObject({ atH: 48 });
+    expect(found.highestRate).toMatchObject({ value: 50, atH: 12 });
+  });
+
+  test("says where in a settled cycle its peak and trough lie, not a date at which they are not reached", () => {
+    expect(figures.steadyPeak).not.toHaveProperty("at");
+    expect(figures.steadyPeak).toMatchObject({
+      note: "1\u00a0h into a settled cycle of 8\u00a0h, by the clock at 01:00, 09:00 and 17:00",
+    });
+    expect(figures.steadyTrough).toMatchObject({
+      note: "8\u00a0h into a settled cycle of 8\u00a0h, by the clock at 00:00, 08:00 and 16:00",
+    });
+  });
+
+  test.for([
+    { night: "spring", start: "2026-03-28T08:00:00Z", firstDose: "2026-03-28T13:30:00Z", settledH: 28.5 },
+    { night: "autumn", start: "2026-10-24T08:00:00+01:00", firstDose: "2026-10-24T13:30:00+01:00", settledH: 54.5 },
+  ])("keeps clock times over a night in $night, when the clock changes", ({ start, firstDose, settledH }) => {
+    const times = [{ time: "01:30" }, { time: "13:30", amountMg: 100 }];
+    const order = {
+      id: "o1",
+      give: { kind: "bolus" as const, amountMg: 500 },
+      when: { kind: "clock-times" as const, from: firstDose, times, end: { kind: "open" as const } },
+    };
+    const slower = { volumeL: stated(40), clearanceLPerH: stated(3.2) };
+    const found = figuresOf(
+      inventedContent({
+        timeZone: "Europe/London",
+        setting: { plan: { start, horizonH: 72 }, kinetics: slower },
+        schedule: { orders: [order] },
+      }),
+    );
+    expect(found.steadyPeak).toMatchObject({
+      note: "12\u00a0h into a settled cycle of 24\u00a0h, by the clock at 01:30",
+    });
+    // By hand: 12.5 e^(-0.08 x 11) + 2.5 e^(-0.08 x 23) = 5.58 of 6.04 mg/L after the short night; 4.76 after the long one.
+    expect(found.settledFrom).toMatchObject({ atH: settledH });
+  });
+
   test("says why a figure is absent instead of giving a number", () => {
     const nothing = figuresOf(inventedContent({ schedule: { orders: [] } }));
     expect(nothing.firstPeak).toEqual({ absent: "no dose is given" });
