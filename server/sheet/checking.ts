@@ -9,7 +9,7 @@ const quantities = [
   "Peak at steady state (mg/L)",
   "Trough at steady state (mg/L)",
   "Area over 24 h at steady state (mg·h/L)",
-  "Loading dose (mg)",
+  "Loading dose as a bolus, with no drug present (mg)",
   "Entries compared with their source",
 ];
 

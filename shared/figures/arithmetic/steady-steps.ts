@@ -11,7 +11,7 @@ const symbols =
   "A is the accumulation factor, P the length of the cycle, T the duration of an infusion, R its rate, u the hours since the dose began to reach the blood.";
 
 /** Accumulation, peak, trough, area, average, swing and loading doses of the settled cycle. */
-export function steadySection(hand: HandKinetics, settled: Settled): ArithmeticSection {
+export function steadySection(hand: HandKinetics, settled: Settled, startMgPerL: number): ArithmeticSection {
   const title = "Steady state";
   if (settled.kind === "none") return { title, note: `There is no steady state: ${settled.why}.`, steps: [] };
   const { course, steady } = settled;
@@ -33,7 +33,8 @@ export function steadySection(hand: HandKinetics, settled: Settled): ArithmeticS
   steps.push(...extremes.steps);
   if (extremes.peak !== undefined && extremes.trough !== undefined && steady.swing !== undefined)
     line(swingStep(extremes.peak, extremes.trough, 100 * steady.swing));
-  line(loadingForAverage(cycle, average));
+  line(loadingForAverage(cycle, average, 0));
+  if (startMgPerL > 0 && startMgPerL < average) line(loadingForAverage(cycle, average, startMgPerL));
   const start = loadingForCycle(cycle);
   if (start !== undefined) line(start);
   return { title, note: [symbols, extremes.note].filter(Boolean).join(" "), steps };
@@ -116,7 +117,7 @@ function extremeSteps(cycle: HandCycle, settled: Extract<Settled, { kind: "cycle
     peak.mgPerL,
   );
   const troughSteps = levelSteps(
-    `Trough at steady state, ${put(carried(trough.atH), "h")} into the cycle`,
+    `Trough at steady state, ${put(carried(trough.atH === 0 ? cycle.cycleH : trough.atH), "h")} into the cycle`,
     troughShares,
     trough.mgPerL,
   );
@@ -135,13 +136,17 @@ function swingStep(peak: number, trough: number, program: number): ArithmeticSte
   });
 }
 
-function loadingForAverage({ volumeL, course }: HandCycle, average: number): ArithmeticStep {
+/** @param presentMgPerL the level that is there already; 0 where the body is empty */
+function loadingForAverage({ volumeL, course }: HandCycle, average: number, presentMgPerL: number): ArithmeticStep {
+  const saltWords = course.saltFactor === 1 ? "" : " ÷ S";
   const salt = course.saltFactor === 1 ? "" : ` ÷ ${put(course.saltFactor, "")}`;
+  const present = put(presentMgPerL, "mg/L");
+  const title = "Loading dose that gives the average at once, as a bolus";
   return step({
-    title: "Loading dose that gives the average at once, as a bolus",
-    formula: `D = C average × V${course.saltFactor === 1 ? "" : " ÷ S"}`,
-    substituted: `${put(average, "mg/L")} × ${put(volumeL, "L")}${salt}`,
-    value: (average * volumeL) / course.saltFactor,
+    title: presentMgPerL > 0 ? `${title}, with ${present} present` : `${title}, with no drug present`,
+    formula: presentMgPerL > 0 ? `D = (C average − C present) × V${saltWords}` : `D = C average × V${saltWords}`,
+    substituted: `${presentMgPerL > 0 ? `(${put(average, "mg/L")} − ${present})` : put(average, "mg/L")} × ${put(volumeL, "L")}${salt}`,
+    value: ((average - presentMgPerL) * volumeL) / course.saltFactor,
     unit: "mg",
   });
 }
@@ -150,7 +155,8 @@ function loadingForAverage({ volumeL, course }: HandCycle, average: number): Ari
 function loadingForCycle({ course, accumulation }: HandCycle): ArithmeticStep | undefined {
   const [only, ...others] = course.doses;
   if (only === undefined || others.length > 0 || (only.kind !== "bolus" && only.kind !== "infusion")) return undefined;
-  const title = "Loading dose that starts at steady state, given like the others one cycle before them";
+  const title =
+    "Loading dose that starts at steady state, with no drug present, given like the others one cycle before them";
   const substituted = `${put(only.amountMg, "mg")} × ${put(accumulation, "")}`;
   return step({ title, formula: "D load = D × A", substituted, value: only.amountMg * accumulation, unit: "mg" });
 }

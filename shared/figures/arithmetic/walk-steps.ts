@@ -14,7 +14,7 @@ const mostStretches = 24;
 const negligible = 1e-6;
 
 const howToRead =
-  "From one event to the next: C is the level in mg/L, t the hours between, R the rate running (as drug), G the amount waiting to be absorbed. Each line starts from the line before.";
+  "From one event to the next: C is the level in mg/L, t the hours between, R the rate running, G the amount waiting to be absorbed. Each line starts from the line before.";
 
 /**
  * The plan from its start, stretch by stretch, as given: every level that a colleague needs to follow a
@@ -42,7 +42,15 @@ export function walkSection(hand: HandKinetics, prepared: Prepared): ArithmeticS
     state = line.state;
   }
   const cut = made.count > shown ? ` The first ${shown} of ${made.count} stretches are shown.` : "";
-  return { title, note: `${howToRead}${cut}`, steps };
+  return { title, note: `${howToRead}${sayEffective(course)}${cut}`, steps };
+}
+
+/** How the amounts of the lines come from those ordered. */
+function sayEffective({ saltFactor, bioavailability, doses }: Prepared["course"]): string {
+  const salt = saltFactor === 1 ? [] : [`S = ${put(saltFactor, "")}`];
+  const absorbed = bioavailability !== 1 && doses.some(({ kind }) => kind === "absorbed");
+  const factors = [...salt, ...(absorbed ? [`F = ${put(bioavailability, "")} where it is absorbed`] : [])];
+  return factors.length === 0 ? "" : ` Amounts and rates are those ordered times ${factors.join(", and times ")}.`;
 }
 
 interface HandState {

@@ -23,7 +23,7 @@ export function workedArithmeticOf(prepared: Prepared): ArithmeticSection[] {
   return [
     hand.section,
     ...(changes ? [changes] : []),
-    steadySection(hand, prepared.settled),
+    steadySection(hand, prepared.settled, prepared.course.startConcentrationMgPerL),
     walkSection(hand, prepared),
   ];
 }

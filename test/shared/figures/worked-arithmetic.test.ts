@@ -144,7 +144,25 @@ describe("workedArithmetic", () => {
     expect(valueIn("Trough at steady state")).toBeCloseTo(peak * Math.exp(-0.875), 3);
     expect(valueIn("Area over 24 h")).toBe(300);
     expect(valueIn("Accumulation factor")).toBeCloseTo(1 / (1 - Math.exp(-1)), 4);
-    expect(valueIn("Loading dose that starts at steady state")).toBeCloseTo(500 / (1 - Math.exp(-1)), 2);
+    expect(valueIn("Loading dose that starts at steady state, with no drug present")).toBeCloseTo(
+      500 / (1 - Math.exp(-1)),
+      2,
+    );
+  });
+
+  test("counts a level that is already there off the loading dose, and says what an amount is times", () => {
+    const salted = { ...kinetics, saltFactor: stated(0.9) };
+    const start = { valueMgPerL: 2, origin: typed };
+    const sections = workedArithmetic(
+      inventedContent({ setting: { plan, kinetics: salted, startConcentration: start } }),
+    );
+    const loading = sections.flatMap(({ steps }) => steps).filter(({ title }) => title.includes("gives the average"));
+    // 500 mg every 8 h, S 0.9, CL 5 L/h: average 0.9 x 500 / 40 = 11.25 mg/L. By hand: 11.25 x 40 / 0.9, 9.25 x 40 / 0.9.
+    expect(loading.map(({ title, value }) => [title, value])).toEqual([
+      ["Loading dose that gives the average at once, as a bolus, with no drug present", 500],
+      ["Loading dose that gives the average at once, as a bolus, with 2\u00a0mg/L present", 411.111],
+    ]);
+    expect(sections.at(-1)!.note).toContain("Amounts and rates are those ordered times S = 0.9.");
   });
 
   test("says why there is no steady state", () => {
