@@ -33,6 +33,9 @@ export const looks: readonly Look[] = [
   { name: "1400 px, dark", options: { viewport: { width: 1400, height: 900 }, colorScheme: "dark" } },
 ];
 
+/** The widest in the light and the narrowest in the dark, for whole tasks. */
+export const twoLooks = [looks[2]!, looks[1]!] as const;
+
 /** A page of its own (storage included) that fails the test on any error the page throws or logs. */
 export async function openPage(
   browser: Browser,

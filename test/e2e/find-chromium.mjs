@@ -27,6 +27,8 @@ export function findChromium() {
 export function ensureChromium(say) {
   const found = findChromium();
   if (found !== undefined) return found;
+  if (process.env["CHROMIUM"])
+    throw new Error(`The variable CHROMIUM names ${process.env["CHROMIUM"]}, which is not there.\n${howTo}`);
   const mayInstall = process.getuid?.() === 0 && spawnSync("apt-get", ["--version"]).status === 0;
   if (!mayInstall) throw new Error(howTo);
   say("installing Chromium with apt-get, for the browser tests");

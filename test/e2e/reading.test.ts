@@ -2,7 +2,7 @@ import { readFileSync } from "node:fs";
 import { parse } from "csv-parse/sync";
 import type { Browser, Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage } from "./browser.ts";
+import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
 import { type RunningServer, startServer } from "./running-server.ts";
 import { addInfusion, curveDrawn, field, fillSetting, levelIn, makeCase, openDemo, tableText } from "./steps.ts";
 
@@ -25,49 +25,55 @@ async function csvFrom(page: Page, button: string): Promise<string[][]> {
 }
 
 describe("reading a case", () => {
-  test("what remains adds up to the level, in the table, the picture and the file", async () => {
-    const { page, faults } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
-    await openDemo(page);
-    await field(page, "Time of the cursor").fill("2026-03-28 10:00");
-    await page.keyboard.press("Enter");
-    const table = page.getByRole("region", { name: "Parts of the level" }).getByRole("table");
-    await expect.poll(async () => (await tableText(table)).length).toBeGreaterThan(3);
-    const rows = await tableText(table);
-    const parts = rows.slice(1, -1).map((row) => levelIn(row[3]!));
-    const sum = levelIn(rows.at(-1)![1]!);
-    // Each part is rounded to four digits.
-    expect(parts.reduce((total, part) => total + part, 0)).toBeCloseTo(sum, 1);
-    expect(sum).toBe(levelIn(await page.getByRole("region", { name: "Levels at the cursor" }).innerText()));
-    const file = await csvFrom(page, "Parts as CSV");
-    const shares = file.slice(1).map((row) => Number(row[4]));
-    expect(shares.reduce((total, share) => total + share, 0)).toBeCloseTo(100, 9);
-    await expectSound(page);
-    expect(faults).toEqual([]);
-    await page.context().close();
-  });
+  test.for(twoLooks)(
+    "what remains adds up to the level, in the table, the picture and the file, at $name",
+    async ({ options }) => {
+      const { page, faults } = await openPage(browser, server.address, options);
+      await openDemo(page);
+      await field(page, "Time of the cursor").fill("2026-03-28 10:00");
+      await page.keyboard.press("Enter");
+      const table = page.getByRole("region", { name: "Parts of the level" }).getByRole("table");
+      await expect.poll(async () => (await tableText(table)).length).toBeGreaterThan(3);
+      const rows = await tableText(table);
+      const parts = rows.slice(1, -1).map((row) => levelIn(row[3]!));
+      const sum = levelIn(rows.at(-1)![1]!);
+      // Each part is rounded to four digits.
+      expect(parts.reduce((total, part) => total + part, 0)).toBeCloseTo(sum, 1);
+      expect(sum).toBe(levelIn(await page.getByRole("region", { name: "Levels at the cursor" }).innerText()));
+      const file = await csvFrom(page, "Parts as CSV");
+      const shares = file.slice(1).map((row) => Number(row[4]));
+      expect(shares.reduce((total, share) => total + share, 0)).toBeCloseTo(100, 9);
+      await expectSound(page);
+      expect(faults).toEqual([]);
+      await page.context().close();
+    },
+  );
 
-  test("figures stand side by side with marks in words, and go out as a file", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
-    await openDemo(page);
-    const table = page.getByRole("table", { name: "Figures of the alternatives" });
-    const rows = await tableText(table);
-    expect(rows[0]!.length).toBe(4);
-    const text = await table.innerText();
-    expect(text).toContain("below the range");
-    expect(text).toMatch(/best: (most|fewest|earliest)/);
-    const file = await csvFrom(page, "Figures as CSV");
-    expect(file.length).toBeGreaterThan(25);
-    await field(page, "Start of the 24 hours of the area").fill("2026-03-29 09:00");
-    await page.keyboard.press("Tab");
-    await expect
-      .poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("Area over the chosen"))![1])
-      .toContain("Sun 29 Mar 2026 09:00");
-    await page.getByRole("radio", { name: "the plan alone" }).check();
-    await expect
-      .poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("First trough"))![1])
-      .toContain("Fri 27 Mar 2026 16:00");
-    await page.context().close();
-  });
+  test.for(twoLooks)(
+    "figures stand side by side with marks in words, and go out as a file, at $name",
+    async ({ options }) => {
+      const { page } = await openPage(browser, server.address, options);
+      await openDemo(page);
+      const table = page.getByRole("table", { name: "Figures of the alternatives" });
+      const rows = await tableText(table);
+      expect(rows[0]!.length).toBe(4);
+      const text = await table.innerText();
+      expect(text).toContain("below the range");
+      expect(text).toMatch(/best: (most|fewest|earliest)/);
+      const file = await csvFrom(page, "Figures as CSV");
+      expect(file.length).toBeGreaterThan(25);
+      await field(page, "Start of the 24 hours of the area").fill("2026-03-29 09:00");
+      await page.keyboard.press("Tab");
+      await expect
+        .poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("Area over the chosen"))![1])
+        .toContain("Sun 29 Mar 2026 09:00");
+      await page.getByRole("radio", { name: "the plan alone" }).check();
+      await expect
+        .poll(async () => (await tableText(table)).find(([name]) => name!.startsWith("First trough"))![1])
+        .toContain("Fri 27 Mar 2026 16:00");
+      await page.context().close();
+    },
+  );
 
   test("the levels stand in a table and go out as a file", async () => {
     const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });

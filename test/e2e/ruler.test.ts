@@ -1,6 +1,6 @@
-import type { Browser, Locator, Page } from "playwright-core";
+import type { Browser, BrowserContextOptions, Locator, Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage } from "./browser.ts";
+import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
 import { type RunningServer, startServer } from "./running-server.ts";
 import { addInfusion, curveDrawn, field, fillSetting, levelIn, makeCase, openDemo } from "./steps.ts";
 
@@ -14,8 +14,11 @@ afterAll(async () => {
   await server.stop();
 });
 
-async function openPlan(label: string): Promise<{ page: Page; faults: string[] }> {
-  const opened = await openPage(browser, server.address, { viewport: { width: 1400, height: 1000 } });
+async function openPlan(
+  label: string,
+  options: BrowserContextOptions = { viewport: { width: 1400, height: 1000 } },
+): Promise<{ page: Page; faults: string[] }> {
+  const opened = await openPage(browser, server.address, options);
   await makeCase(opened.page, label, "UTC");
   await fillSetting(opened.page, {
     start: "2026-03-02 08:00",
@@ -42,34 +45,37 @@ async function timeOf(dose: Locator): Promise<string> {
 }
 
 describe("the ruler", () => {
-  test("a dose moves by arrow keys in steps, the levels follow, and undo brings it back", async () => {
-    const { page, faults } = await openPlan("Keys on the ruler");
-    await field(page, "Time of the cursor").fill("2026-03-02 18:00");
-    await page.keyboard.press("Enter");
-    const level = async () => levelIn(await page.getByRole("region", { name: "Levels at the cursor" }).innerText());
-    const before = await level();
-    await mark(page, 2).focus();
-    for (let step = 0; step < 4; step++) await page.keyboard.press("ArrowRight");
-    await expect.poll(() => timeOf(mark(page, 2))).toBe("17:00");
-    expect(await page.evaluate(() => document.activeElement?.getAttribute("aria-label"))).toMatch(/^dose 2,/i);
-    // One hour later there is an hour's less decay of the second dose, whose infusion has just ended at 18:00.
-    // Both levels are read out to a hundredth.
-    const expected = before + 100 * (1 - Math.exp(-0.125)) * (1 - Math.exp(-0.125));
-    await expect.poll(async () => Math.abs((await level()) - expected)).toBeLessThanOrEqual(0.0101);
-    await page.keyboard.press("ArrowLeft");
-    await expect.poll(() => timeOf(mark(page, 2))).toBe("16:45");
-    await page.getByRole("button", { name: "Undo" }).click();
-    await expect.poll(() => timeOf(mark(page, 2))).not.toBe("16:45");
-    while (await page.getByRole("button", { name: "Undo" }).isEnabled()) {
-      if ((await timeOf(mark(page, 2))) === "16:00") break;
+  test.for(twoLooks)(
+    "a dose moves by arrow keys in steps, the levels follow, and undo brings it back, at $name",
+    async ({ options }) => {
+      const { page, faults } = await openPlan("Keys on the ruler", options);
+      await field(page, "Time of the cursor").fill("2026-03-02 18:00");
+      await page.keyboard.press("Enter");
+      const level = async () => levelIn(await page.getByRole("region", { name: "Levels at the cursor" }).innerText());
+      const before = await level();
+      await mark(page, 2).focus();
+      for (let step = 0; step < 4; step++) await page.keyboard.press("ArrowRight");
+      await expect.poll(() => timeOf(mark(page, 2))).toBe("17:00");
+      expect(await page.evaluate(() => document.activeElement?.getAttribute("aria-label"))).toMatch(/^dose 2,/i);
+      // One hour later there is an hour's less decay of the second dose, whose infusion has just ended at 18:00.
+      // Both levels are read out to a hundredth.
+      const expected = before + 100 * (1 - Math.exp(-0.125)) * (1 - Math.exp(-0.125));
+      await expect.poll(async () => Math.abs((await level()) - expected)).toBeLessThanOrEqual(0.0101);
+      await page.keyboard.press("ArrowLeft");
+      await expect.poll(() => timeOf(mark(page, 2))).toBe("16:45");
       await page.getByRole("button", { name: "Undo" }).click();
-    }
-    expect(await level()).toBeCloseTo(before, 3);
-    await page.getByRole("button", { name: "Redo" }).click();
-    await expect.poll(() => timeOf(mark(page, 2))).not.toBe("16:00");
-    expect(faults).toEqual([]);
-    await page.context().close();
-  });
+      await expect.poll(() => timeOf(mark(page, 2))).not.toBe("16:45");
+      while (await page.getByRole("button", { name: "Undo" }).isEnabled()) {
+        if ((await timeOf(mark(page, 2))) === "16:00") break;
+        await page.getByRole("button", { name: "Undo" }).click();
+      }
+      expect(await level()).toBeCloseTo(before, 3);
+      await page.getByRole("button", { name: "Redo" }).click();
+      await expect.poll(() => timeOf(mark(page, 2))).not.toBe("16:00");
+      expect(faults).toEqual([]);
+      await page.context().close();
+    },
+  );
 
   test("a dose is dragged by the pointer, snaps, and the whole drag is one undo", async () => {
     const { page, faults } = await openPlan("Pointer on the ruler");
@@ -118,6 +124,72 @@ describe("the ruler", () => {
     await mark(page, 1).focus();
     await page.keyboard.press("ArrowLeft");
     expect(await timeOf(mark(page, 1))).toBe("08:00");
+    await page.context().close();
+  });
+
+  test("a dose moved by keys keeps the focus out of view, among many others, and when a bunch is opened", async () => {
+    const { page, faults } = await openPlan("Focus on the ruler");
+    const focused = () => page.evaluate(() => document.activeElement?.getAttribute("aria-label") ?? "nothing");
+    await page.getByRole("button", { name: "Closer" }).click();
+    await page.getByRole("button", { name: "Closer" }).click();
+    await mark(page, 4).focus();
+    for (let step = 0; step < 16; step++) await page.keyboard.press("Shift+ArrowRight");
+    await expect.poll(focused).toMatch(/^dose 4, .* Wed 4 Mar 2026 00:00/i);
+    await page.getByRole("button", { name: "Whole plan" }).click();
+    await addInfusion(page, { amountMg: "50", durationH: "0.1", at: "2026-03-02 10:00", intervalH: "0.5" });
+    await page.locator("button.mark-bunch").first().focus();
+    await page.keyboard.press("Enter");
+    await expect.poll(focused).toMatch(/^dose \d+, /i);
+    await page.getByRole("button", { name: "Whole plan" }).click();
+    await page.locator(".dose-mark[tabindex='0']").focus();
+    const name = /^dose \d+, [^,]*/i.exec(await focused())![0];
+    for (let step = 0; step < 3; step++) {
+      await page.keyboard.press("ArrowRight");
+      await expect.poll(focused).toMatch(new RegExp(`^${name}`, "i"));
+    }
+    expect(faults).toEqual([]);
+    await page.context().close();
+  });
+
+  test("a print shows the whole picture, dark on light, in proportion", async () => {
+    const { page, faults } = await openPage(browser, server.address, {
+      viewport: { width: 1400, height: 900 },
+      colorScheme: "dark",
+    });
+    await openDemo(page);
+    const picture = () =>
+      page.evaluate(() => {
+        const stage = document.querySelector<HTMLElement>(".curve-stage")!;
+        const canvas = stage.querySelector("canvas")!;
+        const marks = [...stage.querySelectorAll(".dose-mark")].map((each) => each.getBoundingClientRect().right);
+        const { data } = canvas.getContext("2d")!.getImageData(0, 0, canvas.width, canvas.height);
+        let darkest = 255;
+        for (let at = 0; at < data.length; at += 4)
+          if (data[at + 3] === 255) darkest = Math.min(darkest, Math.max(data[at]!, data[at + 1]!, data[at + 2]!));
+        return {
+          stagePx: stage.offsetWidth,
+          canvasPx: canvas.offsetWidth,
+          stretched: canvas.width / canvas.height / (canvas.offsetWidth / canvas.offsetHeight),
+          overBy: Math.max(...marks) - stage.getBoundingClientRect().right,
+          darkest,
+        };
+      });
+    await page.locator(".curve-stage").scrollIntoViewIfNeeded();
+    await expect.poll(async () => (await picture()).canvasPx).toBeGreaterThan(1_000);
+    await page.evaluate(() => {
+      dispatchEvent(new Event("beforeprint"));
+    });
+    const printed = await picture();
+    expect(printed.stagePx).toBeLessThan(700);
+    expect(printed.canvasPx).toBeLessThanOrEqual(printed.stagePx);
+    expect(printed.stretched).toBeCloseTo(1, 1);
+    expect(printed.overBy).toBeLessThanOrEqual(0);
+    expect(printed.darkest).toBeLessThan(100);
+    await page.evaluate(() => {
+      dispatchEvent(new Event("afterprint"));
+    });
+    await expect.poll(async () => (await picture()).canvasPx).toBeGreaterThan(1_000);
+    expect(faults).toEqual([]);
     await page.context().close();
   });
 

@@ -1,6 +1,6 @@
-import type { Browser } from "playwright-core";
+import type { Browser, BrowserContextOptions } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage } from "./browser.ts";
+import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
 import { type RunningServer, startServer } from "./running-server.ts";
 import { addInfusion, curveDrawn, field, fillSetting, makeCase, save, tableText } from "./steps.ts";
 
@@ -14,8 +14,8 @@ afterAll(async () => {
   await server.stop();
 });
 
-async function openSaved(label: string) {
-  const opened = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+async function openSaved(label: string, options: BrowserContextOptions = { viewport: { width: 1400, height: 900 } }) {
+  const opened = await openPage(browser, server.address, options);
   await makeCase(opened.page, label, "UTC");
   await fillSetting(opened.page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
   await addInfusion(opened.page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });
@@ -33,31 +33,34 @@ async function changeAmount(page: Awaited<ReturnType<typeof openSaved>>["page"],
 }
 
 describe("saving", () => {
-  test("revisions are numbered, compared field by field and curve by curve, and taken up again", async () => {
-    const { page, faults } = await openSaved("Revisions");
-    await changeAmount(page, "400");
-    await save(page, "smaller doses", 2);
-    await page.getByRole("button", { name: "Compare any two revisions" }).click();
-    await page.getByRole("heading", { name: "Two revisions compared" }).waitFor();
-    const choices = await page.locator("#compare-before option").allInnerTexts();
-    await page
-      .locator("#compare-before")
-      .selectOption({ label: choices.find((choice) => choice.endsWith("revision 1"))! });
-    const differs = page.getByRole("region", { name: "What differs" }).getByRole("table");
-    await differs.waitFor();
-    const rows = await tableText(differs);
-    expect(rows.find(([what]) => what === "Order 1: what")).toEqual([
-      "Order 1: what",
-      "500 mg over 1 h (500 mg per hour)",
-      "400 mg over 1 h (400 mg per hour)",
-    ]);
-    await expectSound(page);
-    await page.getByRole("button", { name: /^Take up .*again.* revision 1$/ }).click();
-    await expect.poll(() => page.locator("#order-0").innerText()).toMatch(/500\s*mg/);
-    await save(page, "back to the first", 3);
-    expect(faults).toEqual([]);
-    await page.context().close();
-  });
+  test.for(twoLooks)(
+    "revisions are numbered, compared field by field and curve by curve, and taken up again, at $name",
+    async ({ options }) => {
+      const { page, faults } = await openSaved("Revisions", options);
+      await changeAmount(page, "400");
+      await save(page, "smaller doses", 2);
+      await page.getByRole("button", { name: "Compare any two revisions" }).click();
+      await page.getByRole("heading", { name: "Two revisions compared" }).waitFor();
+      const choices = await page.locator("#compare-before option").allInnerTexts();
+      await page
+        .locator("#compare-before")
+        .selectOption({ label: choices.find((choice) => choice.endsWith("revision 1"))! });
+      const differs = page.getByRole("region", { name: "What differs" }).getByRole("table");
+      await differs.waitFor();
+      const rows = await tableText(differs);
+      expect(rows.find(([what]) => what === "Order 1: what")).toEqual([
+        "Order 1: what",
+        "500 mg over 1 h (500 mg per hour)",
+        "400 mg over 1 h (400 mg per hour)",
+      ]);
+      await expectSound(page);
+      await page.getByRole("button", { name: /^Take up .*again.* revision 1$/ }).click();
+      await expect.poll(() => page.locator("#order-0").innerText()).toMatch(/500\s*mg/);
+      await save(page, "back to the first", 3);
+      expect(faults).toEqual([]);
+      await page.context().close();
+    },
+  );
 
   test("a save from an older revision shows both and loses nothing", async () => {
     const { page } = await openSaved("Two people");
