@@ -69,6 +69,21 @@ export function createLevelChart(canvas: HTMLCanvasElement): LevelChart {
     draw();
   };
   scheme.addEventListener("change", recolour);
+  // A print is laid out in one go: what the chart would follow a frame later comes too late for it.
+  const redraw = () => {
+    chart.resize();
+    recolour();
+  };
+  const toPaper = () => {
+    document.documentElement.classList.add("on-paper");
+    redraw();
+  };
+  const toScreen = () => {
+    document.documentElement.classList.remove("on-paper");
+    redraw();
+  };
+  addEventListener("beforeprint", toPaper);
+  addEventListener("afterprint", toScreen);
   return {
     draw(next) {
       picture = next;
@@ -76,6 +91,8 @@ export function createLevelChart(canvas: HTMLCanvasElement): LevelChart {
     },
     destroy() {
       scheme.removeEventListener("change", recolour);
+      removeEventListener("beforeprint", toPaper);
+      removeEventListener("afterprint", toScreen);
       chart.destroy();
     },
   };
