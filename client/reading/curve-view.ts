@@ -110,8 +110,13 @@ export function createCurveView(model: CaseModel): CurveView {
 
 /** Moves the window, where it must, so that the cursor is in it. */
 export function followCursor(view: CurveView): void {
+  follow(view, view.cursorH.peek());
+}
+
+/** Moves the window, where it must, so that an hour is in it. */
+export function follow(view: CurveView, atH: number): void {
   const now = view.window.peek();
-  const next = holding(now, view.cursorH.peek(), view.span.peek()?.horizonH ?? now.toH);
+  const next = holding(now, atH, view.span.peek()?.horizonH ?? now.toH);
   if (next !== now) view.show(next);
 }
 

@@ -1,8 +1,9 @@
+import { useLayoutEffect, useRef } from "preact/hooks";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import type { AlternativeLook } from "./alternative-look.ts";
-import type { CurveView } from "./curve-view.ts";
+import { type CurveView, follow } from "./curve-view.ts";
 import { DoseMark } from "./dose-mark.tsx";
 import { LaneBars } from "./lane-bars.tsx";
 import { inkOf } from "./line-sample.tsx";
@@ -23,7 +24,10 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
   const plotPx = view.plotPx.value;
   const window = view.window.value;
   const pixelOf = (atH: number) => pixelAt(atH, window, plotPx);
-  const placed = placeMarks(doses, pixelOf, plotPx, view.hand.held.value?.doseKey);
+  const placed = placeMarks(doses, pixelOf, plotPx, {
+    heldKey: view.hand.held.value?.doseKey,
+    activeKey: view.activeKey.value,
+  });
   const stop =
     placed.find((mark) => keyOfMark(mark) === view.activeKey.value) ??
     placed.reduce<PlacedMark | undefined>(first, undefined);
@@ -41,8 +45,16 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
     if (!acted && !walkAlong(view, placed, mark, event.key)) return;
     event.preventDefault();
   };
+  const lane = useRef<HTMLDivElement>(null);
+  const hadFocus = lane.current?.contains(document.activeElement) ?? false;
+  useLayoutEffect(() => {
+    // The mark that had the focus may have gone: out of view, into a bunch, undone.
+    if (hadFocus && document.activeElement === document.body && stop !== undefined)
+      document.getElementById(markId(keyOfMark(stop)))?.focus();
+  });
   return (
     <div
+      ref={lane}
       class={`lane-body ${inkOf(look)}`}
       role="group"
       aria-label={`Doses of alternative ${look.letter} in view`}
@@ -96,6 +108,7 @@ function sayBunch(doses: readonly ScheduledDose[], { timeZone }: RegimenContent)
 function zoomTo(view: CurveView, doses: readonly ScheduledDose[]): void {
   const fromH = doses[0]!.atH;
   const lengthH = Math.max(1, doses.at(-1)!.atH - fromH);
+  view.activeKey.value = doses[0]!.key;
   view.show({ fromH: fromH - lengthH / 2, toH: fromH + 1.5 * lengthH });
 }
 
@@ -114,6 +127,7 @@ function actOn(
     if (!event.repeat) view.hand.take(alternativeKey, dose);
     const size = event.shiftKey ? "larger" : "usual";
     view.hand.moveTo(steppedH(view.hand.held.peek()?.atH ?? dose.atH, direction, view.snap.peek(), size, span));
+    follow(view, view.hand.held.peek()?.atH ?? dose.atH);
     return true;
   }
   if (event.key === "Delete" || event.key === "Backspace") {

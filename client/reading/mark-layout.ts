@@ -9,18 +9,25 @@ export type PlacedMark =
 export const markPx = 26;
 const mostRows = 3;
 
+/** Doses that are shown by themselves wherever they stand. */
+export interface MarksApart {
+  /** The dose in hand: it keeps to the first row and the others make no room for it. */
+  readonly heldKey?: string | undefined;
+  /** The dose that the keyboard is on: it goes into no bunch, or its next step would move nothing. */
+  readonly activeKey?: string | undefined;
+}
+
 /**
  * Places the doses in view. Doses that stand close together go into up to three rows; where that is not
  * enough they are gathered into bunches, which are told apart by zooming in.
  *
  * @param pixelOf pixels from the plot's left edge, by elapsed hours
- * @param heldKey the dose in hand: it keeps to the first row and the others make no room for it
  */
 export function placeMarks(
   doses: readonly ScheduledDose[],
   pixelOf: (atH: number) => number,
   plotPx: number,
-  heldKey?: string,
+  { heldKey, activeKey }: MarksApart = {},
 ): PlacedMark[] {
   const inView = doses
     .map((dose) => ({ dose, xPx: pixelOf(dose.atH) }))
@@ -29,7 +36,10 @@ export function placeMarks(
   const held = inView
     .filter(({ dose }) => dose.key === heldKey)
     .map((each): PlacedMark => ({ kind: "dose", ...each, row: 0 }));
-  return [...runsOf(inView.filter(({ dose }) => dose.key !== heldKey)).flatMap(placeRun), ...held];
+  return [
+    ...runsOf(inView.filter(({ dose }) => dose.key !== heldKey)).flatMap((run) => placeRun(run, activeKey)),
+    ...held,
+  ];
 }
 
 /** Names a mark as long as it stays what it is. */
@@ -63,14 +73,14 @@ function runsOf(marks: readonly Mark[]): Mark[][] {
   return runs;
 }
 
-function placeRun(run: readonly Mark[]): PlacedMark[] {
+function placeRun(run: readonly Mark[], activeKey: string | undefined): PlacedMark[] {
   const placed: PlacedMark[] = [];
   const lastPx: number[] = [];
   for (const mark of run) {
     const row = Array.from({ length: mostRows }, (_, index) => index).find(
       (index) => mark.xPx - (lastPx[index] ?? -Infinity) >= markPx,
     );
-    if (row === undefined) return bunched(run);
+    if (row === undefined) return bunched(run, activeKey);
     lastPx[row] = mark.xPx;
     placed.push({ kind: "dose", ...mark, row });
   }
@@ -78,15 +88,18 @@ function placeRun(run: readonly Mark[]): PlacedMark[] {
 }
 
 /** Cells of one target's width; a cell with one dose shows the dose, a row lower, where it cannot touch its neighbours. */
-function bunched(run: readonly Mark[]): PlacedMark[] {
+function bunched(run: readonly Mark[], activeKey: string | undefined): PlacedMark[] {
   const firstPx = run[0]!.xPx;
   const cells = new Map<number, Mark[]>();
-  for (const mark of run) {
+  const active = run.filter(({ dose }) => dose.key === activeKey);
+  for (const mark of run.filter(({ dose }) => dose.key !== activeKey)) {
     const cell = Math.floor((mark.xPx - firstPx) / markPx);
     cells.set(cell, [...(cells.get(cell) ?? []), mark]);
   }
-  return [...cells].map(([cell, marks]): PlacedMark => {
+  const others = [...cells].map(([cell, marks]): PlacedMark => {
     if (marks.length === 1) return { kind: "dose", ...marks[0]!, row: 1 };
     return { kind: "bunch", doses: marks.map(({ dose }) => dose), xPx: firstPx + (cell + 0.5) * markPx, row: 0 };
   });
+  // The last row holds nothing else here.
+  return [...others, ...active.map((mark): PlacedMark => ({ kind: "dose", ...mark, row: mostRows - 1 }))];
 }

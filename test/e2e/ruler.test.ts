@@ -132,17 +132,17 @@ describe("the ruler", () => {
     const focused = () => page.evaluate(() => document.activeElement?.getAttribute("aria-label") ?? "nothing");
     await page.getByRole("button", { name: "Closer" }).click();
     await page.getByRole("button", { name: "Closer" }).click();
-    await mark(page, 4).focus();
+    await mark(page, 2).focus();
     for (let step = 0; step < 16; step++) await page.keyboard.press("Shift+ArrowRight");
-    await expect.poll(focused).toMatch(/^dose 4, .* Wed 4 Mar 2026 00:00/i);
+    await expect.poll(focused).toMatch(/^dose 2, .* Tue 3 Mar 2026 08:00/i);
     await page.getByRole("button", { name: "Whole plan" }).click();
     await addInfusion(page, { amountMg: "50", durationH: "0.1", at: "2026-03-02 10:00", intervalH: "0.5" });
     await page.locator("button.mark-bunch").first().focus();
     await page.keyboard.press("Enter");
-    await expect.poll(focused).toMatch(/^dose \d+, /i);
+    await expect.poll(focused).toMatch(/^dose \d+ of order 2, /i);
     await page.getByRole("button", { name: "Whole plan" }).click();
     await page.locator(".dose-mark[tabindex='0']").focus();
-    const name = /^dose \d+, [^,]*/i.exec(await focused())![0];
+    const name = /^dose \d+ of order 2,/i.exec(await focused())![0];
     for (let step = 0; step < 3; step++) {
       await page.keyboard.press("ArrowRight");
       await expect.poll(focused).toMatch(new RegExp(`^${name}`, "i"));

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
 import { clockTicks } from "../../../client/reading/clock-ticks.ts";
-import { placeMarks } from "../../../client/reading/mark-layout.ts";
+import { type MarksApart, placeMarks } from "../../../client/reading/mark-layout.ts";
 import { holding, hourAt, panned, pixelAt, windowWithin, zoomed } from "../../../client/reading/plot-scale.ts";
 import { snappedH, steppedH, withinPlan } from "../../../client/reading/snap.ts";
 import type { ScheduledDose } from "../../../shared/schedule/scheduled-dose.ts";
@@ -83,12 +83,12 @@ describe("clockTicks", () => {
 
 describe("placeMarks", () => {
   const dose = (key: string, atH: number) => ({ key, atH }) as ScheduledDose;
-  const place = (hours: readonly number[], heldKey?: string) =>
+  const place = (hours: readonly number[], apart?: MarksApart) =>
     placeMarks(
       hours.map((atH, index) => dose(`d${index}`, atH)),
       (atH) => atH,
       1_000,
-      heldKey,
+      apart,
     );
 
   test("keeps one row while there is room, then uses up to three", () => {
@@ -107,7 +107,18 @@ describe("placeMarks", () => {
 
   test("leaves out what is not in view, but never the dose in hand, which keeps its own mark", () => {
     expect(place([-5, 10, 1_001]).length).toBe(1);
-    const held = place([10, 12, 14, 16, 2_000], "d4");
+    const held = place([10, 12, 14, 16, 2_000], { heldKey: "d4" });
     expect(held.find((mark) => mark.kind === "dose" && mark.dose.key === "d4")).toMatchObject({ row: 0, xPx: 2_000 });
+  });
+
+  test("gathers the dose that the keyboard is on into no bunch, and lets it touch no other", () => {
+    const placed = place(
+      Array.from({ length: 40 }, (_, index) => index * 3),
+      { activeKey: "d20" },
+    );
+    const own = placed.find((mark) => mark.kind === "dose" && mark.dose.key === "d20")!;
+    expect(own).toMatchObject({ xPx: 60 });
+    expect(placed.filter((mark) => mark !== own && mark.row === own.row)).toEqual([]);
+    expect(placed.reduce((sum, mark) => sum + (mark.kind === "bunch" ? mark.doses.length : 1), 0)).toBe(40);
   });
 });
