@@ -1,4 +1,4 @@
-import { effect, useSignal } from "@preact/signals";
+import { effect, useComputed, useSignal } from "@preact/signals";
 import { useEffect } from "preact/hooks";
 import { AlternativesPart } from "../alternatives/alternatives-part.tsx";
 import { DosesPart } from "../doses/doses-part.tsx";
@@ -15,8 +15,10 @@ import { ChangesPart } from "../setting/changes-part.tsx";
 import { SettingPart } from "../setting/setting-part.tsx";
 import { announce } from "../shell/announce.ts";
 import { PageFrame } from "../shell/page-frame.tsx";
+import { letterOf } from "./case-document.ts";
 import type { CasePage } from "./case-page.ts";
 import { CaseTools } from "./case-tools.tsx";
+import { sayOtherCautions } from "./other-cautions.ts";
 import { useUndoKeys } from "./undo-keys.ts";
 import "./case-view.css";
 
@@ -37,12 +39,20 @@ export function CaseView({ page }: { page: CasePage }) {
   useEffect(() => clearRefusals(page), [page]);
   useUndoKeys(model);
   useEffect(() => page.close, [page]);
-  const { label } = page.settled.value;
+  const others = useComputed(() => sayOtherCautions(page.settled.value, page.selected.value?.key));
+  const settled = page.settled.value;
+  const selected = page.selected.value;
+  const { label } = settled;
   useEffect(() => {
     document.title = `${label} - Ebbline`;
   }, [label]);
   return (
-    <PageFrame cautions={page.judged.value.cautions} tools={<CaseTools page={page} keeping={keeping.value} />}>
+    <PageFrame
+      cautions={page.judged.value.cautions}
+      about={selected && `Alternative ${letterOf(settled, selected.key)}`}
+      elsewhere={others.value}
+      tools={<CaseTools page={page} keeping={keeping.value} />}
+    >
       <CaseDetails page={page} />
       <SettingPart page={page} />
       <ChangesPart page={page} />

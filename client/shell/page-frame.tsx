@@ -8,13 +8,17 @@ import "./page-frame.css";
 
 interface PageFrameProps {
   readonly cautions: readonly Caution[];
+  /** What the cautions are about, where the page shows more than one thing. */
+  readonly about?: string | undefined;
+  /** What must be known of the rest, in a line. */
+  readonly elsewhere?: string | undefined;
   /** Controls that must be in reach wherever the page is scrolled to. */
   readonly tools?: ComponentChildren;
   readonly children: ComponentChildren;
 }
 
 /** What every page has: the way home, the ribbon that stays in view, one main part, the live region. */
-export function PageFrame({ cautions, tools, children }: PageFrameProps) {
+export function PageFrame({ cautions, about, elsewhere, tools, children }: PageFrameProps) {
   const top = useRef<HTMLDivElement>(null);
   useKeepClearOf(top);
   return (
@@ -29,7 +33,7 @@ export function PageFrame({ cautions, tools, children }: PageFrameProps) {
           </a>
           {tools}
         </header>
-        <Ribbon cautions={cautions} />
+        <Ribbon cautions={cautions} about={about} elsewhere={elsewhere} />
       </div>
       <main id="main" tabIndex={-1}>
         {children}

@@ -7,17 +7,24 @@ const severityWords = { stop: "Stop", warn: "Warning", note: "Note" } as const;
 /** Wide enough to show the whole list without pushing the work off the screen. */
 const wide = "(min-width: 60rem) and (min-height: 40rem)";
 
+interface RibbonProps {
+  readonly cautions: readonly Caution[];
+  readonly about: string | undefined;
+  readonly elsewhere: string | undefined;
+}
+
 /**
  * Everything the reader must know about what is on the page, gravest first, always in view. On a small
  * screen the list folds to its standing line and the count of each kind.
  */
-export function Ribbon({ cautions }: { cautions: readonly Caution[] }) {
+export function Ribbon({ cautions, about, elsewhere }: RibbonProps) {
   const unfolded = useSignal(matchMedia(wide).matches);
   const standing = cautions.find(({ code }) => code === "standing");
   const others = cautions.filter((caution) => caution !== standing);
   return (
     <section class="ribbon" aria-label="Cautions">
       {standing && <p class="ribbon-standing">{standing.text}</p>}
+      {elsewhere !== undefined && <p class="ribbon-elsewhere">{elsewhere}</p>}
       {others.length > 0 && (
         <div class="ribbon-others">
           <button
@@ -29,7 +36,8 @@ export function Ribbon({ cautions }: { cautions: readonly Caution[] }) {
               unfolded.value = !unfolded.value;
             }}
           >
-            <span aria-hidden="true">{unfolded.value ? "▾" : "▸"}</span> {sayCounts(others)}
+            <span aria-hidden="true">{unfolded.value ? "▾" : "▸"}</span> {about === undefined ? "" : `${about}: `}
+            {sayCounts(others)}
           </button>
           {/* Scrolls when long, so it must be reachable by the keyboard. */}
           <ul
