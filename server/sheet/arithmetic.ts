@@ -44,7 +44,8 @@ function writeStep(paper: Paper, step: ArithmeticStep): void {
   ];
   doc.fontSize(8.2);
   const height = lines.reduce(
-    (sum, { text, indentPt }) => sum + doc.heightOfString(text, { width: paper.widthPt - indentPt }) + 1,
+    (sum, { text, indentPt }) =>
+      sum + doc.heightOfString(printable(paper, text), { width: paper.widthPt - indentPt }) + 1,
     4,
   );
   needRoom(paper, height);

@@ -81,13 +81,17 @@ interface GlyphSource {
   readonly _font: { readonly font: { hasGlyphForCodePoint(code: number): boolean } };
 }
 
+/** Keeps its neighbours on one line and prints nothing. */
+const wordJoiner = "\u2060";
+
 /**
  * Text that the embedded font can print in full: a sign that it lacks is named by its code instead of
- * being shown as an empty box, and control characters become spaces.
+ * being shown as an empty box, and control characters become spaces. A unit stays on one line; else one
+ * could end within mg/L.
  */
 export function printable({ doc }: Paper, text: string): string {
   const { font } = (doc as unknown as GlyphSource)._font;
-  return [...text]
+  return [...text.replace(/(?<=mg|mg·h|L)\/(?=L|h)/g, `/${wordJoiner}`)]
     .map((sign) => {
       const code = sign.codePointAt(0)!;
       if (code < 0x20 || (code >= 0x7f && code < 0xa0)) return " ";

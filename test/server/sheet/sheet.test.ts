@@ -69,15 +69,19 @@ type Read = Awaited<ReturnType<typeof readPdf>>;
 async function readPdf(bytes: Uint8Array) {
   const document = await getDocument({ data: bytes.slice(), verbosity: 0 }).promise;
   const pages: string[] = [];
+  const pieces: string[] = [];
   const tags = new Set<string>();
   for (let number = 1; number <= document.numPages; number++) {
     const page = await document.getPage(number);
     const { items } = await page.getTextContent();
-    pages.push(items.map((item) => ("str" in item ? item.str : "")).join(" "));
+    const written = items.map((item) => ("str" in item ? item.str : ""));
+    pages.push(written.join(" "));
+    pieces.push(...written);
     collectTags(await page.getStructTree(), tags);
   }
   return {
     pages,
+    pieces,
     tags,
     text: squeezed(pages.join(" ")),
     metadata: await document.getMetadata(),
@@ -91,9 +95,9 @@ function collectTags(node: unknown, into: Set<string>): void {
   if ("children" in node && Array.isArray(node.children)) for (const child of node.children) collectTags(child, into);
 }
 
-/** Line breaks within a cell and no-break spaces are the page's, not the text's. */
+/** Line breaks within a cell, no-break spaces and word joiners are the page's, not the text's. */
 function squeezed(text: string): string {
-  return text.replace(/[\s\u00a0]+/g, "");
+  return text.replace(/[\s\u00a0\u2060]+/g, "");
 }
 
 const sheets = new Map<string, Promise<Read>>();
@@ -183,6 +187,11 @@ describe.for(["A4", "Letter"] as const)("writeSheet on %s", (paper) => {
       expect(squeezed(page)).toContain(squeezed(`Page ${index + 1} of ${pages.length}`));
       expect(page.length).toBeGreaterThan(300);
     });
+  });
+
+  test("ends no line within a unit", async () => {
+    const { pieces } = await sheetOn(paper);
+    expect(pieces.filter((piece) => /\w\/\u2060?$/.test(piece.trim()))).toEqual([]);
   });
 
   test("keeps the medication-safety writing rules", async () => {
