@@ -1,4 +1,4 @@
-import express, { type Express, type Router } from "express";
+import express, { type Express, Router } from "express";
 import type { AppNeeds } from "./app-needs.ts";
 import { clientFiles } from "./client-files.ts";
 import { noSuchAddress, problemHandler } from "./problems.ts";
@@ -25,9 +25,11 @@ export function createApp(needs: AppNeeds): Express {
   app.disable("etag");
   app.set("query parser", "simple");
   app.set("trust proxy", false);
-  app.use(requestIds(needs.ids), requestLog(logger), ...securityHeaders(settings.transport));
+  app.use(requestIds(needs.ids), requestLog(logger), securityHeaders(settings.transport));
   app.use(hostCheck([settings.host, ...settings.publicNames]), readablePath);
-  app.use("/api", requestLimit(settings.requestsPerMinute), sameOriginWrites, ...apiRouters(needs));
+  const api = Router();
+  api.use(requestLimit(settings.requestsPerMinute), sameOriginWrites, ...apiRouters(needs));
+  app.use("/api", api);
   if (clientFolder !== undefined) app.use(clientFiles(clientFolder));
   app.use(noSuchAddress);
   app.use(problemHandler(logger, needs.giveUp));

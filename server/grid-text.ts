@@ -3,15 +3,14 @@ const longestKept = 20_000;
 const mostKept = 16;
 const comma = 0x2c;
 
-interface Answer {
-  readonly timesH?: readonly number[];
-}
+/** Writes an answer as JSON, its times first; they are asked for only where their text is not known yet. */
+export type WriteAnswer = (rest: object, times: Times | undefined) => Buffer;
 
-/** Writes an answer as JSON; `grid` is what its times follow from, everyH undefined where they were given one by one. */
-export type WriteAnswer = (
-  answer: Answer,
-  grid: { readonly hours: number; readonly everyH: number | undefined },
-) => Buffer;
+export interface Times {
+  /** What the times follow from; undefined where they were given one by one. */
+  readonly grid: string | undefined;
+  readonly make: () => readonly number[];
+}
 
 /**
  * JSON with the grid of times written once and kept. Most of the time that an answer takes goes into
@@ -19,19 +18,19 @@ export type WriteAnswer = (
  */
 export function answerWriter(): WriteAnswer {
   const kept = new Map<string, Buffer>();
-  const headOf = (timesH: readonly number[], key: string) => {
-    const known = kept.get(key);
+  const headOf = ({ grid, make }: Times) => {
+    const known = grid === undefined ? undefined : kept.get(grid);
     if (known !== undefined) return known;
+    const timesH = make();
     const head = Buffer.from(`{"timesH":${JSON.stringify(timesH)}`);
+    if (grid === undefined || timesH.length > longestKept) return head;
     if (kept.size >= mostKept) kept.delete(kept.keys().next().value!);
-    kept.set(key, head);
+    kept.set(grid, head);
     return head;
   };
-  return (answer, { hours, everyH }) => {
-    const { timesH, ...rest } = answer;
-    if (timesH === undefined || everyH === undefined || timesH.length > longestKept)
-      return Buffer.from(JSON.stringify(answer));
-    return joined(headOf(timesH, `${hours} ${everyH}`), JSON.stringify(rest));
+  return (rest, times) => {
+    const text = JSON.stringify(rest);
+    return times === undefined ? Buffer.from(text) : joined(headOf(times), text);
   };
 }
 

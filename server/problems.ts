@@ -112,33 +112,15 @@ function codeOf(error: unknown): ErrorCode {
   if (own === "SQLITE_FULL") return "storage-full";
   if (own.startsWith("SQLITE_BUSY")) return "storage-busy";
   if (own.startsWith("SQLITE_IOERR") || own.startsWith("SQLITE_CORRUPT")) return "storage-failed";
-  return "type" in error || "status" in error ? parserCode(error) : "internal";
+  // The router of Express throws for an escape that it cannot read.
+  return error instanceof URIError || ("status" in error && error.status === 400) ? "malformed-path" : "internal";
 }
 
-/** The body parser and the router of Express throw errors of their own, told apart by type and status. */
-function parserCode(error: Error & { type?: unknown; status?: unknown }): ErrorCode {
-  switch (error.type) {
-    case "entity.parse.failed":
-    case "request.aborted":
-    case "request.size.invalid":
-      return "malformed-json";
-    case "entity.too.large":
-      return "too-large";
-    case "encoding.unsupported":
-    case "charset.unsupported":
-      return "not-json";
-  }
-  return error instanceof URIError || error.status === 400 ? "malformed-path" : "internal";
-}
-
-/** Our own words only: the parser's messages quote the body. */
+/** Our own words only: the messages of others quote what somebody typed. */
 function detailOf(code: ErrorCode, error: unknown): string {
   const own = error instanceof Error && "code" in error && String(error.code) === code;
   if (own) return (error as Error).message;
-  if (code === "malformed-json") return "the body ends early or has a character that JSON does not allow there";
   if (code === "storage-full") return "what is there can still be read; make room on the disk and try again";
   if (code === "storage-busy") return "try again with the same Idempotency-Key";
-  if (code === "too-large") return "send less at once; the limits are listed at /api/docs";
-  if (code === "not-json") return "send UTF-8 without compression";
   return "the address has an escape that is not complete or not UTF-8";
 }

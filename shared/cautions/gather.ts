@@ -1,18 +1,16 @@
 import type { CautionReason, RegimenContent } from "../contract/case.ts";
 import type { Caution } from "../contract/caution.ts";
-import type { PredictionRequest } from "../contract/prediction.ts";
-import type { SteadyStateRequest } from "../contract/steady-state.ts";
-import { courseOf } from "../kinetics/course.ts";
 import { assumedElimination } from "./assumed-elimination.ts";
 import { clockChanges, unclearClockTimes } from "./clock-jumps.ts";
 import { dosesTogether } from "./doses-together.ts";
 import { eliminationStops } from "./elimination-stops.ts";
+import { fallsBelow } from "./falls-below.ts";
 import { givenDoesDiffer } from "./given-differs.ts";
 import { idleExceptions, lostRecords } from "./lost-records.ts";
 import { notSettled } from "./not-settled.ts";
 import { outsideRange } from "./outside-range.ts";
 import { standingCaution } from "./standing.ts";
-import { type ContentSubject, type CourseSubject, type Rule, subjectOfContent, subjectOfCourse } from "./subject.ts";
+import { type ContentSubject, type CourseSubject, type Rule, subjectOfContent } from "./subject.ts";
 import { tenfoldDoses } from "./tenfold-doses.ts";
 import { unusualDoses, unusualOrders } from "./unusual-doses.ts";
 import { unusualKinetics, unusualSetting } from "./unusual-kinetics.ts";
@@ -21,6 +19,7 @@ const courseRules: readonly Rule<CourseSubject>[] = [
   unusualKinetics,
   eliminationStops,
   outsideRange,
+  fallsBelow,
   assumedElimination,
 ];
 
@@ -47,14 +46,9 @@ export function cautionsForContent(content: RegimenContent): Caution[] {
   return ordered([...contentRules, ...courseRules].flatMap((rule) => rule(subject)));
 }
 
-/** Cautions of a stateless prediction. */
-export function cautionsForPrediction(request: PredictionRequest): Caution[] {
-  return cautionsForCourse(subjectOfCourse(courseOf(request), request.rangeMgPerL));
-}
-
-/** Cautions of a repeating cycle. */
-export function cautionsForSteadyState(request: SteadyStateRequest): Caution[] {
-  return cautionsForCourse(subjectOfCourse(courseOf({ ...request, horizonH: request.cycleH }), undefined));
+/** Cautions of a course that no case states: a stateless prediction, or a repeating cycle. */
+export function cautionsForCourse(subject: CourseSubject): Caution[] {
+  return ordered([...courseRules, unusualDoses].flatMap((rule) => rule(subject)));
 }
 
 /** The cautions that stop and that nobody has answered yet; a reason answers one text about one place. */
@@ -62,10 +56,6 @@ export function unanswered(cautions: readonly Caution[], reasons: readonly Cauti
   const answered = ({ code, about, text }: Caution) =>
     reasons.some((reason) => reason.code === code && reason.about === about && reason.text === text);
   return cautions.filter((caution) => caution.severity === "stop" && !answered(caution));
-}
-
-function cautionsForCourse(subject: CourseSubject): Caution[] {
-  return ordered([...courseRules, unusualDoses].flatMap((rule) => rule(subject)));
 }
 
 const gravity = { stop: 0, warn: 1, note: 2 } as const;

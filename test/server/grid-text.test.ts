@@ -2,21 +2,21 @@ import { describe, expect, test } from "vitest";
 import { answerWriter } from "../../server/grid-text.ts";
 import { refuseNaN } from "../../server/refuse-nan.ts";
 
-const answer = (count: number) => ({
-  timesH: Array.from({ length: count }, (_, index) => index * 0.1),
-  level: 1,
-  text: "µ – 漢",
+const rest = { level: 1, text: "µ – 漢" };
+const times = (count: number, grid: string | undefined) => ({
+  grid,
+  make: () => Array.from({ length: count }, (_, index) => index * 0.1),
 });
 
 describe("answerWriter", () => {
   test.for([
-    { name: "a grid", everyH: 0.1 },
-    { name: "times of its own", everyH: undefined },
-  ])("writes what JSON.stringify writes, for $name", ({ everyH }) => {
+    { name: "a grid", grid: (count: number) => `${count}` },
+    { name: "times of its own", grid: () => undefined },
+  ])("writes what JSON.stringify writes, for $name", ({ grid }) => {
     const write = answerWriter();
     for (const count of [1, 3, 3, 20_001]) {
-      const text = write(answer(count), { hours: (count - 1) * 0.1, everyH }).toString();
-      expect(text).toBe(JSON.stringify(answer(count)));
+      const asked = times(count, grid(count));
+      expect(write(rest, asked).toString()).toBe(JSON.stringify({ timesH: asked.make(), ...rest }));
     }
   });
 
@@ -24,11 +24,19 @@ describe("answerWriter", () => {
     const write = answerWriter();
     for (let round = 0; round < 3; round++)
       for (let count = 1; count < 40; count++)
-        expect(JSON.parse(write(answer(count), { hours: count, everyH: 0.1 }).toString()).timesH).toHaveLength(count);
+        expect(JSON.parse(write(rest, times(count, `${count}`)).toString()).timesH).toHaveLength(count);
+  });
+
+  test("makes the times of a grid once", () => {
+    const write = answerWriter();
+    let made = 0;
+    const counted = { grid: "24 1", make: () => [0, ++made] };
+    for (let round = 0; round < 3; round++) write(rest, counted);
+    expect(made).toBe(1);
   });
 
   test("writes an answer that has no times", () => {
-    expect(answerWriter()({}, { hours: 8, everyH: undefined }).toString()).toBe("{}");
+    expect(answerWriter()(rest, undefined).toString()).toBe(JSON.stringify(rest));
   });
 });
 

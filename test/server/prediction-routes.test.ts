@@ -208,13 +208,11 @@ describe("POST /api/steady-states", () => {
 
 describe("a level that is no number", () => {
   test("is a fault of the server and is never sent as null", () => {
-    const predicted = predict(PredictionRequest.parse(prediction));
-    const text = answerWriter()({ ...predicted, concentrationsMgPerL: [10, Number.NaN] } as object, {
-      hours: 24,
-      everyH: undefined,
-    });
-    expect(text.toString()).toContain("[10,null]");
-    expect(() => refuseNaN({ ...predicted, concentrationsMgPerL: [10, Number.NaN] }, text)).toThrow();
-    expect(() => refuseNaN(predicted, answerWriter()(predicted, { hours: 24, everyH: undefined }))).not.toThrow();
+    const { answer } = predict(PredictionRequest.parse(prediction));
+    const spoilt = { ...answer, concentrationsMgPerL: [10, Number.NaN] };
+    const write = answerWriter();
+    expect(write(spoilt, undefined).toString()).toContain("[10,null]");
+    expect(() => refuseNaN(spoilt, write(spoilt, undefined))).toThrow();
+    expect(() => refuseNaN(answer, write(answer, undefined))).not.toThrow();
   });
 });

@@ -1,13 +1,9 @@
 import { describe, expect, test } from "vitest";
-import {
-  cautionsForContent,
-  cautionsForPrediction,
-  cautionsForSteadyState,
-  unanswered,
-} from "../../../shared/cautions/gather.ts";
+import { cautionsForContent, cautionsForCourse, unanswered } from "../../../shared/cautions/gather.ts";
 import { Caution } from "../../../shared/contract/caution.ts";
 import { PredictionRequest } from "../../../shared/contract/prediction.ts";
 import { SteadyStateRequest } from "../../../shared/contract/steady-state.ts";
+import { describeSteadyState, predict } from "../../../shared/kinetics/predict.ts";
 import { everyEight, inventedContent, stated } from "../../invented-content.ts";
 import { findWritingFaults } from "../../writing-rules.ts";
 
@@ -81,6 +77,13 @@ const cases: {
     severity: "warn",
     raising: { setting: { plan, kinetics, rangeMgPerL: { low: 2, high: 12 } } },
     quiet: { setting: { plan, kinetics, rangeMgPerL: { low: 2, high: 40 } } },
+  },
+  {
+    // From nothing to 11.75 mg/L, then down to 4.9 mg/L before the second dose; a rise from nothing is no fall.
+    code: "below-range",
+    severity: "note",
+    raising: { setting: { plan, kinetics, rangeMgPerL: { low: 5, high: 40 } } },
+    quiet: { setting: { plan, kinetics, rangeMgPerL: { low: 4.8, high: 40 } } },
   },
   {
     code: "never-in-range",
@@ -216,7 +219,7 @@ describe("cautions of stateless answers", () => {
       horizonH: 24,
       sampleEveryH: 1,
     });
-    expect(cautionsForPrediction(request)).toMatchObject([
+    expect(cautionsForCourse(predict(request))).toMatchObject([
       { code: "unusual-value", severity: "stop", about: "/doses/0" },
       { code: "standing" },
     ]);
@@ -228,6 +231,6 @@ describe("cautions of stateless answers", () => {
       cycleH: 8,
       doses: [{ kind: "bolus", atH: 0, amountMg: 500 }],
     });
-    expect(cautionsForSteadyState(request)).toMatchObject([{ code: "standing" }]);
+    expect(cautionsForCourse(describeSteadyState(request))).toMatchObject([{ code: "standing" }]);
   });
 });
