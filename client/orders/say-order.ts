@@ -10,7 +10,9 @@ export function sayGive(give: Give): string {
   if (give.kind === "infusion")
     return `${formatDose(give.amountMg)} over ${formatDuration(give.durationH)}, infusion (${formatRate(give.amountMg / give.durationH)})`;
   const lastH = give.steps.at(-1)?.afterH ?? 0;
-  return `pump log of ${give.steps.length} steps over ${formatDuration(lastH)}, ${formatDose(amountGivenMg(give))} in all`;
+  const firstH = give.steps.find(({ rateMgPerH }) => rateMgPerH > 0)?.afterH ?? 0;
+  const waits = firstH > 0 ? `, the first rate after ${formatDuration(firstH)}` : "";
+  return `pump log of ${give.steps.length} steps over ${formatDuration(lastH)}${waits}, ${formatDose(amountGivenMg(give))} in all`;
 }
 
 /** An order as one sentence without its full stop. */
@@ -34,5 +36,5 @@ function sayTimes(times: Extract<When, { kind: "clock-times" }>["times"]): strin
 function sayEnd(end: Extract<When, { kind: "every" }>["end"], timeZone: string): string {
   if (end.kind === "open") return "";
   if (end.kind === "count") return end.doses === 1 ? "for 1 dose" : `for ${end.doses} doses`;
-  return `until ${sayClock(end.at, timeZone)}`;
+  return `until before ${sayClock(end.at, timeZone)}`;
 }
