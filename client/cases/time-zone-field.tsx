@@ -5,10 +5,12 @@ interface TimeZoneFieldProps {
   readonly text: string;
   readonly onText: (text: string, stage: TypingStage) => void;
   readonly problem?: string | undefined;
+  /** Follows the words on what the zone is for. */
+  readonly warning?: string | undefined;
 }
 
 /** A time zone by its IANA name, with the names this browser knows as suggestions. */
-export function TimeZoneField({ id, text, onText, problem }: TimeZoneFieldProps) {
+export function TimeZoneField({ id, text, onText, problem, warning }: TimeZoneFieldProps) {
   const names = Intl.supportedValuesOf("timeZone");
   return (
     <>
@@ -19,7 +21,9 @@ export function TimeZoneField({ id, text, onText, problem }: TimeZoneFieldProps)
         onText={onText}
         problem={problem}
         suggestions={`${id}-names`}
-        hint="where the doses are given, such as Europe/London; clock times follow its daylight saving"
+        hint={["where the doses are given, such as Europe/London; clock times follow its daylight saving", warning]
+          .filter(Boolean)
+          .join(". ")}
       />
       <datalist id={`${id}-names`}>
         {["UTC", ...names].map((name) => (

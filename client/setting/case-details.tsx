@@ -13,12 +13,16 @@ import { SaveDetails } from "../saving/save-details-button.tsx";
 /** A time zone that is being typed, or that is none, is kept like every open editor. */
 const zoneDraft = "time-zone";
 
+const keepsMoments =
+  "Another zone moves nothing: what is dated 08:00 now shows another clock time then; only orders at clock times keep theirs";
+
 /** The case's label, time zone and notes. */
 export function CaseDetails({ page }: { page: CasePage }) {
   const { model, drafts } = page;
   const label = useComputed(() => model.document.value.label).value;
   const notes = useComputed(() => model.document.value.notes).value;
   const timeZone = page.timeZone.value;
+  const started = useComputed(() => model.document.value.form.start.text.trim() !== "").value;
   const typedZone = drafts.all.value[zoneDraft];
   const zoneText = typedZone === undefined ? timeZone : textIn(typedZone, "text");
   return (
@@ -43,6 +47,7 @@ export function CaseDetails({ page }: { page: CasePage }) {
         <TimeZoneField
           id="case-zone"
           text={zoneText}
+          warning={started ? keepsMoments : undefined}
           problem={typedZone === undefined ? refusedAt(page, "case-zone") : timeZoneProblem(zoneText)}
           onText={(text, stage) => {
             drafts.set(zoneDraft, { text });
