@@ -7,6 +7,7 @@ import { momentText, readMoment } from "../controls/moment.ts";
 import { readLimited, readOptional } from "../controls/read-field.ts";
 import { lengthProblem } from "../controls/text-length.ts";
 import { draftOfGive, giveKindOf, readGive } from "./give-draft.ts";
+import { fromFirstLine } from "./pump-start.ts";
 
 export type WhenKind = When["kind"];
 export type EndKind = End["kind"];
@@ -52,7 +53,12 @@ export function readOrderDraft(draft: Draft, kept: Pick<Order, "id" | "exception
   if (give === undefined || read === undefined || Object.keys(problems).length > 0) return { ok: false, problems };
   return {
     ok: true,
-    order: { ...kept, exceptions: [...kept.exceptions], give, when: read, note: textIn(draft, "note") },
+    order: {
+      ...kept,
+      exceptions: [...kept.exceptions],
+      ...fromFirstLine({ give, when: read }, timeZone),
+      note: textIn(draft, "note"),
+    },
   };
 }
 

@@ -90,6 +90,18 @@ describe("readOrderDraft", () => {
     });
   });
 
+  test("dates a pump log given once by its own first line", () => {
+    const pump = "time,rate\n2026-03-29 17:20,50\n2026-03-30 05:30,20\n2026-03-30 21:00,0";
+    const read = readOrderDraft({ kind: "pump", when: "once", at: "2026-03-28 08:00", pump }, kept, zone);
+    expect(read.ok && read.order.when).toEqual({ kind: "once", at: "2026-03-29T17:20:00+01:00" });
+    const steps = [
+      { afterH: 0, rateMgPerH: 50 },
+      { afterH: 12.1666667, rateMgPerH: 20 },
+      { afterH: 27.6666667, rateMgPerH: 0 },
+    ];
+    expect(read.ok && read.order.give).toEqual({ kind: "pump", steps });
+  });
+
   test("tells the lines of a pump log that are wrong", () => {
     const draft = { kind: "pump", when: "once", at: "2026-03-28 08:00", pump: "time,rate\n0,50\n2,25,5\n1,0" };
     const read = readOrderDraft(draft, kept, zone);
