@@ -1,21 +1,22 @@
 import type { Revision } from "../../shared/contract/case.ts";
+import type { Settled } from "../../shared/figures/prepared.ts";
 import type { Paper } from "./paper.ts";
 import { needRoom } from "./paper.ts";
 import { heading, paragraph, table } from "./writing.ts";
 
-const quantities = [
-  "Elimination rate constant k (per h)",
+const always = ["Highest level in the plan (mg/L)", "Level at the end of the plan (mg/L)"];
+
+const ofSteadyState = [
   "Accumulation factor A",
   "Peak at steady state (mg/L)",
   "Trough at steady state (mg/L)",
   "Area over 24 h at steady state (mg·h/L)",
   "Loading dose as a bolus, with no drug present (mg)",
-  "Entries compared with their source",
 ];
 
 /** Room for the checker's own results, and for both signatures. */
-export function writeChecking(paper: Paper, revision: Revision): void {
-  needRoom(paper, 420);
+export function writeChecking(paper: Paper, revision: Revision, settled: Settled): void {
+  needRoom(paper, 470);
   heading(paper, "Independent check");
   paragraph(
     paper,
@@ -29,7 +30,12 @@ export function writeChecking(paper: Paper, revision: Revision): void {
       { title: "Checker's own result", share: 3.4 },
       { title: "Agrees: yes or no, and remarks", share: 3.4 },
     ],
-    quantities.map((quantity) => [quantity, "", ""]),
+    [
+      "Elimination rate constant k (per h)",
+      ...(settled.kind === "cycle" ? ofSteadyState : []),
+      ...always,
+      "Entries compared with their source",
+    ].map((quantity) => [quantity, "", ""]),
     8.2,
     25,
   );

@@ -34,7 +34,7 @@ export function writeSheet(revision: Revision, { paper: size }: { readonly paper
   writeFigures(paper, given);
   writeArithmetic(paper, given);
   writeSecondOpinion(paper, revision);
-  writeChecking(paper, revision);
+  writeChecking(paper, revision, given.settled);
   writeFooters(paper, revision);
   return closePaper(paper);
 }

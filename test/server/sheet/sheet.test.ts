@@ -216,6 +216,16 @@ describe.for(["A4", "Letter"] as const)("writeSheet on %s", (paper) => {
 });
 
 describe("writeSheet", () => {
+  test("asks a checker only for what the plan has", async () => {
+    const order = { ...content.schedule.orders[0]!, when: { kind: "once" as const, at: content.setting.plan.start } };
+    const once = { ...content, schedule: { ...content.schedule, orders: [order], records: [] } };
+    const { pages } = await readPdf(await writeSheet({ ...revision, content: once }, { paper: "A4" }));
+    const asked = squeezed(pages.at(-1)!);
+    expect(asked).toContain(squeezed("Highest level in the plan (mg/L)"));
+    expect(asked).not.toContain(squeezed("steady state"));
+    expect((await sheetOn("A4")).text).toContain(squeezed("Peak at steady state (mg/L)"));
+  });
+
   test("gives the same bytes for the same revision, whatever the machine's zone", async () => {
     const hashOf = async () =>
       createHash("sha256")
