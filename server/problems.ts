@@ -26,6 +26,7 @@ export type ErrorCode = RequestErrorCode | StoreErrorCode | DriverErrorCode | Do
 
 /** Every way a request can fail: a new error code does not compile until it has its place here. */
 export const problemTable: Readonly<Record<ErrorCode, { readonly status: number; readonly title: string }>> = {
+  "malformed-request": { status: 400, title: "The request is not HTTP as this server reads it" },
   "malformed-json": { status: 400, title: "The body is not JSON" },
   "malformed-path": { status: 400, title: "The address cannot be read" },
   "too-deep": { status: 400, title: "The body is nested too deeply" },
@@ -34,6 +35,7 @@ export const problemTable: Readonly<Record<ErrorCode, { readonly status: number;
   "not-found": { status: 404, title: "Not here" },
   "no-route": { status: 404, title: "There is nothing at this address" },
   "wrong-method": { status: 405, title: "This cannot be done at this address" },
+  "too-slow": { status: 408, title: "The request did not end in time" },
   stale: { status: 409, title: "Somebody saved in between" },
   "too-large": { status: 413, title: "The body is too large" },
   "not-json": { status: 415, title: "The body must be JSON" },
@@ -47,6 +49,7 @@ export const problemTable: Readonly<Record<ErrorCode, { readonly status: number;
   "too-many-alternatives": { status: 422, title: "The case has no room for another alternative" },
   "key-reused": { status: 422, title: "The Idempotency-Key was used for another request" },
   "too-many-requests": { status: 429, title: "Too many requests" },
+  "headers-too-large": { status: 431, title: "The headers or the address are too long" },
   altered: { status: 500, title: "A stored record is not as it was stored" },
   "too-long": { status: 503, title: "The calculation takes too long" },
   "not-ready": { status: 503, title: "The server cannot answer now" },

@@ -6,6 +6,9 @@ export interface FieldProblem {
 
 /** What can be wrong with a request, apart from what shared/ and db/ find. */
 export type RequestErrorCode =
+  | "malformed-request"
+  | "headers-too-large"
+  | "too-slow"
   | "malformed-json"
   | "malformed-path"
   | "too-deep"

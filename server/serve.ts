@@ -1,6 +1,7 @@
 import { createServer, type Server } from "node:http";
 import type { AddressInfo } from "node:net";
 import type { Express } from "express";
+import { answerBrokenRequests } from "./broken-requests.ts";
 
 /** The server listens and can be stopped. */
 export interface Serving {
@@ -19,7 +20,9 @@ export async function serve(
   app: Express,
   { port, host, patienceMs = 15_000 }: { readonly port: number; readonly host: string; readonly patienceMs?: number },
 ): Promise<Serving> {
-  const server = createServer({ requestTimeout: 60_000, headersTimeout: 20_000 }, app);
+  // A missing Host header is refused by the app, with a problem document.
+  const server = createServer({ requestTimeout: 60_000, headersTimeout: 20_000, requireHostHeader: false }, app);
+  answerBrokenRequests(server);
   await new Promise<void>((resolve, reject) => {
     server.once("error", reject);
     server.listen(port, host, resolve);

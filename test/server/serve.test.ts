@@ -1,7 +1,8 @@
-import { connect } from "node:net";
+import { connect, type Socket } from "node:net";
 import express from "express";
-import { describe, expect, test } from "vitest";
+import { describe, expect, onTestFinished, test } from "vitest";
 import { serve } from "../../server/serve.ts";
+import { Problem } from "../../shared/contract/problem.ts";
 
 describe("serve", () => {
   test("rejects where the port is taken, and does not take that for success", async () => {
@@ -38,4 +39,52 @@ describe("serve", () => {
     await serving.stop();
     await closed;
   });
+
+  test.for([
+    { name: "is no HTTP", sent: "GARBAGE\r\n\r\n", type: "malformed-request", status: 400 },
+    {
+      name: "has two lengths",
+      sent: "POST / HTTP/1.1\r\nHost: x\r\nContent-Length: 1\r\nTransfer-Encoding: chunked\r\n\r\n",
+      type: "malformed-request",
+      status: 400,
+    },
+    {
+      name: "has a header without end",
+      sent: `GET / HTTP/1.1\r\nHost: x\r\nX: ${"x".repeat(20_000)}`,
+      type: "headers-too-large",
+      status: 431,
+    },
+  ])("answers what $name with a problem document", async ({ sent, type, status }) => {
+    const serving = await serve(express(), { port: 0, host: "127.0.0.1" });
+    onTestFinished(serving.stop);
+    const [head, body] = (await saidTo(serving.address, sent)).split("\r\n\r\n");
+    expect(head).toMatch(
+      new RegExp(`^HTTP/1\\.1 ${status} .*\r\nContent-Type: application/problem\\+json; charset=utf-8\r\n`),
+    );
+    expect(Problem.parse(JSON.parse(body!))).toMatchObject({ type: `/problems/${type}`, status });
+  });
+
+  test("leaves a missing Host header and an unknown expectation to the app", async () => {
+    const app = express();
+    app.use((_request, response) => void response.set("Connection", "close").send("the app"));
+    const serving = await serve(app, { port: 0, host: "127.0.0.1" });
+    onTestFinished(serving.stop);
+    expect(await saidTo(serving.address, "GET / HTTP/1.1\r\n\r\n")).toContain("the app");
+    expect(await saidTo(serving.address, "GET / HTTP/1.1\r\nHost: x\r\nExpect: x\r\n\r\n")).toContain("the app");
+  });
 });
+
+/** What a server answers to some bytes until it closes the connection. */
+function saidTo(address: string, sent: string): Promise<string> {
+  return new Promise((resolve, reject) => {
+    let said = "";
+    connect(Number(new URL(address).port), "127.0.0.1", function (this: Socket) {
+      this.write(sent);
+    })
+      .on("data", (bytes) => {
+        said += String(bytes);
+      })
+      .on("close", () => resolve(said))
+      .on("error", reject);
+  });
+}
