@@ -10,7 +10,21 @@ export type RegimenId = z.infer<typeof RegimenId>;
 export const RevisionId = z.uuid().brand<"RevisionId">();
 export type RevisionId = z.infer<typeof RevisionId>;
 
-const label = z.string().trim().min(1, { error: "must not be empty" }).max(counts.labelCharacters);
+/**
+ * One line of text that reads as it was typed. Signs that turn the direction of writing could make the
+ * text beside a label, such as a dose, look like another; letters of right-to-left scripts need none.
+ */
+const oneLine = (whenEmpty: string) =>
+  z
+    .string()
+    .trim()
+    .min(1, { error: whenEmpty })
+    .max(counts.labelCharacters)
+    .refine((text) => !/[\p{Cc}\u2028-\u202e\u2066-\u2069]/u.test(text), {
+      error: "must be one line without control characters or signs that turn the direction of writing",
+    });
+
+const label = oneLine("must not be empty");
 const note = z.string().max(counts.noteCharacters);
 
 /** An IANA zone that this machine's time zone data knows. */
@@ -116,7 +130,7 @@ export const RevisionDraft = z
   .strictObject({
     basedOnNumber: z.int().min(0),
     reason: z.string().trim().min(3, { error: "must say why, in at least 3 characters" }).max(counts.noteCharacters),
-    preparedBy: z.string().trim().min(1, { error: "must name who prepared it" }).max(counts.labelCharacters),
+    preparedBy: oneLine("must name who prepared it"),
     content: RegimenContent,
   })
   .meta({ id: "RevisionDraft" });

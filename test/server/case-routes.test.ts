@@ -65,6 +65,24 @@ describe("POST /api/cases", () => {
     await made("2026-05-04T13:30:00Z").expect(201);
   });
 
+  test.for(["a\nb", "a\tb", "a\u001b[31m", "a\u2028b", "\u202egm 001", "\u2067gm 001\u2069"])(
+    "refuses a label that does not read as it was typed (%j)",
+    async (label) => {
+      const { body } = await write(makeApp().app, "post", "/api/cases", { ...caseDraft, label }).expect(422);
+      expect(body.errors).toEqual([
+        {
+          pointer: "#/label",
+          detail: `must be one line without control characters or signs that turn the direction of writing, got ${JSON.stringify(label)}`,
+        },
+      ]);
+    },
+  );
+
+  test("takes labels in right-to-left scripts and composed signs", async () => {
+    const label = "\u0645\u0631\u064a\u0636 \u05d7\u05d5\u05dc\u05d4 \u{1f469}\u200d\u2695\ufe0f";
+    await write(makeApp().app, "post", "/api/cases", { ...caseDraft, label }).expect(201);
+  });
+
   test.for(["a\u0000b", "a\ud800"])(
     "refuses text that the database would not give back as it came (%j)",
     async (label) => {
