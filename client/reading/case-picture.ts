@@ -44,8 +44,8 @@ export function pictureOf(input: CasePictureInput): CurvePicture {
     const stepsBack = motion === "in-hand" && !selected;
     const dash = stepsBack ? [] : look.dash;
     if (prediction.planned)
-      lines.push({ points: drawn(prediction.planned.made, window, plotPx).points, colour, dash, widthPx: 1 });
-    const { points, turns } = drawn(prediction.given.made, window, plotPx);
+      lines.push({ points: drawn(prediction.planned.made, window, plotPx, scale).points, colour, dash, widthPx: 1 });
+    const { points, turns } = drawn(prediction.given.made, window, plotPx, scale);
     lines.push({ points, colour, dash, widthPx: selected ? 2.75 : stepsBack ? 1 : 1.75, letter });
     const named = outermost(turns);
     for (const turn of selected ? pointsToMark(turns, plotPx / pixelsPerMark) : named) {
@@ -59,6 +59,7 @@ export function pictureOf(input: CasePictureInput): CurvePicture {
 interface Drawn {
   readonly window: TimeWindow;
   readonly plotPx: number;
+  readonly scale: LevelScale;
   readonly points: readonly CurvePoint[];
   readonly turns: readonly TurningPoint[];
 }
@@ -66,10 +67,11 @@ interface Drawn {
 const known = new WeakMap<Walk, Drawn>();
 
 /** Remembered by walk, so that moving a dose of one alternative draws the others from what is there. */
-function drawn(made: Walk, window: TimeWindow, plotPx: number): Drawn {
+function drawn(made: Walk, window: TimeWindow, plotPx: number, scale: LevelScale): Drawn {
   const found = known.get(made);
-  if (found?.window === window && found.plotPx === plotPx) return found;
-  const fresh = { window, plotPx, points: curvePoints(made, window, plotPx), turns: turningPoints(made, window) };
+  if (found?.window === window && found.plotPx === plotPx && found.scale === scale) return found;
+  const points = curvePoints(made, window, plotPx, scale);
+  const fresh = { window, plotPx, scale, points, turns: turningPoints(made, window) };
   known.set(made, fresh);
   return fresh;
 }

@@ -5,6 +5,8 @@ import {
   type TimeWindow,
 } from "../../shared/kinetics/monotone-pieces.ts";
 import type { Walk } from "../../shared/kinetics/walk.ts";
+import { bends, heightOn } from "./bends.ts";
+import type { LevelScale } from "./curve-picture.ts";
 
 /** One point of a curve: elapsed hours and mg/L. */
 export interface CurvePoint {
@@ -22,14 +24,21 @@ const mostPointsPerPixel = 4;
  * its first, lowest, highest and last point, so that no peak is lost.
  *
  * @param widthPx width of the plot for the whole window
+ * @param drawnOn the axis it is drawn on: points that no eye could tell from a straight line are left out
  */
-export function curvePoints(made: Walk, window: TimeWindow, widthPx: number): CurvePoint[] {
+export function curvePoints(made: Walk, window: TimeWindow, widthPx: number, drawnOn?: LevelScale): CurvePoint[] {
   const pieces = monotonePieces(made, window);
   const pixelsPerH = Math.max(1, widthPx) / (window.toH - window.fromH);
+  const heightPx = drawnOn && heightOn(drawnOn, highestOf(pieces));
   const points: CurvePoint[] = [];
   pieces.forEach((piece, index) => {
     points.push({ x: piece.fromH, y: piece.startMgPerL });
-    pushInside(points, made, piece, pixelsPerH);
+    const inside = insideOf(made, piece, pixelsPerH);
+    if (heightPx === undefined) points.push(...inside);
+    else {
+      const end = { x: piece.untilH, y: piece.endMgPerL };
+      points.push(...bends([points.at(-1)!, ...inside, end], pixelsPerH, heightPx));
+    }
     const next = pieces[index + 1];
     if (next === undefined || next.startMgPerL !== piece.endMgPerL)
       points.push({ x: piece.untilH, y: piece.endMgPerL });
@@ -37,13 +46,19 @@ export function curvePoints(made: Walk, window: TimeWindow, widthPx: number): Cu
   return points.length > mostPointsPerPixel * widthPx ? thinned(points, window, pixelsPerH) : points;
 }
 
-function pushInside(points: CurvePoint[], made: Walk, piece: MonotonePiece, pixelsPerH: number): void {
+function highestOf(pieces: readonly MonotonePiece[]): number {
+  return pieces.reduce((high, piece) => Math.max(high, piece.startMgPerL, piece.endMgPerL), 0);
+}
+
+function insideOf(made: Walk, piece: MonotonePiece, pixelsPerH: number): CurvePoint[] {
+  const points: CurvePoint[] = [];
   const lengthH = piece.untilH - piece.fromH;
   const steps = Math.ceil((lengthH * pixelsPerH) / pixelsPerPoint);
   for (let step = 1; step < steps; step++) {
     const intoH = (lengthH * step) / steps;
     points.push({ x: piece.fromH + intoH, y: levelWithin(made, piece, intoH) });
   }
+  return points;
 }
 
 function thinned(points: readonly CurvePoint[], window: TimeWindow, pixelsPerH: number): CurvePoint[] {

@@ -50,6 +50,30 @@ describe("curvePoints", () => {
     expect(Math.max(...drawn.map(({ y }) => y))).toBe(levelsAt(dense, [777])[0]);
   });
 
+  test.each(["linear", "logarithmic"] as const)(
+    "as drawn on a %s axis has far fewer points, the same events, and is nowhere a fifth of a pixel off",
+    (scale) => {
+      const window = { fromH: 0, toH: 24 };
+      const all = curvePoints(made, window, 1_200);
+      const drawn = curvePoints(made, window, 1_200, scale);
+      expect(drawn.length).toBeLessThan(all.length / 3);
+      for (const atH of [0, 6, 12, 12.5, 24]) {
+        const at = (points: typeof all) => points.filter(({ x }) => x === atH);
+        expect(at(drawn)).toEqual(at(all));
+      }
+      const high = Math.max(...all.map(({ y }) => y));
+      const pixel = (y: number) => (scale === "linear" ? (y / high) * 384 : Math.log10(y / high) * 384);
+      let segment = 0;
+      for (const { x, y } of all.slice(1, -1)) {
+        while (drawn[segment + 1]!.x < x) segment++;
+        const [from, to] = [drawn[segment]!, drawn[segment + 1]!];
+        if (x === from.x || x === to.x || !(from.y > 0)) continue;
+        const line = pixel(from.y) + ((pixel(to.y) - pixel(from.y)) * (x - from.x)) / (to.x - from.x);
+        expect(Math.abs(line - pixel(y))).toBeLessThan(0.2);
+      }
+    },
+  );
+
   test("keeps to a part of the plan", () => {
     const part = curvePoints(made, { fromH: 5, toH: 7 }, 300);
     expect(part[0]!.x).toBe(5);
