@@ -37,7 +37,7 @@ export interface CurvePicture {
 /** A logarithmic axis shows at most this many powers of ten below the top: a level that decays for ever has no bottom. */
 const decadesShown = 4;
 
-/** Lowest and highest level of an axis that holds the lines and the range. */
+/** Lowest and highest level of an axis that holds the lines and the range, in steps, so that it rests while a curve moves a little. */
 export function levelBounds({ lines, range, scale }: CurvePicture): { readonly low: number; readonly high: number } {
   let high = range?.high ?? 0;
   let lowestPositive = range !== undefined && range.low > 0 ? range.low : Infinity;
@@ -48,6 +48,13 @@ export function levelBounds({ lines, range, scale }: CurvePicture): { readonly l
     }
   }
   if (!(high > 0)) high = 1;
-  if (scale === "linear") return { low: 0, high: high * 1.06 };
-  return { low: Math.max(Math.min(lowestPositive, high / 10) * 0.9, high / 10 ** decadesShown), high: high * 1.2 };
+  if (scale === "linear") return { low: 0, high: inSteps(high * 1.06, Math.ceil) };
+  const low = Math.max(Math.min(lowestPositive, high / 10) * 0.9, high / 10 ** decadesShown);
+  return { low: inSteps(low, Math.floor), high: inSteps(high * 1.2, Math.ceil) };
+}
+
+/** Two digits of a level, rounded away from the curves. */
+function inSteps(mgPerL: number, round: (steps: number) => number): number {
+  const step = 10 ** (Math.floor(Math.log10(mgPerL)) - 1);
+  return round(mgPerL / step) * step;
 }
