@@ -14,11 +14,13 @@ import { nameOfDose, sayStatus } from "./dose-words.ts";
 import { markId } from "./mark-layout.ts";
 import { predictionOf } from "./predictions.ts";
 import { selectedKeyOf } from "./selected.ts";
+import { usePaced } from "./use-paced.ts";
 
 /** The editor of the dose that was opened on the ruler; nothing while none is. */
 export function DoseEditor({ view }: { view: CurveView }) {
+  const contents = usePaced(view).value;
   const alternativeKey = selectedKeyOf(view.model);
-  const content = alternativeKey === undefined ? undefined : view.contents.value.get(alternativeKey);
+  const content = alternativeKey === undefined ? undefined : contents.get(alternativeKey);
   const prediction = content && predictionOf(content);
   const dose = prediction?.ok ? prediction.doses.find(({ key }) => key === view.editing.value) : undefined;
   if (dose === undefined || content === undefined || alternativeKey === undefined) return null;

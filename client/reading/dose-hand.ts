@@ -8,6 +8,7 @@ import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { newId } from "../case/new-id.ts";
 import { announce } from "../shell/announce.ts";
+import { afterPaint } from "./after-paint.ts";
 import { type DoseChange, editDose, removeDose } from "./dose-edits.ts";
 import { capital, nameOfDose } from "./dose-words.ts";
 import { type Moved, movedPrediction } from "./moved-prediction.ts";
@@ -26,11 +27,15 @@ export interface Held extends Moved {
 /** The hand that moves doses. From taking to dropping is one undo step, however far it goes. */
 export interface DoseHand {
   readonly held: ReadonlySignal<Held | undefined>;
+  /** A dose as it stands in the hand; undefined for one that is not in it. */
+  inHand(doseKey: string): ScheduledDose | undefined;
   /** Why the newest move or edit was refused or cut short; it is over as soon as the document changes. */
   readonly objection: ReadonlySignal<string>;
   take(key: string, dose: ScheduledDose): void;
   moveTo(atH: number): void;
   drop(): void;
+  /** Drops it once the curve has been painted: writing it down takes longer than a frame has. */
+  letGo(): void;
   /** Puts the dose back where it was taken. */
   putBack(): void;
   /** Changes a dose at once. */
@@ -90,6 +95,11 @@ export function createDoseHand(model: CaseModel): DoseHand {
     });
   return {
     held,
+    inHand(doseKey) {
+      if (held.value?.doseKey !== doseKey) return undefined;
+      const prediction = predictionOf(held.value.content);
+      return prediction.ok ? prediction.doses.find(({ key }) => key === doseKey) : undefined;
+    },
     objection: computed(() => (said.value.about === model.document.value ? said.value.text : "")),
     take(key, dose) {
       drop();
@@ -117,6 +127,12 @@ export function createDoseHand(model: CaseModel): DoseHand {
       resting = setTimeout(writeHeld, restMs);
     },
     drop,
+    letGo() {
+      const mine = grip;
+      afterPaint(() => {
+        if (grip === mine) drop();
+      });
+    },
     putBack() {
       batch(() => {
         if (grip?.written) model.undo();

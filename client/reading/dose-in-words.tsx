@@ -2,11 +2,13 @@ import type { CurveView } from "./curve-view.ts";
 import { sayDose } from "./dose-words.ts";
 import { predictionOf } from "./predictions.ts";
 import { selectedKeyOf } from "./selected.ts";
+import { usePaced } from "./use-paced.ts";
 
 /** The dose that the hand or the keyboard is on, in words; below it what was done last. */
 export function DoseInWords({ view }: { view: CurveView }) {
+  const contents = usePaced(view).value;
   const key = selectedKeyOf(view.model);
-  const content = key === undefined ? undefined : view.contents.value.get(key);
+  const content = key === undefined ? undefined : contents.get(key);
   const prediction = content && predictionOf(content);
   const dose = prediction?.ok ? prediction.doses.find((each) => each.key === view.activeKey.value) : undefined;
   return (

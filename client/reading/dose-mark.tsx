@@ -1,3 +1,4 @@
+import { useComputed } from "@preact/signals";
 import { useMemo, useRef } from "preact/hooks";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { CurveView } from "./curve-view.ts";
@@ -5,6 +6,7 @@ import { DoseGlyph } from "./dose-glyph.tsx";
 import { sayDose } from "./dose-words.ts";
 import { frameOnce } from "./frame-once.ts";
 import { markId, type PlacedMark, placeOf } from "./mark-layout.ts";
+import { pixelAt } from "./plot-scale.ts";
 import { snappedH } from "./snap.ts";
 
 interface DoseMarkProps {
@@ -28,6 +30,8 @@ interface Drag {
 /** One dose: dragged by the pointer, moved and deleted by keys, opened for typing by a click or Enter. */
 export function DoseMark({ view, alternativeKey, content, mark, tabIndex, onKeyDown }: DoseMarkProps) {
   const { dose } = mark;
+  const inHand = useComputed(() => view.hand.inHand(dose.key)).value;
+  const place = inHand ? { xPx: pixelAt(inHand.atH, view.window.value, view.plotPx.value), row: 0 } : mark;
   const drag = useRef<Drag | undefined>(undefined);
   const move = useMemo(() => frameOnce((atH: number) => view.hand.moveTo(atH)), [view]);
   const words = sayDose(dose, content.schedule, content.timeZone);
@@ -54,22 +58,24 @@ export function DoseMark({ view, alternativeKey, content, mark, tabIndex, onKeyD
     <button
       id={markId(dose.key)}
       type="button"
-      class={`mark-place dose-mark${view.hand.held.value?.doseKey === dose.key ? " dose-held" : ""}`}
+      class={`mark-place dose-mark${inHand ? " dose-held" : ""}`}
       tabIndex={tabIndex}
       aria-label={words}
       title={words}
-      style={placeOf(mark)}
+      style={placeOf(place)}
       onFocus={() => {
         view.activeKey.value = dose.key;
       }}
       onKeyDown={(event) => {
+        // What is done next is done to the dose as it was let go.
+        if (drag.current === undefined && !event.repeat) view.hand.drop();
         if (event.key === "Escape" && drag.current?.moved) {
           end("put-back");
           drag.current = undefined;
         } else onKeyDown(event);
       }}
       onKeyUp={() => {
-        if (drag.current === undefined) view.hand.drop();
+        if (drag.current === undefined) view.hand.letGo();
       }}
       onBlur={() => view.hand.drop()}
       onPointerDown={(event) => {
@@ -90,7 +96,7 @@ export function DoseMark({ view, alternativeKey, content, mark, tabIndex, onKeyD
         drag.current = undefined;
       }}
     >
-      <DoseGlyph kind={dose.give.kind} status={dose.status} />
+      <DoseGlyph kind={dose.give.kind} status={(inHand ?? dose).status} />
     </button>
   );
 }

@@ -1,3 +1,4 @@
+import { useComputed } from "@preact/signals";
 import { useLayoutEffect, useRef } from "preact/hooks";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
@@ -9,6 +10,7 @@ import { LaneBars } from "./lane-bars.tsx";
 import { inkOf } from "./line-sample.tsx";
 import { keyOfMark, markId, markPx, type PlacedMark, placeMarks, placeOf } from "./mark-layout.ts";
 import { pixelAt } from "./plot-scale.ts";
+import { predictionOf } from "./predictions.ts";
 import { steppedH } from "./snap.ts";
 
 interface EditedLaneProps {
@@ -25,7 +27,7 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
   const window = view.window.value;
   const pixelOf = (atH: number) => pixelAt(atH, window, plotPx);
   const placed = placeMarks(doses, pixelOf, plotPx, {
-    heldKey: view.hand.held.value?.doseKey,
+    heldKey: useComputed(() => view.hand.held.value?.doseKey).value,
     activeKey: view.activeKey.value,
   });
   const stop =
@@ -41,7 +43,9 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
     if (event.ctrlKey || event.metaKey || event.altKey) return;
     const acted =
       mark.kind === "dose" &&
-      actOn(view, alternativeKey, mark.dose, event, () => focusNeighbour(placed, mark, look.letter));
+      actOn(view, alternativeKey, asWritten(view, alternativeKey, mark.dose), event, () =>
+        focusNeighbour(placed, mark, look.letter),
+      );
     if (!acted && !walkAlong(view, placed, mark, event.key)) return;
     event.preventDefault();
   };
@@ -61,7 +65,7 @@ export function EditedLane({ view, alternativeKey, content, look, doses }: Edite
       aria-describedby="ruler-keys"
       style={{ width: `${plotPx}px`, height: `${rows * markPx}px` }}
     >
-      <LaneBars doses={doses} marks={single} pixelOf={pixelOf} plotPx={plotPx} rows={rows} />
+      <LaneBars doses={doses} marks={single} pixelOf={pixelOf} plotPx={plotPx} rows={rows} hand={view.hand} />
       {steady.map((mark) =>
         mark.kind === "dose" ? (
           <DoseMark
@@ -110,6 +114,13 @@ function zoomTo(view: CurveView, doses: readonly ScheduledDose[]): void {
   const lengthH = Math.max(1, doses.at(-1)!.atH - fromH);
   view.activeKey.value = doses[0]!.key;
   view.show({ fromH: fromH - lengthH / 2, toH: fromH + 1.5 * lengthH });
+}
+
+/** The dose as it is in the document, which a quick second key finds ahead of what is drawn. */
+function asWritten({ model }: CurveView, alternativeKey: string, dose: ScheduledDose): ScheduledDose {
+  const content = model.contents.peek().get(alternativeKey);
+  const prediction = content && predictionOf(content);
+  return (prediction?.ok ? prediction.doses.find(({ key }) => key === dose.key) : undefined) ?? dose;
 }
 
 /** Moves, removes or leaves a dose, by its key; false where the key means nothing to it. */

@@ -1,4 +1,6 @@
+import { useComputed } from "@preact/signals";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
+import type { DoseHand } from "./dose-hand.ts";
 import { markPx } from "./mark-layout.ts";
 
 interface LaneBarsProps {
@@ -7,17 +9,19 @@ interface LaneBarsProps {
   readonly pixelOf: (atH: number) => number;
   readonly plotPx: number;
   readonly rows: number;
+  /** What may hold one of the doses. */
+  readonly hand?: DoseHand;
 }
 
 /** How long each dose runs, and where a dose that was given otherwise had been planned. */
-export function LaneBars({ doses, marks, pixelOf, plotPx, rows }: LaneBarsProps) {
+export function LaneBars({ doses, marks, pixelOf, plotPx, rows, hand }: LaneBarsProps) {
   // What began before the part in view has no mark there, but may still run.
   const running = doses.filter((dose) => pixelOf(dose.atH) < 0 && pixelOf(dose.atH + lengthH(dose)) > 0);
   const bars = [...running.map((dose) => ({ dose, row: 0 })), ...marks.filter(({ dose }) => !running.includes(dose))];
   return (
     <svg class="lane-bars" width={plotPx} height={rows * markPx} aria-hidden="true">
       {bars.map(({ dose, row }) => (
-        <Bar key={dose.key} dose={dose} y={(row + 0.5) * markPx} pixelOf={pixelOf} plotPx={plotPx} />
+        <Bar key={dose.key} dose={dose} y={(row + 0.5) * markPx} pixelOf={pixelOf} plotPx={plotPx} hand={hand} />
       ))}
     </svg>
   );
@@ -28,9 +32,11 @@ interface BarProps {
   readonly y: number;
   readonly pixelOf: (atH: number) => number;
   readonly plotPx: number;
+  readonly hand: DoseHand | undefined;
 }
 
-function Bar({ dose, y, pixelOf, plotPx }: BarProps) {
+function Bar({ dose: written, y, pixelOf, plotPx, hand }: BarProps) {
+  const dose = useComputed(() => hand?.inHand(written.key)).value ?? written;
   const fromPx = Math.max(0, pixelOf(dose.atH));
   const toPx = Math.min(plotPx, pixelOf(dose.atH + lengthH(dose)));
   const { plannedAtH } = dose;

@@ -8,12 +8,13 @@ import type { CurveView } from "./curve-view.ts";
 import { LineSample } from "./line-sample.tsx";
 import { levelAt, predictionOf } from "./predictions.ts";
 import { selectedKeyOf } from "./selected.ts";
+import { usePaced } from "./use-paced.ts";
 
 /** Which line is which, and the level of each at the cursor. */
 export function Readout({ view }: { view: CurveView }) {
+  const contents = [...usePaced(view).value];
   const when = useComputed(() => view.span.value && sayHour(view.cursorH.value, view.span.value)).value;
   if (when === undefined) return null;
-  const contents = [...view.contents.value];
   const followed = contents.some(([, content]) => {
     const prediction = predictionOf(content);
     return prediction.ok && prediction.planned !== undefined;

@@ -25,9 +25,9 @@ interface LaneProps {
   readonly place: number;
 }
 
-/** Drawn anew only when its own alternative changes, so that a dose in the hand costs one lane a frame. */
+/** Drawn anew only when its own alternative is written: a dose in the hand moves its own mark alone. */
 function Lane({ view, alternativeKey, place }: LaneProps) {
-  const content = useComputed(() => view.contents.value.get(alternativeKey)).value;
+  const content = useComputed(() => view.model.contents.value.get(alternativeKey)).value;
   const selected = useComputed(() => selectedKeyOf(view.model) === alternativeKey).value;
   if (content === undefined) return null;
   const look = lookAt(place);
