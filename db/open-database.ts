@@ -117,7 +117,7 @@ function refusalOf(error: unknown): unknown {
   if (
     code.startsWith("SQLITE_IOERR") ||
     code.startsWith("SQLITE_CANTOPEN") ||
-    code === "SQLITE_READONLY" ||
+    code.startsWith("SQLITE_READONLY") ||
     code === "SQLITE_FULL"
   )
     return new DatabaseRefused("unreachable", `the database file cannot be read and written: ${code}`, {

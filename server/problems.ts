@@ -114,7 +114,7 @@ function codeOf(error: unknown): ErrorCode {
   if (Object.hasOwn(problemTable, own)) return own as ErrorCode;
   if (own === "SQLITE_FULL") return "storage-full";
   if (own.startsWith("SQLITE_BUSY")) return "storage-busy";
-  if (own.startsWith("SQLITE_IOERR") || own.startsWith("SQLITE_CORRUPT")) return "storage-failed";
+  if (/^SQLITE_(IOERR|CORRUPT|READONLY|CANTOPEN)/.test(own)) return "storage-failed";
   // The router of Express throws for an escape that it cannot read.
   return error instanceof URIError || ("status" in error && error.status === 400) ? "malformed-path" : "internal";
 }

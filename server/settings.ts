@@ -17,7 +17,12 @@ const Environment = z.object({
     .string()
     .regex(/^[A-Za-z0-9.:_-]+$/, { error: "must be a host name or an address" })
     .default("127.0.0.1"),
-  EBBLINE_DATABASE: z.string().min(1, { error: "must be the path of a file" }).optional(),
+  EBBLINE_DATABASE: z
+    .string()
+    .min(1, { error: "must be the path of a file" })
+    // To the driver this is a database in memory: everything saved would be gone with the program.
+    .refine((path) => path.trim() !== ":memory:", { error: "must be the path of a file that stays" })
+    .optional(),
   EBBLINE_LOG_LEVEL: z
     .enum(["fatal", "error", "warn", "info", "debug", "trace", "silent"], {
       error: "must be fatal, error, warn, info, debug, trace or silent",

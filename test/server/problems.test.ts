@@ -207,6 +207,7 @@ describe("a fault of our own", () => {
     { code: "SQLITE_FULL", status: 507, gaveUp: [] },
     { code: "SQLITE_BUSY", status: 503, gaveUp: [] },
     { code: "SQLITE_IOERR_FSYNC", status: 500, gaveUp: ["the disk failed"] },
+    { code: "SQLITE_READONLY_DIRECTORY", status: 500, gaveUp: ["the disk failed"] },
   ])("of the disk, $code, is a $status", async ({ code, status, gaveUp }) => {
     const made = makeApp();
     made.needs.stores.cases.add = async () => {

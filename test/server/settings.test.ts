@@ -42,6 +42,10 @@ describe("readSettings", () => {
       environment: { EBBLINE_LOG_LEVEL: "loud" },
       message: 'EBBLINE_LOG_LEVEL must be fatal, error, warn, info, debug, trace or silent, got "loud"',
     },
+    {
+      environment: { EBBLINE_DATABASE: ":memory:" },
+      message: 'EBBLINE_DATABASE must be the path of a file that stays, got ":memory:"',
+    },
     { environment: { EBBLINE_DATABASE: "" }, message: 'EBBLINE_DATABASE must be the path of a file, got ""' },
     {
       environment: { EBBLINE_BEHIND_TLS: "true" },
