@@ -1,5 +1,5 @@
 import type { Caution } from "../../shared/contract/caution.ts";
-import { offsetMinutes, sayClock, sayTime } from "../../shared/schedule/clock.ts";
+import { sayClock, sayOffset, sayTime } from "../../shared/schedule/clock.ts";
 import { ChoiceField } from "./choice-field.tsx";
 import { type MomentText, type ReadMoment, readMoment } from "./moment.ts";
 import { TextField, type TypingStage } from "./text-field.tsx";
@@ -58,12 +58,10 @@ export function MomentField(props: MomentFieldProps) {
   );
 }
 
-/** "Sun 29 Mar 2026 08:00, UTC+01:00": the offset tells the two 01:30 of an autumn night apart. */
+/** "Sun 29 Mar 2026 08:00 (UTC+01:00)": the offset tells the two 01:30 of an autumn night apart. */
 export function sayInstant(instant: string, timeZone: string): string {
-  const minutes = offsetMinutes(instant, timeZone);
-  const size = Math.abs(minutes);
-  const clock = [Math.floor(size / 60), size % 60].map((part) => String(part).padStart(2, "0")).join(":");
-  return `${sayClock(instant, timeZone)}, UTC${minutes < 0 ? "−" : "+"}${clock}`;
+  const said = sayClock(instant, timeZone);
+  return said.endsWith(")") ? said : `${said} (UTC${sayOffset(instant, timeZone)})`;
 }
 
 function jumpCautions(read: ReadMoment, timeZone: string, about: string): Caution[] {

@@ -120,7 +120,8 @@ function Answers({ contents, question }: { contents: readonly RegimenContent[]; 
         <thead>
           <tr>
             <th scope="col">Alternative</th>
-            <th scope="col">If nothing more is given</th>
+            <th scope="col">If nothing more is given: what runs is stopped</th>
+            <th scope="col">If no dose begins: what runs is finished</th>
             <th scope="col">If the plan goes on</th>
           </tr>
         </thead>
@@ -131,6 +132,7 @@ function Answers({ contents, question }: { contents: readonly RegimenContent[]; 
                 {lookAt(place).letter} {content.regimenLabel}
               </th>
               <td>{sayAnswer(content, { ...question, meanwhile: "nothing-more" })}</td>
+              <td>{sayAnswer(content, { ...question, meanwhile: "nothing-begins" })}</td>
               <td>{sayAnswer(content, { ...question, meanwhile: "plan-goes-on" })}</td>
             </tr>
           ))}

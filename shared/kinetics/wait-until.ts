@@ -9,8 +9,11 @@ export interface WaitQuestion {
   readonly fromH: number;
   readonly mgPerL: number;
   readonly direction: "below" | "above";
-  /** "nothing-more": no dose begins after fromH; what is already running or being absorbed goes on to its end. */
-  readonly meanwhile: "nothing-more" | "plan-goes-on";
+  /**
+   * "nothing-more": whatever runs is stopped at fromH, and only what is in the body or being absorbed is left.
+   * "nothing-begins": no dose begins after fromH, and what runs goes on to its end.
+   */
+  readonly meanwhile: "nothing-more" | "nothing-begins" | "plan-goes-on";
 }
 
 export type WaitAnswer =
@@ -34,7 +37,7 @@ export function waitUntil(course: Course, question: WaitQuestion): WaitAnswer {
     throw new DomainError("fromH", fromH, `from 0 to below ${course.horizonH}`);
   if (!(mgPerL >= 0)) throw new DomainError("mgPerL", mgPerL, "0 or more");
   const followed =
-    meanwhile === "plan-goes-on" ? course : { ...course, doses: course.doses.filter((dose) => beginsH(dose) <= fromH) };
+    meanwhile === "plan-goes-on" ? course : { ...course, doses: dosesFollowed(course, fromH, meanwhile) };
   const [nowMgPerL] = levelsAt(walk(followed), [fromH]);
   if (direction === "below" ? nowMgPerL! < mgPerL : nowMgPerL! > mgPerL) return { kind: "already", mgPerL: nowMgPerL! };
   const wanted = direction === "below" ? "falling" : "rising";
@@ -52,6 +55,26 @@ export function waitUntil(course: Course, question: WaitQuestion): WaitAnswer {
     kind: "never",
     why: direction === "below" ? neverBelow(followed, mgPerL) : "what has been given does not reach it",
   };
+}
+
+function dosesFollowed(
+  { doses }: Course,
+  fromH: number,
+  meanwhile: "nothing-more" | "nothing-begins",
+): Course["doses"] {
+  const begun = doses.filter((dose) => beginsH(dose) <= fromH);
+  return meanwhile === "nothing-begins" ? begun : begun.flatMap((dose) => stopped(dose, fromH));
+}
+
+/** A dose whose pump or infusion is stopped at an hour; what was swallowed or injected stays given. */
+function stopped(dose: Course["doses"][number], atH: number): Course["doses"] {
+  if (dose.kind === "infusion") {
+    const ranH = Math.min(dose.durationH, atH - dose.atH);
+    return ranH > 0 ? [{ ...dose, durationH: ranH, amountMg: (dose.amountMg * ranH) / dose.durationH }] : [];
+  }
+  if (dose.kind !== "pump") return [dose];
+  const before = dose.steps.filter((step) => step.atH < atH);
+  return before.length === 0 ? [] : [{ kind: "pump", steps: [...before, { atH, rateMgPerH: 0 }] }];
 }
 
 function neverBelow(course: Course, mgPerL: number): string {

@@ -59,9 +59,23 @@ export function instantAt(start: Instant, hours: number, zone: string): Instant 
   return instantOf(Math.round((Date.parse(start) + hours * msPerHour) / 1_000) * 1_000, zone);
 }
 
-/** Date and 24-hour time as they are read out: "Sun 29 Mar 2026 02:30". */
+/**
+ * Date and 24-hour time as they are read out: "Sun 29 Mar 2026 02:30". Of a time that comes twice the offset
+ * is said too, or the two could not be told apart: "Sun 25 Oct 2026 01:30 (UTC+01:00)".
+ */
 export function sayClock(instant: Instant, zone: string): string {
-  return format(inZone(instant, zone), "EEE d MMM yyyy HH:mm");
+  const said = format(inZone(instant, zone), "EEE d MMM yyyy HH:mm");
+  return comesTwice(Date.parse(instant), zone) ? `${said} (UTC${sayOffset(instant, zone)})` : said;
+}
+
+/** Minutes east of Greenwich at an instant. */
+export function offsetMinutes(instant: Instant, zone: string): number {
+  return offsetMs(zone, Date.parse(instant)) / msPerMinute;
+}
+
+/** Hours and minutes east of Greenwich at an instant: "+01:00". */
+export function sayOffset(instant: Instant, zone: string): string {
+  return offsetText(offsetMs(zone, Date.parse(instant)));
 }
 
 /** Date alone: "Sun 29 Mar 2026". */
@@ -72,11 +86,6 @@ export function sayDate(instant: Instant, zone: string): string {
 /** 24-hour time alone: "02:30". */
 export function sayTime(instant: Instant, zone: string): string {
   return format(inZone(instant, zone), "HH:mm");
-}
-
-/** Minutes east of Greenwich at an instant. */
-export function offsetMinutes(instant: Instant, zone: string): number {
-  return offsetMs(zone, Date.parse(instant)) / msPerMinute;
 }
 
 /** Local milliseconds, as if the wall clock were UTC. Only times that a calendar and a 24-hour clock have. */
@@ -115,14 +124,25 @@ function offsetMs(zone: string, instantMs: number): number {
   return offset;
 }
 
+/** Whether the wall clock shows this time once more within the hours around a change. */
+function comesTwice(instantMs: number, zone: string): boolean {
+  const offset = offsetMs(zone, instantMs);
+  const around = [offsetMs(zone, instantMs - 3 * msPerHour), offsetMs(zone, instantMs + 3 * msPerHour)];
+  return around.some((other) => other !== offset && offsetMs(zone, instantMs + offset - other) === other);
+}
+
+/** "+01:00": hours and minutes east of Greenwich. */
+function offsetText(offset: number): string {
+  const minutes = Math.abs(offset) / msPerMinute;
+  const two = (number: number) => String(number).padStart(2, "0");
+  return `${offset < 0 ? "-" : "+"}${two(Math.floor(minutes / 60))}:${two(minutes % 60)}`;
+}
+
 /** ISO 8601 with the offset that holds in the zone, "Z" where there is none; whole seconds. */
 function instantOf(instantMs: number, zone: string): Instant {
   const offset = offsetMs(zone, instantMs);
   const local = new Date(instantMs + offset).toISOString().slice(0, 19);
-  if (offset === 0) return `${local}Z`;
-  const minutes = Math.abs(offset) / msPerMinute;
-  const two = (number: number) => String(number).padStart(2, "0");
-  return `${local}${offset < 0 ? "-" : "+"}${two(Math.floor(minutes / 60))}:${two(minutes % 60)}`;
+  return `${local}${offset === 0 ? "Z" : offsetText(offset)}`;
 }
 
 function inZone(instant: Instant, zone: string): TZDate {

@@ -52,7 +52,7 @@ describe("mistakes in the setting", () => {
     await page.keyboard.press("Tab");
     const setting = page.getByRole("region", { name: "Who and what drug" });
     await setting.getByRole("radio", { name: "the second, after the clock went back" }).check();
-    await setting.getByText("Sun 25 Oct 2026 01:30, UTC+00:00").first().waitFor();
+    await setting.getByText("Sun 25 Oct 2026 01:30 (UTC+00:00)").first().waitFor();
     await expectSound(page);
     await page.context().close();
   });

@@ -100,7 +100,7 @@ describe("reading a case", () => {
     // From the peak of 100 (1 - e^-0.125) mg/L: t = ln(peak / 2) / 0.125.
     const waitH = Math.log((100 * (1 - Math.exp(-0.125))) / 2) / 0.125;
     expect(row![1]).toContain(`${Number(waitH.toPrecision(4))} h to wait`);
-    expect(row![2]).toContain("not before the plan ends");
+    expect(row![3]).toContain("not before the plan ends");
     await page.context().close();
   });
 

@@ -107,7 +107,7 @@ describe("sayAnswer", () => {
   const content = contentWith({ orders: [{ ...onceAtNoon, give: { kind: "bolus", amountMg: 400 } }] });
 
   test("has the clock time, the wait and the hours into the plan: 10 to 5 mg/L in 6.931 h (ln 2 / k)", () => {
-    const words = sayAnswer(content, { fromH: 4, mgPerL: 5, direction: "below", meanwhile: "nothing-more" });
+    const words = sayAnswer(content, { fromH: 4, mgPerL: 5, direction: "below", meanwhile: "nothing-begins" });
     expect(words).toBe("Mon 2 Mar 2026 18:55; 6.931\u00a0h to wait, 10.93\u00a0h into the plan");
   });
 
@@ -115,10 +115,10 @@ describe("sayAnswer", () => {
     expect(sayAnswer(content, { fromH: 0, mgPerL: 5, direction: "below", meanwhile: "plan-goes-on" })).toContain(
       "already below",
     );
-    expect(sayAnswer(content, { fromH: 5, mgPerL: 20, direction: "above", meanwhile: "nothing-more" })).toContain(
+    expect(sayAnswer(content, { fromH: 5, mgPerL: 20, direction: "above", meanwhile: "nothing-begins" })).toContain(
       "never",
     );
-    expect(sayAnswer(content, { fromH: 72, mgPerL: 5, direction: "below", meanwhile: "nothing-more" })).toContain(
+    expect(sayAnswer(content, { fromH: 72, mgPerL: 5, direction: "below", meanwhile: "nothing-begins" })).toContain(
       "cannot be computed",
     );
   });

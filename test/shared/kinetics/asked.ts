@@ -76,7 +76,7 @@ export function hoursUntil(
     fromH: 0,
     mgPerL,
     direction,
-    meanwhile: "nothing-more",
+    meanwhile: "nothing-begins",
   });
   if (answer.kind !== "at") throw new Error(`expected an hour, got ${answer.kind}`);
   return answer.atH;

@@ -93,7 +93,7 @@ describe("waitUntil", () => {
       fromH: 0,
       mgPerL,
       direction: "below",
-      meanwhile: "nothing-more",
+      meanwhile: "nothing-begins",
       ...more,
     });
 
@@ -104,7 +104,7 @@ describe("waitUntil", () => {
         percent,
         hourUpTo(20),
         fc.constantFrom("below" as const, "above" as const),
-        fc.constantFrom("nothing-more" as const, "plan-goes-on" as const),
+        fc.constantFrom("nothing-begins" as const, "plan-goes-on" as const),
         (input, height, fromH, direction, meanwhile) => {
           const course = courseOf(input);
           const { peak } = exposureOf(walk(course), { fromH: 0, toH: input.horizonH });
@@ -146,6 +146,27 @@ describe("waitUntil", () => {
       expect(answer.atH).toBeGreaterThan(12);
       expect(levelsAt(made, [answer.atH])[0]).toBeCloseTo(5, 10);
     }
+  });
+
+  test("nothing more: an infusion and a pump that run are stopped, an absorbed dose is not", () => {
+    // Whatever was stopped, the level only falls from here by k: half a half-life per factor of the square root of 2.
+    const level = (doses: Parameters<typeof ask>[0], atH: number) =>
+      levelsAt(walk(courseOf(inputOf(body, doses, 200))), [atH])[0]!;
+    for (const doses of [[infusion(480, 12)], [running(40)], [infusion(480, 12), bolus(1000, 6)]]) {
+      const halved = level([doses[0]!], 2.5) / 2;
+      expect(ask(doses, halved, { fromH: 2.5, meanwhile: "nothing-more" })).toEqual({
+        kind: "at",
+        atH: expect.closeTo(8.5, 9),
+      });
+    }
+    expect(ask([infusion(480, 12)], 1, { fromH: 0, meanwhile: "nothing-more" })).toEqual({
+      kind: "already",
+      mgPerL: 0,
+    });
+    const absorbing = { direction: "above", fromH: 0.1 } as const;
+    expect(ask([absorbed(100)], 1, { ...absorbing, meanwhile: "nothing-more" })).toEqual(
+      ask([absorbed(100)], 1, absorbing),
+    );
   });
 
   test("the plan going on: the dose at 6 h keeps the level up for one half-life longer", () => {

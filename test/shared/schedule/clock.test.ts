@@ -80,6 +80,20 @@ describe("toInstant", () => {
   });
 });
 
+describe("sayClock", () => {
+  test.for([
+    ["2026-10-25T01:30:00+01:00", "Europe/London", "Sun 25 Oct 2026 01:30 (UTC+01:00)"],
+    ["2026-10-25T01:30:00Z", "Europe/London", "Sun 25 Oct 2026 01:30 (UTC+00:00)"],
+    ["2026-10-25T00:59:00+01:00", "Europe/London", "Sun 25 Oct 2026 00:59"],
+    ["2026-10-25T02:00:00Z", "Europe/London", "Sun 25 Oct 2026 02:00"],
+    ["2026-03-29T02:30:00+01:00", "Europe/London", "Sun 29 Mar 2026 02:30"],
+    ["2026-04-05T01:45:00+10:30", "Australia/Lord_Howe", "Sun 5 Apr 2026 01:45 (UTC+10:30)"],
+    ["2026-11-01T01:30:00-04:00", "America/New_York", "Sun 1 Nov 2026 01:30 (UTC-04:00)"],
+  ] as const)("says %s in %s as %s", ([instant, zone, said]) => {
+    expect(sayClock(instant, zone)).toBe(said);
+  });
+});
+
 describe("instantAt", () => {
   test("counts elapsed hours across a clock change", () => {
     const start = "2026-03-28T20:00:00Z";

@@ -235,9 +235,10 @@ describe("courseOfContent", () => {
   test("refuses two changes at one time, and a session that ends before it begins", () => {
     const both = inventedContent({ setting: { ...setting, eliminationChanges: [change, { ...change, id: "c3" }] } });
     expect(() => courseOfContent(both, "given")).toThrow("setting/eliminationChanges/1/from must be another time");
-    const backwards = inventedContent({
-      setting: { ...setting, eliminationChanges: [{ ...session, until: "2026-03-03T07:00:00Z" }] },
-    });
+    const forwards = inventedContent({ setting: { ...setting, eliminationChanges: [session] } });
+    // The contract refuses such a span at the door; the engine does not rely on it.
+    const eliminationChanges = [{ ...session, until: "2026-03-03T07:00:00Z" }];
+    const backwards = { ...forwards, setting: { ...forwards.setting, eliminationChanges } };
     expect(() => courseOfContent(backwards, "given")).toThrow(
       "setting/eliminationChanges/0/until must be later than the beginning of the span",
     );
