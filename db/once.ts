@@ -1,5 +1,6 @@
 import type { Database } from "better-sqlite3";
 import type { z } from "zod";
+import { fileInPlace } from "./file-in-place.ts";
 import { KeyReusedError } from "./store-errors.ts";
 
 /** One wish to write, as its client names it: the same key again is the same wish. */
@@ -19,7 +20,8 @@ export type Once = <Answer>(intention: Intention, answer: z.ZodType<Answer>, wor
  * The work and the record of its answer are one transaction, and the lock is taken before the key is
  * looked up, so neither a lost answer nor a kill nor a second process can make the work happen twice.
  *
- * @returns a function that throws KeyReusedError where the key came with another request
+ * @returns a function that throws KeyReusedError where the key came with another request, and
+ *          DatabaseGoneError where the file is no longer the one that was opened
  */
 export function onceIn(db: Database): Once {
   const known = db.prepare<[string], { fingerprint: string; answer: string }>(
@@ -28,8 +30,10 @@ export function onceIn(db: Database): Once {
   const keep = db.prepare<[string, string, string, string]>(
     "INSERT INTO answered_write (key, fingerprint, answer, answered_at) VALUES (?, ?, ?, ?)",
   );
-  return (intention, schema, work) =>
-    db
+  const checkFile = fileInPlace(db);
+  return (intention, schema, work) => {
+    checkFile();
+    return db
       .transaction(() => {
         const first = known.get(intention.key);
         if (first !== undefined) {
@@ -41,4 +45,5 @@ export function onceIn(db: Database): Once {
         return answer;
       })
       .immediate();
+  };
 }

@@ -50,3 +50,13 @@ export class AlteredRowError extends Error {
     this.name = "AlteredRowError";
   }
 }
+
+/** The database file was deleted, moved or replaced while it was open: what is written now would be lost. */
+export class DatabaseGoneError extends Error {
+  readonly code = "database-gone" as const;
+
+  constructor() {
+    super("put the database file back where it was, then start the program again");
+    this.name = "DatabaseGoneError";
+  }
+}

@@ -1,6 +1,7 @@
 import type { Database } from "better-sqlite3";
 import { type AnswerStore, sqliteAnswerStore } from "./answer-store.ts";
 import { type CaseStore, sqliteCaseStore } from "./case-store.ts";
+import { fileInPlace } from "./file-in-place.ts";
 import { type MilestoneStore, sqliteMilestoneStore } from "./milestone-store.ts";
 import { checkWhole } from "./open-database.ts";
 import { type RegimenStore, sqliteRegimenStore } from "./regimen-store.ts";
@@ -15,11 +16,14 @@ export interface Stores {
   readonly wholeCases: WholeCaseStore;
   readonly answers: AnswerStore;
   readonly milestones: MilestoneStore;
+  /** @throws {DatabaseGoneError} if the file was deleted or replaced since it was opened; quick */
+  checkInPlace(): Promise<void>;
   /** @throws {DatabaseRefused} if what is stored is damaged; any error if it cannot be reached */
   checkWhole(): Promise<void>;
 }
 
 export function sqliteStores(db: Database): Stores {
+  const checkFile = fileInPlace(db);
   return {
     cases: sqliteCaseStore(db),
     regimens: sqliteRegimenStore(db),
@@ -27,6 +31,9 @@ export function sqliteStores(db: Database): Stores {
     wholeCases: sqliteWholeCaseStore(db),
     answers: sqliteAnswerStore(db),
     milestones: sqliteMilestoneStore(db),
+    async checkInPlace() {
+      checkFile();
+    },
     async checkWhole() {
       checkWhole(db);
     },

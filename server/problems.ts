@@ -2,6 +2,7 @@ import type { ErrorRequestHandler, RequestHandler } from "express";
 import type { Logger } from "pino";
 import type {
   AlteredRowError,
+  DatabaseGoneError,
   KeyReusedError,
   NotFoundError,
   StaleError,
@@ -20,6 +21,7 @@ type StoreErrorCode = (
   | TooManyAlternativesError
   | KeyReusedError
   | AlteredRowError
+  | DatabaseGoneError
 )["code"];
 type DriverErrorCode = "storage-full" | "storage-busy" | "storage-failed";
 export type ErrorCode = RequestErrorCode | StoreErrorCode | DriverErrorCode | DomainError["code"] | "internal";
@@ -53,6 +55,7 @@ export const problemTable: Readonly<Record<ErrorCode, { readonly status: number;
   altered: { status: 500, title: "A stored record is not as it was stored" },
   "too-long": { status: 503, title: "The calculation takes too long" },
   "not-ready": { status: 503, title: "The server cannot answer now" },
+  "database-gone": { status: 503, title: "The database file was moved or deleted: nothing was saved" },
   "storage-full": { status: 507, title: "The disk is full: nothing was saved" },
   "storage-busy": { status: 503, title: "Another program holds the database: nothing was saved" },
   "storage-failed": { status: 500, title: "The disk failed: nothing was saved" },

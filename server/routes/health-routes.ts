@@ -11,7 +11,7 @@ export function healthRoutes({
   stores,
   nowMs,
 }: {
-  stores: Pick<Stores, "checkWhole" | "milestones">;
+  stores: Pick<Stores, "checkInPlace" | "checkWhole" | "milestones">;
   nowMs: () => number;
 }): Router {
   const router = Router();
@@ -26,13 +26,14 @@ export function healthRoutes({
     .route("/ready")
     .get(async (_request, response) => {
       try {
+        await stores.checkInPlace();
         await stores.milestones.isReached("any");
         if (!(nowMs() - checkedAtMs < checkEveryMs)) {
           await stores.checkWhole();
           checkedAtMs = nowMs();
         }
       } catch (error) {
-        throw new RequestError("not-ready", "the database is closed or damaged", { cause: error });
+        throw new RequestError("not-ready", "the database is closed, gone or damaged", { cause: error });
       }
       response.json({ status: "ready" });
     })
