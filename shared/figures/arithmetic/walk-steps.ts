@@ -8,7 +8,7 @@ import { type HandKinetics, handRate } from "./elimination-steps.ts";
 import { type ArithmeticSection, type ArithmeticStep, carried, carriedHours, put, step } from "./step.ts";
 
 /** Longer chains are not redone by hand; the chain then stops here and says so. */
-const mostStretches = 24;
+const mostStretches = 40;
 
 /** What waits to be absorbed counts as gone once it cannot show in the digits printed. */
 const negligible = 1e-6;
