@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { counts } from "./limits.ts";
-import { DoseRecord, ExtraDose, Instant, Order } from "./schedule.ts";
+import { DoseRecord, ExtraDose, eachIdOnce, Instant, Order } from "./schedule.ts";
 import { CaseSetting } from "./setting.ts";
 
 export const CaseId = z.uuid().brand<"CaseId">();
@@ -90,9 +90,9 @@ export type RegimenChange = z.infer<typeof RegimenChange>;
 /** The schedule itself: what is ordered and what was really given. */
 export const Schedule = z
   .strictObject({
-    orders: z.array(Order).max(counts.ordersPerAlternative),
+    orders: z.array(Order).max(counts.ordersPerAlternative).superRefine(eachIdOnce),
     records: z.array(DoseRecord).max(counts.recordsPerAlternative).default([]),
-    extras: z.array(ExtraDose).max(counts.recordsPerAlternative).default([]),
+    extras: z.array(ExtraDose).max(counts.recordsPerAlternative).default([]).superRefine(eachIdOnce),
   })
   .meta({ id: "Schedule" });
 export type Schedule = z.infer<typeof Schedule>;

@@ -2,11 +2,24 @@ import { z } from "zod";
 import { counts } from "./limits.ts";
 import { quantity } from "./quantity.ts";
 
-/** An instant: ISO 8601 with seconds and offset, such as 2026-03-29T08:00:00+01:00. */
+/** An instant: ISO 8601 with seconds and offset, such as 2026-03-29T08:00:00+01:00; in years whose clocks are known. */
 export const Instant = z.iso
   .datetime({ offset: true, error: "must be a date and time with offset, such as 2026-03-29T08:00:00+01:00" })
+  .refine((text) => text >= "1975" && text < "2200", { error: "must lie in the years 1975 to 2199" })
   .meta({ description: "ISO 8601 date and time with offset" });
 export type Instant = z.infer<typeof Instant>;
+
+/** A refinement of a list whose members are told apart by their ids: a record must mean one order, not two. */
+export function eachIdOnce<Part extends { readonly id: string }>(
+  parts: readonly Part[],
+  context: z.RefinementCtx<readonly Part[]>,
+): void {
+  const seen = new Set<string>();
+  parts.forEach(({ id }, index) => {
+    if (seen.has(id)) context.addIssue({ code: "custom", path: [index, "id"], message: "must not be used twice" });
+    seen.add(id);
+  });
+}
 
 /** Ids that the client makes for the parts of one document. */
 export const PartId = z.string().regex(/^[A-Za-z0-9-]{1,40}$/, { error: "must be 1 to 40 letters, digits or hyphens" });
@@ -78,6 +91,13 @@ export const When = z
       end: End,
     }),
   ])
+  .refine(
+    (when) => when.kind === "once" || when.end.kind !== "until" || Date.parse(when.end.at) > Date.parse(when.from),
+    {
+      path: ["end", "at"],
+      error: "must be later than from: nothing would be given",
+    },
+  )
   .meta({ id: "When" });
 export type When = z.infer<typeof When>;
 

@@ -3,7 +3,7 @@ import { resolveKinetics } from "../kinetics/disposition.ts";
 import { RangeMgPerL } from "./dose.ts";
 import { counts, type LimitName } from "./limits.ts";
 import { quantity } from "./quantity.ts";
-import { Instant, PartId } from "./schedule.ts";
+import { eachIdOnce, Instant, PartId } from "./schedule.ts";
 
 /** Where a number came from. Later kinds: a formula, a drug model, measured levels. */
 export const Origin = z
@@ -66,7 +66,11 @@ export const CaseSetting = z
   .strictObject({
     plan: z.strictObject({ start: Instant, horizonH: quantity("horizonH") }),
     kinetics: StatedKinetics,
-    eliminationChanges: z.array(DatedEliminationChange).max(counts.eliminationChanges).default([]),
+    eliminationChanges: z
+      .array(DatedEliminationChange)
+      .max(counts.eliminationChanges)
+      .default([])
+      .superRefine(eachIdOnce),
     startConcentration: z
       .strictObject({ valueMgPerL: quantity("concentrationMgPerL"), origin: Origin })
       .exactOptional(),

@@ -47,6 +47,18 @@ describe("Schedule", () => {
       when({ kind: "every", from, intervalH: 0, end: { kind: "open" } }),
       "orders/0/when/intervalH: must be from 0.25 to 2160 h",
     ],
+    // A record of the one was once taken for the other as well.
+    ["two orders with one id", { orders: [order, order] }, "orders/1/id: must not be used twice"],
+    [
+      "an order that ends before it begins",
+      when({ ...order.when, end: { kind: "until", at: "2026-03-28T09:00:00+01:00" } }),
+      "orders/0/when/end/at: must be later than from: nothing would be given",
+    ],
+    [
+      "a year whose clocks nobody knows",
+      when({ kind: "once", at: "0001-01-01T08:00:00Z" }),
+      "orders/0/when/at: must lie in the years 1975 to 2199",
+    ],
     [
       "a pump log without steps",
       { orders: [{ ...order, give: { kind: "pump", steps: [] } }] },
