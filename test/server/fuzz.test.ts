@@ -147,7 +147,17 @@ describe("no request", () => {
       "/steady-states": {
         parameters: { volumeL: 10, halfLifeH: 6 },
         cycleH: 8,
-        doses: [{ kind: "infusion", atH: 0, amountMg: 100, durationH: 1 }],
+        eliminationChanges: [{ fromH: 2, toH: 4, addedClearanceLPerH: 3 }],
+        doses: [
+          { kind: "infusion", atH: 0, amountMg: 100, durationH: 1 },
+          {
+            kind: "pump",
+            steps: [
+              { atH: 0, rateMgPerH: 10 },
+              { atH: 2, rateMgPerH: 0 },
+            ],
+          },
+        ],
         sampleEveryH: 1,
       },
       "/cases": caseDraft,
