@@ -10,6 +10,7 @@ import {
 } from "chart.js";
 import { formatLevel, formatQuantity } from "../../shared/units/format.ts";
 import { type CurvePicture, levelBounds, type PictureLine } from "./curve-picture.ts";
+import { lettersApart } from "./letters-apart.ts";
 import { gutters } from "./plot-scale.ts";
 
 Chart.register(LineController, LineElement, LinearScale, LogarithmicScale, PointElement);
@@ -20,7 +21,6 @@ export interface LevelChart {
   destroy(): void;
 }
 
-const letterGapPx = 13;
 const dark = "(prefers-color-scheme: dark)";
 
 /** One chart for the life of a canvas: a new picture updates it, since chart objects made anew leak. */
@@ -290,23 +290,9 @@ function marksPlugin(pictureNow: () => CurvePicture | undefined, inksNow: () => 
       }
       ctx.font = `bold 13px ${inks.font}`;
       ctx.textBaseline = "middle";
-      for (const { letter, y, colour } of lettersApart(picture, yOf))
+      for (const { letter, y, colour } of lettersApart(picture, yOf, chartArea.top))
         write(letter, chartArea.right + 6, y, inks.of(colour), "left");
       ctx.restore();
     },
   };
-}
-
-/** The letters at the right ends, moved apart where ends lie close together. */
-function lettersApart({ lines }: CurvePicture, yOf: (mgPerL: number) => number) {
-  const letters = lines.flatMap(({ letter, points, colour }) => {
-    const last = points.at(-1);
-    return letter === undefined || last === undefined ? [] : [{ letter, colour, y: yOf(last.y) }];
-  });
-  letters.sort((one, other) => other.y - one.y);
-  letters.forEach((each, index) => {
-    const below = letters[index - 1];
-    if (below !== undefined) each.y = Math.min(each.y, below.y - letterGapPx);
-  });
-  return letters;
 }
