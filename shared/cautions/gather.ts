@@ -6,6 +6,7 @@ import { dosesTogether } from "./doses-together.ts";
 import { eliminationStops } from "./elimination-stops.ts";
 import { fallsBelow } from "./falls-below.ts";
 import { givenDoesDiffer } from "./given-differs.ts";
+import { idleOrders } from "./idle-orders.ts";
 import { idleExceptions, lostRecords } from "./lost-records.ts";
 import { notSettled } from "./not-settled.ts";
 import { outsideRange } from "./outside-range.ts";
@@ -13,21 +14,17 @@ import { standingCaution } from "./standing.ts";
 import { type ContentSubject, type CourseSubject, type Rule, subjectOfContent } from "./subject.ts";
 import { tenfoldDoses } from "./tenfold-doses.ts";
 import { unusualDoses, unusualOrders } from "./unusual-doses.ts";
-import { unusualKinetics, unusualSetting } from "./unusual-kinetics.ts";
+import { unusualKinetics, unusualParameters, unusualSetting } from "./unusual-kinetics.ts";
 
-const courseRules: readonly Rule<CourseSubject>[] = [
-  unusualKinetics,
-  eliminationStops,
-  outsideRange,
-  fallsBelow,
-  assumedElimination,
-];
+const courseRules: readonly Rule<CourseSubject>[] = [eliminationStops, outsideRange, fallsBelow, assumedElimination];
 
 const contentRules: readonly Rule<ContentSubject>[] = [
+  unusualKinetics,
   unusualSetting,
   unusualOrders,
   lostRecords,
   idleExceptions,
+  idleOrders,
   tenfoldDoses,
   dosesTogether,
   unclearClockTimes,
@@ -48,7 +45,7 @@ export function cautionsForContent(content: RegimenContent): Caution[] {
 
 /** Cautions of a course that no case states: a stateless prediction, or a repeating cycle. */
 export function cautionsForCourse(subject: CourseSubject): Caution[] {
-  return ordered([...courseRules, unusualDoses].flatMap((rule) => rule(subject)));
+  return ordered([unusualParameters, ...courseRules, unusualDoses].flatMap((rule) => rule(subject)));
 }
 
 /** The cautions that stop and that nobody has answered yet; a reason answers one text about one place. */

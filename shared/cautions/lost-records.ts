@@ -4,11 +4,11 @@ import type { ContentSubject, Rule } from "./subject.ts";
 
 /** A record of a dose that the schedule no longer has would drop out of the past without a word. */
 export const lostRecords: Rule<ContentSubject> = ({ content }) =>
-  recordsWithoutDose(content).map(({ orderId, occurrence }) => ({
+  recordsWithoutDose(content).map((record) => ({
     code: "record-without-dose",
     severity: "stop",
-    text: `What was recorded for dose ${occurrence + 1} of order ${numberOf(content.schedule.orders, orderId)} is not in the prediction: the schedule has no such dose now. Record it as an extra dose, or take the record out.`,
-    about: `/schedule/records/${orderId}#${occurrence}`,
+    text: `What was recorded for dose ${record.occurrence + 1} of order ${numberOf(content.schedule.orders, record.orderId)} is not in the prediction: the schedule has no such dose now. Record it as an extra dose, or take the record out.`,
+    about: `/schedule/records/${content.schedule.records.indexOf(record)}`,
   }));
 
 /** A change to a dose that the order does not have any more has no effect. */

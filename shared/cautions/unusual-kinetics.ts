@@ -1,9 +1,15 @@
+import type { Caution } from "../contract/caution.ts";
 import type { LimitName } from "../contract/limits.ts";
 import type { ContentSubject, CourseSubject, Rule } from "./subject.ts";
 import { unusualValue } from "./unusual-value.ts";
 
-/** Stated kinetics and the values derived from them. */
-export const unusualKinetics: Rule<CourseSubject> = ({ course }) => {
+/** Stated kinetics of a case and the values derived from them. */
+export const unusualKinetics: Rule<CourseSubject> = (subject) => kineticCautions(subject, "/setting/kinetics");
+
+/** The same of a stateless request, which states them at another place. */
+export const unusualParameters: Rule<CourseSubject> = (subject) => kineticCautions(subject, "/parameters");
+
+function kineticCautions({ course }: CourseSubject, at: string): Caution[] {
   const { given: _, ...kinetics } = course.kinetics;
   const { absorptionRatePerH, bioavailability, saltFactor } = course;
   const values = {
@@ -12,10 +18,8 @@ export const unusualKinetics: Rule<CourseSubject> = ({ course }) => {
     saltFactor,
     ...(absorptionRatePerH !== undefined && { absorptionRatePerH }),
   };
-  return Object.entries(values).flatMap(([name, value]) =>
-    unusualValue(name as LimitName, value, `/setting/kinetics/${name}`),
-  );
-};
+  return Object.entries(values).flatMap(([name, value]) => unusualValue(name as LimitName, value, `${at}/${name}`));
+}
 
 /** Values that only a dated case states. */
 export const unusualSetting: Rule<ContentSubject> = ({ content: { setting } }) => [

@@ -43,6 +43,12 @@ const cases: {
     quiet: { schedule: { orders: [{ ...everyEight, exceptions: [{ occurrence: 5, amountMg: 300 }] }] } },
   },
   {
+    code: "order-without-dose",
+    severity: "warn",
+    raising: { schedule: { orders: [everyEight, once("late", "2026-03-04T08:00:00Z", 500)] } },
+    quiet: { schedule: { orders: [everyEight, once("late", "2026-03-04T07:59:00Z", 500)] } },
+  },
+  {
     code: "tenfold-doses",
     severity: "warn",
     raising: { schedule: { orders: [once("a", plan.start, 50), once("b", "2026-03-02T20:00:00Z", 500)] } },
