@@ -5,7 +5,6 @@ import type { WholeCase } from "../../shared/contract/answers.ts";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { Caution } from "../../shared/contract/caution.ts";
 import { DomainError } from "../../shared/errors.ts";
-import { sayClock } from "../../shared/schedule/clock.ts";
 import { type Alternative, type CaseDocument, contentOf } from "./case-document.ts";
 import { type CaseModel, createCaseModel } from "./case-model.ts";
 import { documentOfCase } from "./document-of-case.ts";
@@ -13,6 +12,7 @@ import { createDrafts, type Drafts, type DraftsByName } from "./drafts.ts";
 import { liveDrafts } from "./live-drafts.ts";
 import { readSetting, readSettingForm, type SettingReading } from "./read-setting.ts";
 import { same } from "./same.ts";
+import { sayAllowed } from "./say-refusal.ts";
 import type { SettingForm } from "./setting-form.ts";
 import { settling } from "./settling.ts";
 
@@ -113,15 +113,11 @@ export function judge(content: RegimenContent | undefined): Judged {
     return { cautions: cautionsForContent(content) };
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;
-    const got = error.value === undefined ? "" : `, got ${String(error.value)}`;
-    const detail = withClock(`must be ${error.allowed}${got}`, content.timeZone);
-    return { cautions: [standingCaution], problem: { field: error.field, detail } };
+    return {
+      cautions: [standingCaution],
+      problem: { field: error.field, detail: sayAllowed(error, content.timeZone) },
+    };
   }
-}
-
-/** Instants in an error as a person reads them. */
-function withClock(text: string, timeZone: string): string {
-  return text.replace(/\d{4}-\d\d-\d\dT[\d:.]+(?:Z|[+-]\d\d:\d\d)/g, (instant) => sayClock(instant, timeZone));
 }
 
 function selectedIn({ alternatives }: CaseDocument, key: string | undefined): Alternative | undefined {

@@ -1,8 +1,9 @@
-import { counts, type LimitName, limits } from "../../shared/contract/limits.ts";
+import { counts } from "../../shared/contract/limits.ts";
 import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { momentFields } from "../case/drafts.ts";
 import { newId } from "../case/new-id.ts";
+import { sayPath } from "../case/say-refusal.ts";
 import { refusedAt } from "../saving/refused.ts";
 import { focusOn } from "../shell/focus.ts";
 import { ExceptionsList } from "./exceptions-list.tsx";
@@ -133,16 +134,4 @@ export function OrdersPart({ page }: { page: CasePage }) {
       )}
     </section>
   );
-}
-
-/** "schedule/orders/0/when/from" -> "order 1, when, from"; a quantity by its name. */
-function sayPath(field: string): string {
-  const last = field.split("/").at(-1) ?? "";
-  if (Object.hasOwn(limits, last)) return limits[last as LimitName].label.toLowerCase();
-  return field
-    .replace(/^schedule\//, "")
-    .replace(/orders\/(\d+)/, (_, index: string) => `order ${Number(index) + 1}`)
-    .replace(/extras\/(\d+)/, (_, index: string) => `extra dose ${Number(index) + 1}`)
-    .replace(/records\/(\d+)/, (_, index: string) => `what was given, record ${Number(index) + 1}`)
-    .replaceAll("/", ", ");
 }

@@ -5,7 +5,7 @@ import { DomainError } from "../../shared/errors.ts";
 import type { ArithmeticStep, ArithmeticSection as Worked } from "../../shared/figures/arithmetic/step.ts";
 import { formatQuantity } from "../../shared/units/format.ts";
 import type { CaseModel } from "../case/case-model.ts";
-import { sayRefusal } from "./predictions.ts";
+import { sayRefusal } from "../case/say-refusal.ts";
 import { selectedKeyOf } from "./selected.ts";
 import { useSettled } from "./use-settled.ts";
 import "./arithmetic-section.css";
@@ -77,7 +77,7 @@ async function work(content: RegimenContent): Promise<Answer> {
     const { workedArithmetic } = await import("../../shared/figures/arithmetic/worked-arithmetic.ts");
     return { sections: workedArithmetic(content) };
   } catch (error) {
-    if (error instanceof DomainError) return { problem: `Cannot be computed: ${sayRefusal(error)}` };
+    if (error instanceof DomainError) return { problem: `Cannot be computed: ${sayRefusal(error, content.timeZone)}` };
     return { problem: "The arithmetic could not be loaded; load the page anew: what is typed is kept." };
   }
 }

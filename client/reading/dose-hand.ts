@@ -7,12 +7,13 @@ import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { newId } from "../case/new-id.ts";
+import { sayRefusal } from "../case/say-refusal.ts";
 import { announce } from "../shell/announce.ts";
 import { afterPaint } from "./after-paint.ts";
 import { type DoseChange, editDose, removeDose } from "./dose-edits.ts";
 import { capital, nameOfDose } from "./dose-words.ts";
 import { type Moved, movedPrediction } from "./moved-prediction.ts";
-import { predictionOf, rememberPrediction, sayRefusal } from "./predictions.ts";
+import { predictionOf, rememberPrediction } from "./predictions.ts";
 import { type Clamped, withinPlan } from "./snap.ts";
 
 /** How long the hand must rest before the page around the curve follows: sooner, each figure would cost a frame. */
@@ -68,7 +69,7 @@ export function createDoseHand(model: CaseModel): DoseHand {
       edit();
     } catch (error) {
       if (!(error instanceof DomainError)) throw error;
-      object(`Not done: ${sayRefusal(error)}`);
+      object(`Not done: ${sayRefusal(error, model.document.peek().timeZone)}`);
     }
   };
   const write = (key: string, what: string, schedule: Schedule, merge?: string) =>

@@ -5,6 +5,7 @@ import { levelsAt } from "../../shared/kinetics/levels.ts";
 import { givenDiffers } from "../../shared/schedule/course-of-content.ts";
 import { givenDoses } from "../../shared/schedule/doses-given.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
+import { sayRefusal } from "../case/say-refusal.ts";
 
 /** One alternative ready to be read, or why it cannot be computed. */
 export type Prediction =
@@ -40,18 +41,12 @@ export function levelAt({ made }: Prepared, atH: number): number {
   return levelsAt(made, [Math.min(Math.max(0, atH), made.horizonH)])[0]!;
 }
 
-/** A refusal as a sentence for the page: what it is about, what is allowed, what came. */
-export function sayRefusal({ field, allowed, value }: DomainError): string {
-  const about = field.split("/").map((part) => (/^\d+$/.test(part) ? String(Number(part) + 1) : part));
-  return `${about.join(" ")} must be ${allowed}, got ${String(value)}`;
-}
-
 function predict(content: RegimenContent): Prediction {
   try {
     const planned = givenDiffers(content) && { planned: prepare(content, "planned") };
     return { ok: true, given: prepare(content, "given"), ...planned, doses: givenDoses(content) };
   } catch (error) {
-    if (error instanceof DomainError) return { ok: false, problem: sayRefusal(error) };
+    if (error instanceof DomainError) return { ok: false, problem: sayRefusal(error, content.timeZone) };
     throw error;
   }
 }

@@ -3,7 +3,8 @@ import { DomainError } from "../../shared/errors.ts";
 import { type WaitQuestion, waitUntil } from "../../shared/kinetics/wait-until.ts";
 import { instantAt, sayClock } from "../../shared/schedule/clock.ts";
 import { formatHours, formatLevel } from "../../shared/units/format.ts";
-import { predictionOf, sayRefusal } from "./predictions.ts";
+import { sayRefusal } from "../case/say-refusal.ts";
+import { predictionOf } from "./predictions.ts";
 
 /** The answer with its clock time, how far into the plan it is and how long to wait. */
 export function sayAnswer(content: RegimenContent, question: WaitQuestion): string {
@@ -16,7 +17,7 @@ export function sayAnswer(content: RegimenContent, question: WaitQuestion): stri
     const at = instantAt(content.setting.plan.start, answer.atH, content.timeZone);
     return `${sayClock(at, content.timeZone)}; ${formatHours(answer.atH - question.fromH)} to wait, ${formatHours(answer.atH)} into the plan`;
   } catch (error) {
-    if (error instanceof DomainError) return `cannot be computed: ${sayRefusal(error)}`;
+    if (error instanceof DomainError) return `cannot be computed: ${sayRefusal(error, content.timeZone)}`;
     throw error;
   }
 }

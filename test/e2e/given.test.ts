@@ -58,8 +58,8 @@ describe("what was given", () => {
       expect(rows.length).toBeGreaterThan(20);
       await page.getByRole("columnheader", { name: "As planned (thin line)" }).waitFor();
       const folded = page.getByRole("region", { name: "Cautions" }).getByRole("button", { expanded: false });
-    if ((await folded.count()) > 0) await folded.click();
-    expect(await page.getByRole("region", { name: "Cautions" }).innerText()).toContain(
+      if ((await folded.count()) > 0) await folded.click();
+      expect(await page.getByRole("region", { name: "Cautions" }).innerText()).toContain(
         "Not everything was given as planned",
       );
       await expectSound(page);
