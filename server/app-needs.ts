@@ -2,6 +2,7 @@ import type { Logger } from "pino";
 import type { Stores } from "../db/stores.ts";
 import type { Revision } from "../shared/contract/case.ts";
 import type { Instant } from "../shared/contract/schedule.ts";
+import type { Calculate } from "./predictions/calculator.ts";
 import type { Appraise } from "./revisions/judge-content.ts";
 import type { Settings } from "./settings.ts";
 
@@ -18,6 +19,7 @@ export interface AppNeeds {
   readonly logger: Logger;
   readonly writeSheet: WriteSheet;
   readonly appraise: Appraise;
+  readonly calculate: Calculate;
   readonly settings: Pick<Settings, "host" | "publicNames" | "transport" | "requestsPerMinute">;
   /** Called when nothing more can be written safely. */
   readonly giveUp: (why: string) => void;

@@ -39,7 +39,7 @@ export function createApp(needs: AppNeeds): Express {
 /** One router a noun. */
 export function apiRouters(needs: AppNeeds): Router[] {
   return [
-    predictionRoutes(),
+    predictionRoutes(needs),
     caseRoutes(needs),
     caseFileRoutes(needs),
     regimenRoutes(needs),

@@ -8,6 +8,7 @@ import { createApp } from "./app.ts";
 import { insertDemoCase } from "./demo/demo-case.ts";
 import { jobRunner } from "./jobs/job-runner.ts";
 import { makeLogger } from "./logger.ts";
+import { threadCalculator } from "./predictions/calculator.ts";
 import { serve } from "./serve.ts";
 import { readSettings } from "./settings.ts";
 import { silentDescription } from "./silent-description.ts";
@@ -30,6 +31,7 @@ async function start(): Promise<void> {
   const db = openDatabase(settings.database);
   const stores = sqliteStores(db);
   const jobs = jobRunner();
+  const calculator = threadCalculator();
   await insertDemoCase(stores, jobs.appraise, clock());
   await stores.answers.forgetBefore(new Date(Date.now() - rememberAnswersMs).toISOString());
   const built = join(projectFolder(), ".build", "client");
@@ -40,12 +42,13 @@ async function start(): Promise<void> {
     logger,
     writeSheet: jobs.writeSheet,
     appraise: jobs.appraise,
+    calculate: calculator.calculate,
     settings,
     giveUp: (why) => void stop(why, 1),
     ...(existsSync(join(built, "index.html")) && { clientFolder: built }),
   });
   const close = async () => {
-    await jobs.stop();
+    await Promise.all([jobs.stop(), calculator.stop()]);
     closeDatabase(db);
   };
   const serving = await serve(app, settings).catch(async (error: unknown) => {

@@ -9,6 +9,8 @@ import { afterAll, beforeAll, describe, expect, onTestFinished, test } from "vit
 import { closeDatabase, openDatabase } from "../../db/open-database.ts";
 import { projectFolder } from "../../db/project-folder.ts";
 import type { jobRunner as JobRunner } from "../../server/jobs/job-runner.ts";
+import { answerQuestion } from "../../server/predictions/answer-question.ts";
+import { calculateHere, type threadCalculator as ThreadCalculator } from "../../server/predictions/calculator.ts";
 import { appraise } from "../../server/revisions/appraise.ts";
 import { RevisionAnswer } from "../../shared/contract/answers.ts";
 import { RegimenContent, type Revision } from "../../shared/contract/case.ts";
@@ -217,6 +219,59 @@ describe("the thread for long work", () => {
     await expect
       .poll(() => jobs.appraise(content).catch(() => undefined), { timeout: 15_000 })
       .toMatchObject({ ok: true });
+  });
+});
+
+describe("the thread that calculates", () => {
+  const calculator = async () => {
+    const path = join(projectFolder(), ".build", "server", "predictions", "calculator.js");
+    const built = (await import(pathToFileURL(path).href)) as { threadCalculator: typeof ThreadCalculator };
+    const made = built.threadCalculator();
+    onTestFinished(() => made.stop());
+    return made.calculate;
+  };
+  const body = {
+    parameters: { volumeL: 40, clearanceLPerH: 5 },
+    doses: [{ kind: "bolus", atH: 0, amountMg: 500 }],
+    horizonH: 24,
+    sampleEveryH: 0.5,
+  };
+  const text = (bytes: Uint8Array) => Buffer.from(bytes).toString();
+
+  test("answers many questions at once, each with its own answer, as this thread would", async () => {
+    const calculate = await calculator();
+    const questions = Array.from({ length: 40 }, (_, index) => ({
+      kind: "prediction" as const,
+      body: { ...body, horizonH: 24 + index },
+    }));
+    const answers = await Promise.all(questions.map(calculate));
+    for (const [index, question] of questions.entries())
+      expect(text(answers[index]!)).toBe(text(answerQuestion(question)));
+  });
+
+  test("refuses a bad question with the error that it deserves, and answers the others", async () => {
+    const calculate = await calculator();
+    const bad = { kind: "prediction" as const, body: { ...body, parameters: { volumeL: 0, clearanceLPerH: 5 } } };
+    const [refused, answered] = await Promise.allSettled([calculate(bad), calculate({ kind: "prediction", body })]);
+    expect(refused).toMatchObject({ status: "rejected" });
+    const here = await calculateHere(bad).catch((error: unknown) => error);
+    if (refused?.status === "rejected") expect(JSON.stringify(refused.reason)).toBe(JSON.stringify(here));
+    expect(answered?.status).toBe("fulfilled");
+  });
+
+  test("the program's own answer is a problem document that names the field", async () => {
+    const { child, address, ended } = await startProgram({ EBBLINE_DATABASE: fileAt("calculating.sqlite") });
+    const good = await post(address, "/api/predictions", body);
+    expect(good.body).toMatchObject({ cautions: [{ code: "standing" }] });
+    const refused = await post(address, "/api/predictions", { ...body, horizonH: -1 });
+    expect(refused).toMatchObject({ status: 422, body: { errors: [{ pointer: "#/horizonH" }] } });
+    const contradicts = await post(address, "/api/predictions", {
+      ...body,
+      doses: [{ kind: "absorbed", atH: 0, amountMg: 1 }],
+    });
+    expect(contradicts.status).toBe(422);
+    child.kill("SIGTERM");
+    await ended;
   });
 });
 
