@@ -1,6 +1,7 @@
 import type { RegimenContent } from "../contract/case.ts";
 import type { Caution } from "../contract/caution.ts";
 import type { RangeMgPerL } from "../contract/dose.ts";
+import type { Exposure } from "../contract/prediction.ts";
 import type { Course } from "../kinetics/course.ts";
 import { type Walk, walk } from "../kinetics/walk.ts";
 import { courseOfContent } from "../schedule/course-of-content.ts";
@@ -11,6 +12,8 @@ export interface CourseSubject {
   readonly course: Course;
   readonly made: Walk;
   readonly range?: RangeMgPerL;
+  /** Exposure of the whole plan against the range, where it is known already. */
+  readonly exposure?: Exposure;
 }
 
 /** What rules about a dated schedule can look at besides. */

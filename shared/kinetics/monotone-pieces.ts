@@ -25,8 +25,18 @@ export interface TimeWindow {
  *
  * @throws {DomainError} if the window is empty or outside the walk
  */
-export function monotonePieces(made: Walk, window: TimeWindow): MonotonePiece[] {
+export function monotonePieces(made: Walk, window: TimeWindow): readonly MonotonePiece[] {
   const { fromH, toH } = window;
+  if (!(fromH === 0 && toH === made.horizonH)) return cut(made, window);
+  const known = wholeWalks.get(made) ?? cut(made, window);
+  wholeWalks.set(made, known);
+  return known;
+}
+
+/** Exposure, first entry and cautions all ask for the whole of one walk, and a walk never changes. */
+const wholeWalks = new WeakMap<Walk, readonly MonotonePiece[]>();
+
+function cut(made: Walk, { fromH, toH }: TimeWindow): MonotonePiece[] {
   if (!(fromH >= 0 && fromH < made.horizonH))
     throw new DomainError("window/fromH", fromH, `from 0 to below ${made.horizonH}`);
   if (!(toH > fromH && toH <= made.horizonH))
