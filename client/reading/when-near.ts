@@ -1,12 +1,16 @@
+/** By now the page is there and can be used, and what comes late holds nothing up. */
+const atRestMs = 1_500;
+
 /**
- * Calls once, as soon as an element is in view or less than a window's height away from it. A print counts
- * as in view.
+ * Calls once: as soon as an element is in view or less than a window's height away from it, before a print,
+ * or when the page has been there for a while.
  *
  * @returns stops waiting
  */
 export function whenNear(element: Element, call: () => void): () => void {
   const stop = () => {
     observer.disconnect();
+    clearTimeout(later);
     removeEventListener("beforeprint", come);
   };
   const come = () => {
@@ -21,5 +25,6 @@ export function whenNear(element: Element, call: () => void): () => void {
   );
   observer.observe(element);
   addEventListener("beforeprint", come);
+  const later = setTimeout(come, atRestMs);
   return stop;
 }

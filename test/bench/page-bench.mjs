@@ -22,7 +22,7 @@ export async function pageBenchmarks() {
     const casePath = await pathOfDemo(browser, address);
     const open = await scriptsOf(browser, `${address}${casePath}`, (page) => page.locator(".curve-plot").waitFor());
     const read = await scriptsOf(browser, `${address}${casePath}`, curveDrawn);
-    const later = `and ${((read.bytes - open.bytes) / 1_000).toFixed(0)} kB for the chart once the reader comes near it`;
+    const later = `and ${((read.bytes - open.bytes) / 1_000).toFixed(0)} kB for the chart a second later, or once the reader comes near it`;
     const floor = await followed(browser, "data:text/html,<title>floor</title>", onAnEmptyPage);
     const pointer = await followed(browser, `${address}${casePath}`, byPointer);
     const keys = await followed(browser, `${address}${casePath}`, byKeys);
