@@ -2,13 +2,13 @@ import { createHash } from "node:crypto";
 import canonicalizeModule from "canonicalize";
 import type { Revision } from "../shared/contract/case.ts";
 
-// The package is CommonJS and its types say "default export": at run time the import is the function itself.
-const canonicalize = canonicalizeModule as unknown as (value: unknown) => string | undefined;
+/** The package is CommonJS and its types say "default export": at run time the import is the function itself. */
+const canonicalize: unknown = canonicalizeModule;
 
 /** The RFC 8785 form of a JSON value: the same value always gives the same text. */
 export function canonicalJson(value: unknown): string {
-  const text = canonicalize(value);
-  if (text === undefined) throw new TypeError("undefined has no JSON form");
+  const text: unknown = typeof canonicalize === "function" ? canonicalize(value) : undefined;
+  if (typeof text !== "string") throw new TypeError("undefined has no JSON form");
   return text;
 }
 

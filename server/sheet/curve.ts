@@ -29,8 +29,7 @@ export function writeCurve(paper: Paper, given: Prepared, planned: Prepared | un
   doc.moveDown(0.4);
   const top = doc.y;
   const bbox: [number, number, number, number] = [marginPt, top, marginPt + paper.widthPt, top + heightPt + footPt];
-  // The bounding box is required of a figure; the type declarations of pdfkit do not know it yet.
-  const options = { alt: `${altOf(given)} `, bbox } as PDFKit.Mixins.StructureElementOptions;
+  const options = { alt: `${altOf(given)} `, bbox };
   root.add(doc.struct("Figure", options, () => draw(paper, given, planned, top)));
   doc.x = marginPt;
   doc.y = top + heightPt + footPt;

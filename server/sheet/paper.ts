@@ -77,10 +77,6 @@ export function needRoom(paper: Paper, heightPt: number): void {
   if (roomPt(paper) < heightPt) paper.doc.addPage();
 }
 
-interface GlyphSource {
-  readonly _font: { readonly font: { hasGlyphForCodePoint(code: number): boolean } };
-}
-
 /** Keeps its neighbours on one line and prints nothing. */
 const wordJoiner = "\u2060";
 
@@ -90,7 +86,7 @@ const wordJoiner = "\u2060";
  * could end within mg/L.
  */
 export function printable({ doc }: Paper, text: string): string {
-  const { font } = (doc as unknown as GlyphSource)._font;
+  const { font } = doc._font;
   return [...text.replace(/(?<=mg|mg·h|L)\/(?=L|h)/g, `/${wordJoiner}`)]
     .map((sign) => {
       const code = sign.codePointAt(0)!;

@@ -119,7 +119,7 @@ function tablePart(
   root.add(section);
   const head = columns.map(({ title }) => ({
     type: "TH" as const,
-    scope: "Column",
+    scope: "Column" as const,
     text: `${title} `,
     font: { src: face.bold, size: sizePt },
     backgroundColor: "#eef1ef",
@@ -139,7 +139,7 @@ function tablePart(
     defaultStyle: { padding: paddingPt, border: 0.4, borderColor: ink.line, textColor: ink.text },
     data: [head, ...cells],
   };
-  doc.table(options as unknown as PDFKit.Mixins.TableOptionsWithData);
+  doc.table(options);
   section.end();
 }
 

@@ -19,15 +19,18 @@ export function readCsv(source: string): CsvTable {
     return { ok: false, line: 1, detail: "is not UTF-8 text: save the file as UTF-8, or paste the table" };
   const text = source.replace(/^\ufeff/, "");
   try {
-    const records = parse(text, {
+    const rows: { line: number; cells: string[] }[] = [];
+    parse(text, {
       delimiter: delimiterOf(text),
-      info: true,
+      on_record: (cells: readonly string[], { lines }) => {
+        rows.push({ line: lines, cells: cells.map(withoutGuard) });
+        return null;
+      },
       relax_column_count: true,
       skip_empty_lines: true,
       trim: true,
     });
-    const read = records as unknown as { info: { lines: number }; record: string[] }[];
-    return { ok: true, rows: read.map(({ info, record }) => ({ line: info.lines, cells: record.map(withoutGuard) })) };
+    return { ok: true, rows };
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
     return {

@@ -14,14 +14,14 @@ export interface Value {
   readonly note?: string;
 }
 
-/** A figure that this course does not have, and why. */
+/** A figure that a plan does not have, and why. */
 export interface Absent {
   readonly absent: string;
 }
 
 export type Figure = Value | Absent;
 
-/** Whether the course has this figure. */
+/** Whether there is such a figure. */
 export function isValue(figure: Figure): figure is Value {
   return "value" in figure;
 }

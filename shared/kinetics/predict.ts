@@ -7,7 +7,7 @@ import { remainsAt } from "./remains.ts";
 import { steadyState } from "./steady-state.ts";
 import { type Walk, walk } from "./walk.ts";
 
-/** An answer without its times and cautions, and the course and walk it was read from, for the cautions. */
+/** An answer without its times and cautions, and what it was read from, for the cautions. */
 export interface Computed<Answer> {
   readonly course: Course;
   readonly made: Walk;

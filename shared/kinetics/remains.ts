@@ -10,8 +10,8 @@ import { type Survival, survivalUntil } from "./survival.ts";
  *
  * Cost: doses + changes of elimination (and, for an infusion, the changes it runs through).
  *
- * @returns "start" first (where there was any), then one per dose that has begun, in the order of the course
- * @throws {DomainError} if atH is outside the course
+ * @returns "start" first (where there was a level), then one per dose that has begun, in the order of `doses`
+ * @throws {DomainError} if atH is outside the plan
  */
 export function remainsAt(course: Course, atH: number): Contribution[] {
   if (!(atH >= 0 && atH <= course.horizonH)) throw new DomainError("remainsAtH", atH, `from 0 to ${course.horizonH}`);

@@ -20,7 +20,7 @@ export const secondOpinionTolerance = 1e-6;
  *
  * Cost: at most times x (doses + changes of elimination), of one exponential each.
  *
- * @param timesH elapsed hours within the course, in any order; at a bolus, the value just after it
+ * @param timesH elapsed hours within the plan, in any order; at a bolus, the value just after it
  * @returns      mg/L, one per time
  */
 export function secondOpinionLevels(course: Course, timesH: ArrayLike<number>): Float64Array {

@@ -24,8 +24,8 @@ interface Tangent {
  * divided difference is the next divided difference. A concentration present at the start is a fact of
  * measurement and does not move with V.
  *
- * @param timesH ascending elapsed hours within the course
- * @throws {DomainError} if a time is outside the course or out of order
+ * @param timesH ascending elapsed hours within the plan
+ * @throws {DomainError} if a time is outside the plan or out of order
  */
 export function sensitivitiesAt(course: Course, timesH: ArrayLike<number>): Sensitivities {
   const made = walk(course);

@@ -26,10 +26,10 @@ const longestH = 876_600;
 
 /**
  * When the level first passes below (or above) a value, exactly. With nothing more given the question
- * has an answer beyond the plan's end, so the course is followed as far as it takes; with the plan going
+ * has an answer beyond the plan's end, so it is followed as far as it takes; with the plan going
  * on it is followed to the end of the plan.
  *
- * @throws {DomainError} if fromH is outside the course or mgPerL is not a number of 0 or more
+ * @throws {DomainError} if fromH is outside the plan or mgPerL is not a number of 0 or more
  */
 export function waitUntil(course: Course, question: WaitQuestion): WaitAnswer {
   const { fromH, mgPerL, direction, meanwhile } = question;

@@ -10,7 +10,7 @@ import type { ScheduledDose } from "./scheduled-dose.ts";
 
 export interface DatedCourse {
   readonly course: Course;
-  /** One per dose of the course, at the same index; omitted doses are in neither. */
+  /** One per dose of `course`, at the same index; omitted doses are in neither. */
   readonly doses: readonly ScheduledDose[];
 }
 

@@ -80,10 +80,8 @@ export async function save(page: Page, reason: string, number: number): Promise<
 
 /** Numbers of a page's table, row by row, as they are read. */
 export async function tableText(table: Locator): Promise<string[][]> {
-  return table.evaluate((element) =>
-    [...(element as unknown as HTMLTableElement).rows].map((row) =>
-      [...row.cells].map((cell) => cell.innerText.replace(/[\s\u00a0]+/g, " ").trim()),
-    ),
+  return table.evaluate((element: HTMLTableElement) =>
+    [...element.rows].map((row) => [...row.cells].map((cell) => cell.innerText.replace(/[\s\u00a0]+/g, " ").trim())),
   );
 }
 

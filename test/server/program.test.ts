@@ -197,7 +197,7 @@ describe("the thread for long work", () => {
 
   test("fails one job without a word of what was typed, and does the next", async () => {
     const jobs = await runner();
-    const broken = { number: 1, content: { caseLabel: "SECRET-LABEL" } } as unknown as Revision;
+    const broken: Revision = JSON.parse('{ "number": 1, "content": { "caseLabel": "SECRET-LABEL" } }');
     const error = await jobs.writeSheet(broken, { paper: "A4" }).catch((reason: unknown) => reason);
     expect(JSON.stringify([error, String(error)])).not.toContain("SECRET-LABEL");
     expect(error).toMatchObject({ name: "DescribedError", description: { name: expect.stringMatching(/Error$/) } });

@@ -101,7 +101,7 @@ function tidy(value: number): number {
   return Number(value.toPrecision(10));
 }
 
-/** How k changes in the course, each value once. */
+/** How k changes over the plan, each value once. */
 export function changesSection(hand: HandKinetics, course: Course): ArithmeticSection | undefined {
   const steps = new Map<string, ArithmeticStep>();
   for (const piece of course.elimination) {

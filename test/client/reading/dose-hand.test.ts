@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, test, vi } from "vitest";
 import type { CaseDocument } from "../../../client/case/case-document.ts";
 import { createCaseModel } from "../../../client/case/case-model.ts";
+import { formOfSetting } from "../../../client/case/form-of-setting.ts";
 import { createDoseHand } from "../../../client/reading/dose-hand.ts";
 import { levelAt, predictionOf } from "../../../client/reading/predictions.ts";
 import { contentWith, everyTwelve } from "./contents.ts";
@@ -8,14 +9,14 @@ import { contentWith, everyTwelve } from "./contents.ts";
 /** A case with one alternative, its doses every 12 h from the start of a plan of 72 h. */
 function opened(schedule: object = { orders: [everyTwelve] }) {
   const content = contentWith(schedule);
-  const document = {
+  const document: CaseDocument = {
     label: content.caseLabel,
     timeZone: content.timeZone,
     notes: "",
-    form: {},
+    form: formOfSetting(content.setting, content.timeZone),
     setting: content.setting,
     alternatives: [{ key: "a", label: "First", schedule: content.schedule, savedNumber: 0, cautionReasons: [] }],
-  } as unknown as CaseDocument;
+  };
   const model = createCaseModel(document, () => content.setting);
   const hand = createDoseHand(model);
   const doses = () => {

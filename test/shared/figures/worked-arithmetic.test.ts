@@ -1,17 +1,20 @@
 import { describe, expect, test } from "vitest";
+import type { Give } from "../../../shared/contract/schedule.ts";
 import { workedArithmetic } from "../../../shared/figures/arithmetic/worked-arithmetic.ts";
 import { handCalculator } from "../../hand-calculator.ts";
 import { everyEight, inventedContent, stated } from "../../invented-content.ts";
 import { findWritingFaults } from "../../writing-rules.ts";
 
+type Change = NonNullable<Parameters<typeof inventedContent>[0]>;
+
 const typed = { kind: "typed", note: "" } as const;
 const plan = { start: "2026-03-02T08:00:00Z", horizonH: 48 };
 const kinetics = { volumeL: stated(40), clearanceLPerH: stated(5) };
 const open = { kind: "open" } as const;
-const twice = (give: object) => ({
+const twice = (give: Give) => ({
   id: "o1",
   give,
-  when: { kind: "every", from: plan.start, intervalH: 12, end: open },
+  when: { kind: "every" as const, from: plan.start, intervalH: 12, end: open },
 });
 const session = {
   id: "c",
@@ -22,7 +25,7 @@ const session = {
   origin: typed,
 } as const;
 
-const regimens = [
+const regimens: { name: string; change: Change }[] = [
   { name: "infusions", change: {} },
   {
     name: "boluses from k and V",
@@ -109,7 +112,7 @@ const regimens = [
     name: "an infusion longer than its interval",
     change: { schedule: { orders: [twice({ kind: "infusion", amountMg: 600, durationH: 18 })] } },
   },
-] as unknown as { name: string; change: Parameters<typeof inventedContent>[0] }[];
+];
 
 describe("workedArithmetic", () => {
   test.for(regimens)("can be redone from the printed numbers alone: $name", ({ change }) => {
@@ -179,9 +182,7 @@ describe("workedArithmetic", () => {
       setting: { plan, kinetics: { ...kinetics, absorptionRatePerH: stated(0.125) } },
       schedule: { orders: [twice({ kind: "absorbed", amountMg: 300 })] },
     };
-    const notes = workedArithmetic(inventedContent(close as Parameters<typeof inventedContent>[0])).map(
-      ({ note }) => note,
-    );
+    const notes = workedArithmetic(inventedContent(close)).map(({ note }) => note);
     expect(notes.filter((note) => note?.includes("ka and k are so close"))).toHaveLength(2);
   });
 

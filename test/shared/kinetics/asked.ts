@@ -24,7 +24,7 @@ export const absorbed = (amountMg: number, atH = 0, lagH = 0): Doses[number] => 
   lagH,
 });
 
-/** A rate that goes on to the end of the course. */
+/** A rate that goes on to the end of the plan. */
 export const running = (rateMgPerH: number): Doses[number] => ({ kind: "pump", steps: [{ atH: 0, rateMgPerH }] });
 
 /** The same dose n times. */

@@ -194,7 +194,7 @@ describe("waitUntil", () => {
     });
   });
 
-  test("refuses an hour outside the course and a value that is no level", () => {
+  test("refuses an hour outside the plan and a value that is no level", () => {
     for (const fromH of [-1, 24, Number.NaN])
       expect(() => ask([], 1, { fromH })).toThrow(/fromH must be from 0 to below 24/);
     for (const mgPerL of [-1, Number.NaN]) expect(() => ask([], mgPerL)).toThrow(/mgPerL must be 0 or more/);

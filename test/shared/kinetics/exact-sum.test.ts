@@ -3,7 +3,7 @@ import { describe, expect, test } from "vitest";
 import { ExactSum } from "../../../shared/kinetics/exact-sum.ts";
 import { checkedBy } from "../property-run.ts";
 
-/** Rates as they are met: any finite double a dose could make, from a microgram a year to a kilogram a minute. */
+/** Rates as they are met: each finite double that a dose could make, from a microgram a year to a kilogram a minute. */
 const rate = fc.double({ min: 1e-10, max: 1e8, noNaN: true });
 
 describe("ExactSum", () => {

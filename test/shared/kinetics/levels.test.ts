@@ -64,7 +64,7 @@ describe("the grid and its events", () => {
     expect(gridTimesH(10, 3).length).toBe(4);
   });
 
-  test("refuses times out of order, outside the course or not a number, and a step that is not above 0", () => {
+  test("refuses times out of order, outside the plan or not a number, and a step that is not above 0", () => {
     const made = walk(courseOf({ parameters, doses: [], horizonH: 24 }));
     expect(() => levelsAt(made, [1, 0.5])).toThrow("timesH/1 must be from 1 to 24, in ascending order, got 0.5");
     expect(() => levelsAt(made, [25])).toThrow("timesH/0");

@@ -66,7 +66,7 @@ describe("sensitivitiesAt", () => {
     expect(Array.from(sensitivitiesAt(course, [0, 5, 24]).perEliminationRate)).toEqual([0, 0, 0]);
   });
 
-  test("refuses times out of order or outside the course", () => {
+  test("refuses times out of order or outside the plan", () => {
     const course = courseOf(inputOf({ volumeL: 20, eliminationRatePerH: 0.1 }, [bolus(400)], 24));
     for (const timesH of [[2, 1], [25], [Number.NaN], [-1]])
       expect(() => sensitivitiesAt(course, timesH)).toThrow(/timesH\/\d must be from/);

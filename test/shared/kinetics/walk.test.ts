@@ -61,7 +61,7 @@ describe("walk", () => {
     expect(Array.from(levelsAt(made, [24]))).toEqual([0]);
   });
 
-  test("keeps the last rate of a pump to the end of the course", () => {
+  test("keeps the last rate of a pump to the end of the plan", () => {
     // R/CL at the plateau, by hand: 40 mg/h over 2 L/h; e^-(0.1 x 400) is 4e-18.
     const made = walk(course([{ kind: "pump", steps: [{ atH: 0, rateMgPerH: 40 }] }], 400));
     expect(levelsAt(made, [400])[0]).toBeCloseTo(20, 12);

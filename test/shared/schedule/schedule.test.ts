@@ -177,7 +177,7 @@ describe("givenDoses", () => {
     });
   });
 
-  test("leaves omitted doses out of the course and the plan alone out of what was given", () => {
+  test("leaves omitted doses out of what is computed and the plan alone out of what was given", () => {
     expect(courseOfContent(content, "given").course.doses).toHaveLength(6);
     expect(courseOfContent(content, "planned").course.doses).toHaveLength(6);
     expect(courseOfContent(content, "planned").doses.every(({ status }) => status === "planned")).toBe(true);
