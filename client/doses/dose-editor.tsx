@@ -1,4 +1,3 @@
-import { useSignal } from "@preact/signals";
 import { counts } from "../../shared/contract/limits.ts";
 import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
 import { plainText } from "../case/form-of-setting.ts";
@@ -6,78 +5,57 @@ import { ChoiceField } from "../controls/choice-field.tsx";
 import { MomentField } from "../controls/moment-field.tsx";
 import { TextField } from "../controls/text-field.tsx";
 import { AmountField, DurationField } from "../orders/give-fields.tsx";
-import { focusOn } from "../shell/focus.ts";
-import { ProblemSummary } from "../shell/problem-summary.tsx";
+import { DraftForm, type EditorProps } from "../shell/draft-form.tsx";
 import { type DoseEdit, givenChoiceOf, type OrderedDose, planChoiceOf, readDoseDraft } from "./dose-draft.ts";
 
-interface DoseEditorProps {
+interface DoseEditorProps extends EditorProps<DoseEdit> {
   readonly dose: OrderedDose;
-  readonly title: string;
-  readonly draft: Draft;
-  readonly timeZone: string;
-  readonly onDraft: (fields: Draft) => void;
-  readonly onApply: (edit: DoseEdit) => void;
-  readonly onCancel: () => void;
 }
 
 /** One scheduled dose: planned otherwise than the rest of its order, and what was given of it. */
 export function DoseEditor({ dose, title, draft, timeZone, onDraft, onApply, onCancel }: DoseEditorProps) {
-  const checked = useSignal(false);
   const read = readDoseDraft(draft, dose, timeZone);
-  const problems = checked.value && !read.ok ? read.problems : {};
   const name = (field: string) => `dose-${dose.orderId}-${dose.occurrence}-${field}`;
-  const parts = { dose, draft, timeZone, problems, onDraft, name };
-  const apply = (event: Event) => {
-    event.preventDefault();
-    checked.value = true;
-    if (read.ok) onApply(read.edit);
-    else focusOn(name("problems"));
-  };
+  const parts = { dose, draft, timeZone, onDraft, name };
   return (
-    <form class="editor" noValidate onSubmit={apply} aria-label={title}>
-      <h3>{title}</h3>
-      <ProblemSummary id={name("problems")} problems={problems} fieldId={name} />
-      <ChoiceField
-        id={name("given")}
-        legend="What was given"
-        value={givenChoiceOf(draft)}
-        choices={[
-          { value: "none", label: "nothing recorded" },
-          { value: "as-planned", label: "given as planned" },
-          { value: "changed", label: "given otherwise" },
-          { value: "omitted", label: "omitted" },
-        ]}
-        onChoice={(given) => onDraft({ given })}
-      />
-      {givenChoiceOf(draft) === "changed" && <Parts {...parts} prefix="given" />}
-      <ChoiceField
-        id={name("plan")}
-        legend="What is planned"
-        value={planChoiceOf(draft)}
-        choices={[
-          { value: "as-rest", label: "as the rest of its order" },
-          { value: "changed", label: "otherwise" },
-          { value: "left-out", label: "left out" },
-        ]}
-        onChoice={(plan) => onDraft({ plan })}
-      />
-      {planChoiceOf(draft) === "changed" && <Parts {...parts} prefix="plan" />}
-      <TextField
-        id={name("note")}
-        label="Note on what was given"
-        text={textIn(draft, "note")}
-        onText={(note) => onDraft({ note })}
-        longest={counts.noteCharacters}
-      />
-      <div class="button-row">
-        <button type="submit" class="button button-main">
-          Apply
-        </button>
-        <button type="button" class="button" onClick={onCancel}>
-          Cancel
-        </button>
-      </div>
-    </form>
+    <DraftForm title={title} read={read} name={name} onApply={() => read.ok && onApply(read.edit)} onCancel={onCancel}>
+      {(problems) => (
+        <>
+          <ChoiceField
+            id={name("given")}
+            legend="What was given"
+            value={givenChoiceOf(draft)}
+            choices={[
+              { value: "none", label: "nothing recorded" },
+              { value: "as-planned", label: "given as planned" },
+              { value: "changed", label: "given otherwise" },
+              { value: "omitted", label: "omitted" },
+            ]}
+            onChoice={(given) => onDraft({ given })}
+          />
+          {givenChoiceOf(draft) === "changed" && <Parts {...parts} problems={problems} prefix="given" />}
+          <ChoiceField
+            id={name("plan")}
+            legend="What is planned"
+            value={planChoiceOf(draft)}
+            choices={[
+              { value: "as-rest", label: "as the rest of its order" },
+              { value: "changed", label: "otherwise" },
+              { value: "left-out", label: "left out" },
+            ]}
+            onChoice={(plan) => onDraft({ plan })}
+          />
+          {planChoiceOf(draft) === "changed" && <Parts {...parts} problems={problems} prefix="plan" />}
+          <TextField
+            id={name("note")}
+            label="Note on what was given"
+            text={textIn(draft, "note")}
+            onText={(note) => onDraft({ note })}
+            longest={counts.noteCharacters}
+          />
+        </>
+      )}
+    </DraftForm>
   );
 }
 

@@ -2,6 +2,7 @@ import AxeBuilder from "@axe-core/playwright";
 import { type Browser, type BrowserContextOptions, chromium, type Page } from "playwright-core";
 import { expect } from "vitest";
 import { findChromium } from "./find-chromium.mjs";
+import type { RunningProgram } from "./program.ts";
 
 const quiet = [
   "--no-sandbox",
@@ -38,8 +39,7 @@ export const twoLooks = [looks[2]!, looks[1]!] as const;
 
 /** A page of its own (storage included) that fails the test on any error the page throws or logs. */
 export async function openPage(
-  browser: Browser,
-  address: string,
+  { browser, server: { address } }: RunningProgram,
   options: BrowserContextOptions = {},
 ): Promise<{ page: Page; faults: string[] }> {
   const context = await browser.newContext({

@@ -1,24 +1,15 @@
 import { readFileSync } from "node:fs";
-import type { Browser } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
+import { describe, expect, test } from "vitest";
 import { CaseFile } from "../../shared/contract/case.ts";
-import { expectSound, looks, openBrowser, openPage } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import { expectSound, looks, openPage } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { addInfusion, fillSetting, makeCase, openDemo, save } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 describe("cases", () => {
   test.for(looks)("the list holds the invented demo and is sound at $name", async ({ options }) => {
-    const { page, faults } = await openPage(browser, server.address, options);
+    const { page, faults } = await openPage(program(), options);
     await page.goto("/");
     await page.getByRole("link", { name: /^Demo \(invented\)/ }).waitFor();
     expect(await page.getByRole("region", { name: "Cautions" }).innerText()).toContain("It is not an order");
@@ -28,7 +19,7 @@ describe("cases", () => {
   });
 
   test("a case is made, found again, archived and brought back", async () => {
-    const { page, faults } = await openPage(browser, server.address);
+    const { page, faults } = await openPage(program());
     await makeCase(page, "Invented kidney case");
     await page.getByRole("link", { name: "Ebbline", exact: true }).click();
     await page.getByRole("textbox", { name: "Find by label or notes" }).fill("kidney");
@@ -44,7 +35,7 @@ describe("cases", () => {
   });
 
   test("a case without label or with an unknown zone is refused beside the field, and what was typed stays", async () => {
-    const { page } = await openPage(browser, server.address);
+    const { page } = await openPage(program());
     await page.goto("/");
     await page.getByRole("combobox", { name: "Time zone" }).fill("Mars/Olympus");
     await page.getByRole("textbox", { name: "Notes", exact: true }).fill("kept");
@@ -58,7 +49,7 @@ describe("cases", () => {
   });
 
   test("a case goes out as a file and comes in again, its hashes checked", async () => {
-    const { page } = await openPage(browser, server.address);
+    const { page } = await openPage(program());
     await makeCase(page, "Case for a file");
     await fillSetting(page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
     await addInfusion(page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });
@@ -103,7 +94,7 @@ describe("cases", () => {
   });
 
   test("an address that leads nowhere says so", async () => {
-    const { page } = await openPage(browser, server.address);
+    const { page } = await openPage(program());
     await page.goto("/cases/00000000-0000-4000-8000-000000000000");
     await page.getByRole("alert").waitFor();
     await expectSound(page);
@@ -113,7 +104,7 @@ describe("cases", () => {
   });
 
   test.for(looks)("the demo case is sound at $name", async ({ options }) => {
-    const { page, faults } = await openPage(browser, server.address, options);
+    const { page, faults } = await openPage(program(), options);
     await openDemo(page);
     await expectSound(page);
     expect(faults).toEqual([]);

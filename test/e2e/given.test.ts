@@ -1,24 +1,15 @@
-import type { Browser } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import { describe, expect, test } from "vitest";
+import { expectSound, openPage, twoLooks } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { addInfusion, curveDrawn, field, fillSetting, makeCase, tableText } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 describe("what was given", () => {
   test.for(twoLooks)(
     "as planned, at another time and amount, omitted and extra: each is recorded and counted, at $name",
     async ({ options }) => {
-      const { page, faults } = await openPage(browser, server.address, options);
+      const { page, faults } = await openPage(program(), options);
       await makeCase(page, "What was given", "UTC");
       await fillSetting(page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
       await addInfusion(page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });

@@ -1,22 +1,13 @@
-import type { Browser } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import { describe, expect, test } from "vitest";
+import { expectSound, openPage } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { addInfusion, curveDrawn, field, fillSetting, makeCase } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 describe("unsaved work", () => {
   test("is offered back after the page was closed, wrong fields included", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await makeCase(page, "Closed in the middle");
     await fillSetting(page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
     await addInfusion(page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });
@@ -47,7 +38,7 @@ describe("unsaved work", () => {
   });
 
   test("that cannot be read is never guessed, and can be taken away as it is", async () => {
-    const { page } = await openPage(browser, server.address);
+    const { page } = await openPage(program());
     await makeCase(page, "Damaged");
     await field(page, "Length of the plan").fill("48");
     await page.reload();
@@ -63,10 +54,10 @@ describe("unsaved work", () => {
   });
 
   test("outlives a server that is stopped and started again", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await makeCase(page, "Server away");
     await fillSetting(page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
-    await server.restart();
+    await program().server.restart();
     await page.getByRole("button", { name: "Save the case's details" }).click();
     await page.getByText("Label, notes, time zone, kinetics and plan are as saved.").waitFor();
     await page.context().close();

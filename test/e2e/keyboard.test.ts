@@ -1,22 +1,13 @@
-import type { Browser } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { openBrowser, openPage } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import { describe, expect, test } from "vitest";
+import { openPage } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { curveDrawn, openDemo } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 describe("the keyboard alone", () => {
   test("makes a case, gives kinetics and an order, moves a dose and saves", async () => {
-    const { page, faults } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page, faults } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await page.goto("/");
     await page.getByRole("link", { name: /^Demo/ }).waitFor();
     const tabTo = async (selector: string) => {
@@ -62,7 +53,7 @@ describe("the keyboard alone", () => {
   });
 
   test("always shows where it is, and what has the focus is not hidden", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await openDemo(page);
     const hidden: string[] = [];
     const unmarked: string[] = [];

@@ -1,21 +1,12 @@
-import type { Browser } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import { describe, expect, test } from "vitest";
+import { expectSound, openPage } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { curveDrawn, field, fillSetting, makeCase } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 async function openFilled(label: string) {
-  const opened = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+  const opened = await openPage(program(), { viewport: { width: 1400, height: 900 } });
   await makeCase(opened.page, label);
   await fillSetting(opened.page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
   return opened;

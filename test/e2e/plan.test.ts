@@ -1,18 +1,10 @@
-import type { Browser, Page } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import type { Page } from "playwright-core";
+import { describe, expect, test } from "vitest";
+import { expectSound, openPage, twoLooks } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { addInfusion, curveDrawn, field, fillSetting, levelIn, makeCase, save, tableText } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 /** By hand: 500 mg over 1 h every 8 h, CL 5 L/h, V 40 L. */
 const k = 0.125;
@@ -30,7 +22,7 @@ describe("the main job", () => {
   test.for(twoLooks)(
     "three alternatives with a late dose and a dialysis session, from an empty case to a sheet, at $name",
     async ({ options }) => {
-      const { page, faults } = await openPage(browser, server.address, options);
+      const { page, faults } = await openPage(program(), options);
       await makeCase(page, "Invented case for the whole way");
       await fillSetting(page, {
         start: "2026-03-02 08:00",
@@ -95,7 +87,7 @@ describe("the main job", () => {
   );
 
   test("the page, the API and the stored revision say the same level", async () => {
-    const { page } = await openPage(browser, server.address);
+    const { page } = await openPage(program());
     await makeCase(page, "Invented case for the API", "UTC");
     await fillSetting(page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
     await addInfusion(page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });

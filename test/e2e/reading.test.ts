@@ -1,20 +1,12 @@
 import { readFileSync } from "node:fs";
 import { parse } from "csv-parse/sync";
-import type { Browser, Page } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import type { Page } from "playwright-core";
+import { describe, expect, test } from "vitest";
+import { expectSound, openPage, twoLooks } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { addInfusion, curveDrawn, field, fillSetting, levelIn, makeCase, openDemo, tableText } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 async function csvFrom(page: Page, button: string): Promise<string[][]> {
   const download = page.waitForEvent("download");
@@ -28,7 +20,7 @@ describe("reading a case", () => {
   test.for(twoLooks)(
     "what remains adds up to the level, in the table, the picture and the file, at $name",
     async ({ options }) => {
-      const { page, faults } = await openPage(browser, server.address, options);
+      const { page, faults } = await openPage(program(), options);
       await openDemo(page);
       await field(page, "Time of the cursor").fill("2026-03-28 10:00");
       await page.keyboard.press("Enter");
@@ -52,7 +44,7 @@ describe("reading a case", () => {
   test.for(twoLooks)(
     "figures stand side by side with marks in words, and go out as a file, at $name",
     async ({ options }) => {
-      const { page } = await openPage(browser, server.address, options);
+      const { page } = await openPage(program(), options);
       await openDemo(page);
       const table = page.getByRole("table", { name: "Figures of the alternatives" });
       const rows = await tableText(table);
@@ -76,7 +68,7 @@ describe("reading a case", () => {
   );
 
   test("the levels stand in a table and go out as a file", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await openDemo(page);
     await page.getByText("The levels as a table").click();
     await expectSound(page);
@@ -87,7 +79,7 @@ describe("reading a case", () => {
   });
 
   test("says how long to wait, exactly, with and without further doses", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await makeCase(page, "Waiting", "UTC");
     await fillSetting(page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
     await addInfusion(page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });
@@ -105,7 +97,7 @@ describe("reading a case", () => {
   });
 
   test("works the arithmetic on the page as on the sheet", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await openDemo(page);
     await page.getByText(/^How the figures of .* come about/).click();
     await page.getByText("A = 1 ÷ (1 − e^(−k × P))").waitFor();

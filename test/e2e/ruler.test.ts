@@ -1,24 +1,16 @@
-import type { Browser, BrowserContextOptions, Locator, Page } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import type { BrowserContextOptions, Locator, Page } from "playwright-core";
+import { describe, expect, test } from "vitest";
+import { expectSound, openPage, twoLooks } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { addInfusion, curveDrawn, field, fillSetting, levelIn, makeCase, openDemo } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 async function openPlan(
   label: string,
   options: BrowserContextOptions = { viewport: { width: 1400, height: 1000 } },
 ): Promise<{ page: Page; faults: string[] }> {
-  const opened = await openPage(browser, server.address, options);
+  const opened = await openPage(program(), options);
   await makeCase(opened.page, label, "UTC");
   await fillSetting(opened.page, {
     start: "2026-03-02 08:00",
@@ -152,7 +144,7 @@ describe("the ruler", () => {
   });
 
   test("a print shows the whole picture, dark on light, in proportion", async () => {
-    const { page, faults } = await openPage(browser, server.address, {
+    const { page, faults } = await openPage(program(), {
       viewport: { width: 1400, height: 900 },
       colorScheme: "dark",
     });
@@ -194,7 +186,7 @@ describe("the ruler", () => {
   });
 
   test("the cursor is a slider that reads out levels; zoom and axis change the picture, not the numbers", async () => {
-    const { page, faults } = await openPage(browser, server.address, { viewport: { width: 1400, height: 1000 } });
+    const { page, faults } = await openPage(program(), { viewport: { width: 1400, height: 1000 } });
     await openDemo(page);
     const slider = page.getByRole("slider", { name: /^Cursor/ });
     await slider.focus();

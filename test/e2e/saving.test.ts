@@ -1,21 +1,13 @@
-import type { Browser, BrowserContextOptions } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { expectSound, openBrowser, openPage, twoLooks } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import type { BrowserContextOptions } from "playwright-core";
+import { describe, expect, test } from "vitest";
+import { expectSound, openPage, twoLooks } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { addInfusion, curveDrawn, field, fillSetting, makeCase, save, tableText } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 async function openSaved(label: string, options: BrowserContextOptions = { viewport: { width: 1400, height: 900 } }) {
-  const opened = await openPage(browser, server.address, options);
+  const opened = await openPage(program(), options);
   await makeCase(opened.page, label, "UTC");
   await fillSetting(opened.page, { start: "2026-03-02 08:00", horizonH: "48", volumeL: "40", clearanceLPerH: "5" });
   await addInfusion(opened.page, { amountMg: "500", durationH: "1", at: "2026-03-02 08:00", intervalH: "8" });

@@ -1,23 +1,14 @@
-import type { Browser } from "playwright-core";
-import { afterAll, beforeAll, describe, expect, test } from "vitest";
+import { describe, expect, test } from "vitest";
 import { findWritingFaults } from "../writing-rules.ts";
-import { openBrowser, openPage } from "./browser.ts";
-import { type RunningServer, startServer } from "./running-server.ts";
+import { openPage } from "./browser.ts";
+import { runningProgram } from "./program.ts";
 import { openDemo } from "./steps.ts";
 
-let server: RunningServer;
-let browser: Browser;
-beforeAll(async () => {
-  [server, browser] = await Promise.all([startServer(), openBrowser()]);
-});
-afterAll(async () => {
-  await browser.close();
-  await server.stop();
-});
+const program = runningProgram();
 
 describe("the words on the screen", () => {
   test("keep the medication-safety writing rules on every page, everything opened", async () => {
-    const { page } = await openPage(browser, server.address, { viewport: { width: 1400, height: 900 } });
+    const { page } = await openPage(program(), { viewport: { width: 1400, height: 900 } });
     await page.goto("/");
     await page.getByRole("link", { name: /^Demo/ }).waitFor();
     expect(findWritingFaults(await page.locator("body").innerText())).toEqual([]);
