@@ -1,9 +1,9 @@
 import type { ComponentChildren } from "preact";
 import type { Schedule } from "../../shared/contract/case.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
+import { sayGive } from "../../shared/schedule/say-order.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { formatHours } from "../../shared/units/format.ts";
-import { sayGive } from "../orders/say-order.ts";
 import { nameOfDose } from "../reading/dose-words.ts";
 import { sayOutcome } from "./say-dose.ts";
 

@@ -1,7 +1,7 @@
 import type { Schedule } from "../../shared/contract/case.ts";
 import type { Give } from "../../shared/contract/schedule.ts";
-import { amountGivenMg } from "../../shared/figures/amounts.ts";
 import { toLocal } from "../../shared/schedule/clock.ts";
+import { amountGivenMg } from "../../shared/schedule/given-amount.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import type { CsvTable } from "../reading/csv-button.tsx";
 import { nameOfDose } from "../reading/dose-words.ts";

@@ -1,7 +1,7 @@
 import { sayClock } from "../../shared/schedule/clock.ts";
+import { sayGive } from "../../shared/schedule/say-order.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { same } from "../case/same.ts";
-import { sayGive } from "../orders/say-order.ts";
 
 /** What became of a dose, in words; only what differs from the plan is repeated. */
 export function sayOutcome(dose: ScheduledDose, timeZone: string): string {

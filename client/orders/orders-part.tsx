@@ -1,4 +1,5 @@
 import { counts } from "../../shared/contract/limits.ts";
+import { sayOrder } from "../../shared/schedule/say-order.ts";
 import { letterOf, withSchedule } from "../case/case-document.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { momentFields } from "../case/drafts.ts";
@@ -10,7 +11,6 @@ import { ExceptionsList } from "./exceptions-list.tsx";
 import { draftOfOrder, emptyOrderDraft } from "./order-draft.ts";
 import { OrderEditor } from "./order-editor.tsx";
 import { withException, withOrder, withoutOrder } from "./order-edits.ts";
-import { sayOrder } from "./say-order.ts";
 import "../setting/entries.css";
 import "./orders-part.css";
 

@@ -1,11 +1,12 @@
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import type { RangeMgPerL } from "../../shared/contract/dose.ts";
+import type { LevelScale } from "../../shared/figures/bends.ts";
+import { type CurvePoint, curvePoints } from "../../shared/figures/curve-points.ts";
 import type { TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
 import type { Walk } from "../../shared/kinetics/walk.ts";
 import { formatLevel } from "../../shared/units/format.ts";
 import { lookAt } from "./alternative-look.ts";
-import type { CurvePicture, LevelScale, PictureLine, PictureMark } from "./curve-picture.ts";
-import { type CurvePoint, curvePoints } from "./curve-points.ts";
+import type { CurvePicture, PictureLine, PictureMark } from "./curve-picture.ts";
 import { predictionOf } from "./predictions.ts";
 import { outermost, pointsToMark, type TurningPoint, turningPoints } from "./turning-points.ts";
 

@@ -1,9 +1,9 @@
 import type { RegimenContent } from "../../shared/contract/case.ts";
+import { curvePoints } from "../../shared/figures/curve-points.ts";
 import { hoursBetween } from "../../shared/schedule/clock.ts";
 import type { AlternativeLook } from "./alternative-look.ts";
 import { type ClockTicks, clockTicks } from "./clock-ticks.ts";
 import type { CurvePicture, PictureLine } from "./curve-picture.ts";
-import { curvePoints } from "./curve-points.ts";
 import { predictionOf } from "./predictions.ts";
 
 export interface ComparisonInput {

@@ -1,6 +1,7 @@
 import type { RangeMgPerL } from "../../shared/contract/dose.ts";
+import type { LevelScale } from "../../shared/figures/bends.ts";
+import type { CurvePoint } from "../../shared/figures/curve-points.ts";
 import type { TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
-import type { CurvePoint } from "./curve-points.ts";
 
 /** One curve. Colours are names of tokens, so that a picture holds in the light and in the dark. */
 export interface PictureLine {
@@ -20,8 +21,6 @@ export interface PictureMark {
   /** The level in words, where there is room for it. */
   readonly text?: string;
 }
-
-export type LevelScale = "linear" | "logarithmic";
 
 /** Everything on one chart, as plain data. */
 export interface CurvePicture {

@@ -1,6 +1,6 @@
+import type { LevelScale } from "../../shared/figures/bends.ts";
 import { ChoiceField } from "../controls/choice-field.tsx";
 import { SelectField } from "../controls/select-field.tsx";
-import type { LevelScale } from "./curve-picture.ts";
 import type { CurveView } from "./curve-view.ts";
 import { type SnapStep, snapSteps } from "./snap.ts";
 

@@ -1,10 +1,11 @@
 import { computed, type ReadonlySignal, type Signal, signal } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
+import type { LevelScale } from "../../shared/figures/bends.ts";
 import type { TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { pictureOf } from "./case-picture.ts";
 import { type ClockTicks, clockTicks } from "./clock-ticks.ts";
-import type { CurvePicture, LevelScale } from "./curve-picture.ts";
+import type { CurvePicture } from "./curve-picture.ts";
 import { createDoseHand, type DoseHand } from "./dose-hand.ts";
 import { holding, panned, windowWithin, zoomed } from "./plot-scale.ts";
 import { selectedKeyOf } from "./selected.ts";

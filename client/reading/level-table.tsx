@@ -1,11 +1,11 @@
 import { useSignal } from "@preact/signals";
+import { curvePoints } from "../../shared/figures/curve-points.ts";
 import type { Walk } from "../../shared/kinetics/walk.ts";
 import { instantAt, sayClock, toLocal } from "../../shared/schedule/clock.ts";
 import { formatHours, formatLevel } from "../../shared/units/format.ts";
 import { SelectField } from "../controls/select-field.tsx";
 import { lookAt } from "./alternative-look.ts";
 import { CsvButton, type CsvTable } from "./csv-button.tsx";
-import { curvePoints } from "./curve-points.ts";
 import type { CurveView } from "./curve-view.ts";
 import { levelColumns, tableHours } from "./level-rows.ts";
 import { predictionOf } from "./predictions.ts";

@@ -1,4 +1,4 @@
-import { curvePoints } from "../../shared/figures/curve-points.ts";
+import { type CurvePoint, curvePoints } from "../../shared/figures/curve-points.ts";
 import type { Prepared } from "../../shared/figures/prepared.ts";
 import { exposureOf } from "../../shared/kinetics/exposure.ts";
 import { instantAt, sayClock, sayTime } from "../../shared/schedule/clock.ts";
@@ -7,6 +7,8 @@ import { niceTicks, timeTicksH } from "./axis.ts";
 import { face, ink, marginPt, needRoom, type Paper } from "./paper.ts";
 import { heading, paragraph } from "./writing.ts";
 
+/** Points of the curve a printer can tell apart, for each point of the page. */
+const perPt = 3;
 const heightPt = 210;
 const leftPt = 44;
 const footPt = 40;
@@ -40,9 +42,9 @@ function draw(paper: Paper, given: Prepared, planned: Prepared | undefined, top:
   const { horizonH } = given.course;
   const range = given.content.setting.rangeMgPerL;
   const curves = [given, ...(planned === undefined ? [] : [planned])].map(({ made }) =>
-    curvePoints(made, { fromH: 0, toH: horizonH }, 600),
+    curvePoints(made, { fromH: 0, toH: horizonH }, perPt * paper.widthPt),
   );
-  const highest = Math.max(...curves.flatMap(({ mgPerL }) => mgPerL), range?.high ?? 0);
+  const highest = Math.max(...curves.flatMap((points) => points.map(({ y }) => y)), range?.high ?? 0);
   const ticks = niceTicks(highest > 0 ? highest * 1.06 : 1);
   const left = marginPt + leftPt;
   const right = marginPt + paper.widthPt - 6;
@@ -119,14 +121,14 @@ function drawTimes(doc: PDFKit.PDFDocument, { left, right, bottom, x }: Frame, {
 function drawCurve(
   doc: PDFKit.PDFDocument,
   { x, y }: Frame,
-  { timesH, mgPerL }: ReturnType<typeof curvePoints>,
+  points: readonly CurvePoint[],
   line: "full" | "dashed",
 ): void {
   doc.lineWidth(line === "full" ? 1.3 : 0.9).strokeColor(line === "full" ? ink.text : ink.soft);
   if (line === "dashed") doc.dash(4, { space: 3 });
-  timesH.forEach((timeH, index) => {
-    if (index === 0) doc.moveTo(x(timeH), y(mgPerL[index]!));
-    else doc.lineTo(x(timeH), y(mgPerL[index]!));
+  points.forEach((point, index) => {
+    if (index === 0) doc.moveTo(x(point.x), y(point.y));
+    else doc.lineTo(x(point.x), y(point.y));
   });
   doc.stroke();
   if (line === "dashed") doc.undash();

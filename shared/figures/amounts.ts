@@ -1,17 +1,8 @@
-import type { Dose } from "../contract/dose.ts";
 import type { Give } from "../contract/schedule.ts";
+import { amountGivenMg, doseMg } from "../schedule/given-amount.ts";
 import type { Figure, Value } from "./figure.ts";
 import { momentAt } from "./moment.ts";
 import type { Prepared } from "./prepared.ts";
-
-/** Milligrams in one dose as ordered, before the salt factor; for a pump, rate x time of all its steps. */
-export function amountGivenMg(give: Give): number {
-  if (give.kind !== "pump") return give.amountMg;
-  return give.steps.slice(1).reduce((sum, step, index) => {
-    const before = give.steps[index]!;
-    return sum + before.rateMgPerH * (step.afterH - before.afterH);
-  }, 0);
-}
 
 /** Highest rate of one dose and how long after its time; undefined where it enters at once or by absorption. */
 export function highestRateIn(give: Give): { readonly mgPerH: number; readonly afterH: number } | undefined {
@@ -30,7 +21,7 @@ export function totalAmount({ doses }: Prepared): Figure {
 export function amountPerDay({ settled }: Prepared): Figure {
   if (settled.kind === "none") return { absent: settled.why };
   const { course, steady } = settled;
-  const cycleMg = course.doses.reduce((sum, dose) => sum + cycleDoseMg(dose), 0);
+  const cycleMg = course.doses.reduce((sum, dose) => sum + doseMg(dose), 0);
   return { value: (cycleMg * 24) / steady.cycleH, unit: "mg per day" };
 }
 
@@ -56,12 +47,4 @@ function highest({ content, doses }: Prepared, absent: string, read: (dose: Sche
     if (figure !== undefined && (best === undefined || figure.value > best.value)) best = figure;
   }
   return best === undefined ? { absent } : { ...best, ...momentAt(content, best.atH) };
-}
-
-function cycleDoseMg(dose: Dose): number {
-  if (dose.kind !== "pump") return dose.amountMg;
-  return dose.steps.slice(1).reduce((sum, step, index) => {
-    const before = dose.steps[index]!;
-    return sum + before.rateMgPerH * (step.atH - before.atH);
-  }, 0);
 }

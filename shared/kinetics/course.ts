@@ -126,3 +126,8 @@ function piece(
 export function effectiveMg(course: Course, dose: { readonly kind: string; readonly amountMg: number }): number {
   return course.saltFactor * dose.amountMg * (dose.kind === "absorbed" ? course.bioavailability : 1);
 }
+
+/** Elapsed hours at which a dose is given, whenever it reaches the blood. */
+export function beginsH(dose: Dose): number {
+  return dose.kind === "pump" ? dose.steps[0]!.atH : dose.atH;
+}

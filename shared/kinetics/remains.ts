@@ -1,7 +1,7 @@
 import type { Dose } from "../contract/dose.ts";
 import type { Contribution } from "../contract/prediction.ts";
 import { DomainError } from "../errors.ts";
-import { type Course, effectiveMg } from "./course.ts";
+import { beginsH, type Course, effectiveMg } from "./course.ts";
 import { type Survival, survivalUntil } from "./survival.ts";
 
 /**
@@ -21,8 +21,7 @@ export function remainsAt(course: Course, atH: number): Contribution[] {
   if (course.startConcentrationMgPerL > 0)
     parts.push({ dose: "start", mgPerL: survival.ofBodyMg(course.startConcentrationMgPerL * volumeL, 0) / volumeL });
   course.doses.forEach((dose, index) => {
-    const beginsH = dose.kind === "pump" ? dose.steps[0]!.atH : dose.atH;
-    if (beginsH <= atH) parts.push({ dose: index, mgPerL: leftOf(course, dose, survival) / volumeL });
+    if (beginsH(dose) <= atH) parts.push({ dose: index, mgPerL: leftOf(course, dose, survival) / volumeL });
   });
   const total = parts.reduce((level, part) => level + part.mgPerL, 0);
   return parts.map((part) => ({ ...part, percent: total > 0 ? (100 * part.mgPerL) / total : 0 }));

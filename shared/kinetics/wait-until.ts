@@ -1,5 +1,5 @@
 import { DomainError } from "../errors.ts";
-import type { Course } from "./course.ts";
+import { beginsH, type Course } from "./course.ts";
 import { crossingsOf } from "./crossings.ts";
 import { levelsAt } from "./levels.ts";
 import { type Walk, walk } from "./walk.ts";
@@ -82,10 +82,6 @@ function neverBelow(course: Course, mgPerL: number): string {
   if (course.doses.some((dose) => dose.kind === "pump" && dose.steps.at(-1)!.rateMgPerH > 0))
     return "a pump is left running";
   return "nothing is eliminated fast enough";
-}
-
-function beginsH(dose: Course["doses"][number]): number {
-  return dose.kind === "pump" ? dose.steps[0]!.atH : dose.atH;
 }
 
 /** The last hour at which anything changes by itself. */

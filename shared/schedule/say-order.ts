@@ -1,6 +1,12 @@
-import type { Give, When } from "../contract/schedule.ts";
-import { formatDose, formatDuration, formatHours, formatRate } from "../units/format.ts";
+import type { Give, Order, When } from "../contract/schedule.ts";
+import { formatDose, formatDuration, formatRate } from "../units/format.ts";
 import { sayClock } from "./clock.ts";
+import { amountGivenMg } from "./given-amount.ts";
+
+/** An order as one sentence without its full stop. */
+export function sayOrder({ give, when }: Order, zone: string): string {
+  return `${sayGive(give)}; ${sayWhen(when, zone)}`;
+}
 
 /** What is given, in words: "500 mg over 1 h (500 mg per hour)". */
 export function sayGive(give: Give): string {
@@ -10,13 +16,16 @@ export function sayGive(give: Give): string {
     return `${formatDose(give.amountMg)} over ${formatDuration(give.durationH)} (${formatRate(give.amountMg / give.durationH)})`;
   const highest = give.steps.reduce((most, { rateMgPerH }) => Math.max(most, rateMgPerH), 0);
   const rates = give.steps.length - 1;
-  return `pump log of ${rates} ${rates === 1 ? "rate" : "rates"} over ${formatHours(give.steps.at(-1)!.afterH)}, at most ${formatRate(highest)}`;
+  const firstH = give.steps.find(({ rateMgPerH }) => rateMgPerH > 0)?.afterH ?? 0;
+  const waits = firstH > 0 ? `, the first rate after ${formatDuration(firstH)}` : "";
+  const lasts = formatDuration(give.steps.at(-1)!.afterH);
+  return `pump log of ${rates} ${rates === 1 ? "rate" : "rates"} over ${lasts}${waits}, ${formatDose(amountGivenMg(give))} in all, at most ${formatRate(highest)}`;
 }
 
 /** When it is given, in words, with date and 24-hour time. */
 export function sayWhen(when: When, zone: string): string {
   if (when.kind === "once") return `once, ${sayClock(when.at, zone)}`;
-  const rhythm = when.kind === "every" ? `every ${formatHours(when.intervalH)}` : `daily at ${sayTimes(when.times)}`;
+  const rhythm = when.kind === "every" ? `every ${formatDuration(when.intervalH)}` : `daily at ${sayTimes(when.times)}`;
   return `${rhythm}, from ${sayClock(when.from, zone)}${sayEnd(when.end, zone)}`;
 }
 

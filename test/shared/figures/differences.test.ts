@@ -46,10 +46,14 @@ describe("differencesOf", () => {
   });
 
   test("tells two long pump logs apart, also where the steps that differ are not read out", () => {
+    // 19 mg per hour in the one quarter of an hour or in the next: the same in all, and the same at most.
     const log = (lastRate: number) => ({
       kind: "pump" as const,
       steps: [
-        ...Array.from({ length: 60 }, (_, index) => ({ afterH: index / 4, rateMgPerH: index === 59 ? lastRate : 20 })),
+        ...Array.from({ length: 60 }, (_, index) => ({ afterH: index / 4, rateMgPerH: 20 })).with(
+          lastRate === 19 ? 59 : 58,
+          { afterH: (lastRate === 19 ? 59 : 58) / 4, rateMgPerH: 19 },
+        ),
         { afterH: 15, rateMgPerH: 0 },
       ],
     });

@@ -1,5 +1,7 @@
-import type { LevelScale } from "./curve-picture.ts";
 import type { CurvePoint } from "./curve-points.ts";
+
+/** How a level axis is divided. */
+export type LevelScale = "linear" | "logarithmic";
 
 /** A line this far from the curve cannot be told from it. */
 const unseenPx = 0.1;

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
-import { sayGive, sayOrder } from "../../../client/orders/say-order.ts";
 import type { Order } from "../../../shared/contract/schedule.ts";
+import { sayGive, sayOrder } from "../../../shared/schedule/say-order.ts";
 import { everyEight } from "../../invented-content.ts";
 
 const at = "2026-03-03T20:00:00Z";

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
-import { curvePoints } from "../../../client/reading/curve-points.ts";
 import { outermost, turningPoints } from "../../../client/reading/turning-points.ts";
+import { curvePoints } from "../../../shared/figures/curve-points.ts";
 import { courseOf } from "../../../shared/kinetics/course.ts";
 import { levelsAt } from "../../../shared/kinetics/levels.ts";
 import { walk } from "../../../shared/kinetics/walk.ts";
