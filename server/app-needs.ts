@@ -2,7 +2,7 @@ import type { Logger } from "pino";
 import type { Stores } from "../db/stores.ts";
 import type { Revision } from "../shared/contract/case.ts";
 import type { Instant } from "../shared/contract/schedule.ts";
-import type { Calculate } from "./predictions/calculator.ts";
+import type { Calculate } from "./predictions/answer-question.ts";
 import type { Appraise } from "./revisions/judge-content.ts";
 import type { Settings } from "./settings.ts";
 

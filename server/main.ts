@@ -8,7 +8,6 @@ import { createApp } from "./app.ts";
 import { insertDemoCase } from "./demo/demo-case.ts";
 import { jobRunner } from "./jobs/job-runner.ts";
 import { makeLogger } from "./logger.ts";
-import { threadCalculator } from "./predictions/calculator.ts";
 import { serve } from "./serve.ts";
 import { readSettings } from "./settings.ts";
 import { silentDescription } from "./silent-description.ts";
@@ -31,7 +30,8 @@ async function start(): Promise<void> {
   const db = openDatabase(settings.database);
   const stores = sqliteStores(db);
   const jobs = jobRunner();
-  const calculator = threadCalculator();
+  // A thread of its own: no prediction waits for a sheet.
+  const calculator = jobRunner();
   await insertDemoCase(stores, jobs.appraise, clock());
   await stores.answers.forgetBefore(new Date(Date.now() - rememberAnswersMs).toISOString());
   const built = join(projectFolder(), ".build", "client");

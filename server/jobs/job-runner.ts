@@ -1,5 +1,6 @@
 import { Worker } from "node:worker_threads";
 import type { WriteSheet } from "../app-needs.ts";
+import { answerQuestion, type Calculate } from "../predictions/answer-question.ts";
 import { RequestError } from "../request-errors.ts";
 import type { Appraisal } from "../revisions/appraise.ts";
 import type { Appraise } from "../revisions/judge-content.ts";
@@ -7,6 +8,7 @@ import { DescribedError } from "../silent-description.ts";
 import type { Job, Result } from "./job.ts";
 
 export interface JobRunner {
+  readonly calculate: Calculate;
   readonly appraise: Appraise;
   readonly writeSheet: WriteSheet;
   stop(): Promise<void>;
@@ -65,6 +67,15 @@ export function jobRunner(mostMs = 30_000): JobRunner {
       thread.postMessage({ id, job });
     });
   return {
+    async calculate(question) {
+      try {
+        return (await run({ kind: "answer", question })) as Uint8Array;
+      } catch (error) {
+        if (error instanceof RequestError) throw error;
+        // Looked at again here: what a bad question deserves to be told lost its class between the threads.
+        return answerQuestion(question);
+      }
+    },
     appraise: async (content) => (await run({ kind: "appraise", content })) as Appraisal,
     writeSheet: async (revision, { paper }) => (await run({ kind: "sheet", revision, paper })) as Uint8Array,
     async stop() {

@@ -1,6 +1,6 @@
 import { parentPort } from "node:worker_threads";
+import { answerQuestion } from "../predictions/answer-question.ts";
 import { appraise } from "../revisions/appraise.ts";
-import { writeSheet } from "../sheet/sheet.ts";
 import { silentDescription } from "../silent-description.ts";
 import type { Job, Order, Result } from "./job.ts";
 
@@ -19,5 +19,9 @@ async function resultOf(id: number, job: Job): Promise<Result> {
 }
 
 async function done(job: Job): Promise<unknown> {
-  return job.kind === "appraise" ? appraise(job.content) : writeSheet(job.revision, { paper: job.paper });
+  if (job.kind === "answer") return answerQuestion(job.question);
+  if (job.kind === "appraise") return appraise(job.content);
+  // Only where one is asked for: fonts and all, it is most of what a thread would have to load.
+  const { writeSheet } = await import("../sheet/sheet.ts");
+  return writeSheet(job.revision, { paper: job.paper });
 }

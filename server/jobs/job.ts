@@ -1,9 +1,11 @@
 import type { RegimenContent, Revision } from "../../shared/contract/case.ts";
+import type { Question } from "../predictions/answer-question.ts";
 import type { SilentDescription } from "../silent-description.ts";
 
 /** Work that takes long enough to be felt by everybody else if it were done on the thread that answers. */
 export type Job =
   | { readonly kind: "appraise"; readonly content: RegimenContent }
+  | { readonly kind: "answer"; readonly question: Question }
   | { readonly kind: "sheet"; readonly revision: Revision; readonly paper: "A4" | "Letter" };
 
 export interface Order {

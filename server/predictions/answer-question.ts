@@ -14,6 +14,9 @@ export interface Question {
   readonly body: unknown;
 }
 
+/** Answers a question; rejects with the error that the question deserves. */
+export type Calculate = (question: Question) => Promise<Uint8Array>;
+
 const write = answerWriter();
 
 /**

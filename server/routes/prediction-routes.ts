@@ -1,8 +1,7 @@
 import { type RequestHandler, Router } from "express";
 import { jsonBody } from "../json-body.ts";
 import { only } from "../methods.ts";
-import type { Question } from "../predictions/answer-question.ts";
-import type { Calculate } from "../predictions/calculator.ts";
+import type { Calculate, Question } from "../predictions/answer-question.ts";
 
 /** Answers that keep nothing. */
 export function predictionRoutes({ calculate }: { readonly calculate: Calculate }): Router {

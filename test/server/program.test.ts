@@ -3,38 +3,19 @@ import { randomUUID } from "node:crypto";
 import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
-import { pathToFileURL } from "node:url";
 import { promisify } from "node:util";
-import { afterAll, beforeAll, describe, expect, onTestFinished, test } from "vitest";
+import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { closeDatabase, openDatabase } from "../../db/open-database.ts";
 import { projectFolder } from "../../db/project-folder.ts";
-import type { jobRunner as JobRunner } from "../../server/jobs/job-runner.ts";
-import { answerQuestion } from "../../server/predictions/answer-question.ts";
-import { calculateHere, type threadCalculator as ThreadCalculator } from "../../server/predictions/calculator.ts";
-import { appraise } from "../../server/revisions/appraise.ts";
 import { RevisionAnswer } from "../../shared/contract/answers.ts";
-import { RegimenContent, type Revision } from "../../shared/contract/case.ts";
-import { buildServer, type Program, runToItsEnd, startProgram } from "./support/program.ts";
+import type { Revision } from "../../shared/contract/case.ts";
+import { type Answer, buildServer, type Program, post, runToItsEnd, startProgram } from "./support/program.ts";
 import { caseDraft, draft } from "./support/samples.ts";
 
 const folder = mkdtempSync(join(tmpdir(), "ebbline-program-"));
 beforeAll(buildServer, 120_000);
 afterAll(() => rmSync(folder, { recursive: true }));
 const fileAt = (name: string) => join(folder, name);
-
-interface Answer {
-  readonly status: number;
-  readonly body: { readonly [name: string]: unknown };
-}
-
-async function post(address: string, path: string, body: unknown, key: string = randomUUID()): Promise<Answer> {
-  const answer = await fetch(address + path, {
-    method: "POST",
-    headers: { "Content-Type": "application/json", "Idempotency-Key": key },
-    body: JSON.stringify(body),
-  });
-  return { status: answer.status, body: (await answer.json()) as Answer["body"] };
-}
 
 /** A regimen to save revisions of; its path for revisions. */
 async function makeRegimen(address: string): Promise<string> {
@@ -171,105 +152,6 @@ describe("the program", () => {
     // Done on the thread that answers, one of these would have waited for nearly all of it. A ratio, since
     // the machine may be busy.
     expect(Math.max(...waitsMs)).toBeLessThan(longMs / 2);
-    child.kill("SIGTERM");
-    await ended;
-  });
-});
-
-describe("the thread for long work", () => {
-  /** As built: Node starts a thread from a .js file only. */
-  const runner = async (mostMs?: number) => {
-    const built = (await import(
-      pathToFileURL(join(projectFolder(), ".build", "server", "jobs", "job-runner.js")).href
-    )) as {
-      jobRunner: typeof JobRunner;
-    };
-    const jobs = built.jobRunner(mostMs);
-    onTestFinished(() => jobs.stop());
-    return jobs;
-  };
-  const content = RegimenContent.parse(draft.content);
-
-  test("appraises as this thread would", async () => {
-    const jobs = await runner();
-    expect(await jobs.appraise(content)).toEqual(appraise(content));
-  });
-
-  test("fails one job without a word of what was typed, and does the next", async () => {
-    const jobs = await runner();
-    const broken: Revision = JSON.parse('{ "number": 1, "content": { "caseLabel": "SECRET-LABEL" } }');
-    const error = await jobs.writeSheet(broken, { paper: "A4" }).catch((reason: unknown) => reason);
-    expect(JSON.stringify([error, String(error)])).not.toContain("SECRET-LABEL");
-    expect(error).toMatchObject({ name: "DescribedError", description: { name: expect.stringMatching(/Error$/) } });
-    expect(await jobs.appraise(content)).toMatchObject({ ok: true });
-  });
-
-  test("gives up a job that takes too long, and starts anew for the next", async () => {
-    const jobs = await runner(1_500);
-    const year = { ...content.setting.plan, horizonH: 17_568 };
-    const [order] = content.schedule.orders;
-    const when = { kind: "every", from: year.start, intervalH: 2, end: { kind: "open" } } as const;
-    const long = {
-      ...content,
-      setting: { ...content.setting, plan: year },
-      schedule: { ...content.schedule, orders: [{ ...order!, when }] },
-    };
-    const outcomes = await Promise.allSettled(Array.from({ length: 40 }, () => jobs.appraise(long)));
-    expect(outcomes.filter(({ status }) => status === "rejected")[0]).toMatchObject({ reason: { code: "too-long" } });
-    await expect
-      .poll(() => jobs.appraise(content).catch(() => undefined), { timeout: 15_000 })
-      .toMatchObject({ ok: true });
-  });
-});
-
-describe("the thread that calculates", () => {
-  const calculator = async () => {
-    const path = join(projectFolder(), ".build", "server", "predictions", "calculator.js");
-    const built = (await import(pathToFileURL(path).href)) as { threadCalculator: typeof ThreadCalculator };
-    const made = built.threadCalculator();
-    onTestFinished(() => made.stop());
-    return made.calculate;
-  };
-  const body = {
-    parameters: { volumeL: 40, clearanceLPerH: 5 },
-    doses: [{ kind: "bolus", atH: 0, amountMg: 500 }],
-    horizonH: 24,
-    sampleEveryH: 0.5,
-  };
-  const text = (bytes: Uint8Array) => Buffer.from(bytes).toString();
-
-  test("answers many questions at once, each with its own answer, as this thread would", async () => {
-    const calculate = await calculator();
-    const questions = Array.from({ length: 40 }, (_, index) => ({
-      kind: "prediction" as const,
-      body: { ...body, horizonH: 24 + index },
-    }));
-    const answers = await Promise.all(questions.map(calculate));
-    for (const [index, question] of questions.entries())
-      expect(text(answers[index]!)).toBe(text(answerQuestion(question)));
-  });
-
-  test("refuses a bad question with the error that it deserves, and answers the others", async () => {
-    const calculate = await calculator();
-    const bad = { kind: "prediction" as const, body: { ...body, parameters: { volumeL: 0, clearanceLPerH: 5 } } };
-    const [refused, answered] = await Promise.allSettled([calculate(bad), calculate({ kind: "prediction", body })]);
-    expect(refused).toMatchObject({ status: "rejected" });
-    const here = await calculateHere(bad).catch((error: unknown) => error);
-    if (refused?.status === "rejected") expect(JSON.stringify(refused.reason)).toBe(JSON.stringify(here));
-    expect(answered?.status).toBe("fulfilled");
-  });
-
-  test("the program's own answer is a problem document that names the field", async () => {
-    const { child, address, ended } = await startProgram({ EBBLINE_DATABASE: fileAt("calculating.sqlite") });
-    const good = await post(address, "/api/predictions", body);
-    expect(good.body).toMatchObject({ cautions: [{ code: "standing" }] });
-    const refused = await post(address, "/api/predictions", { ...body, horizonH: -1 });
-    expect(refused).toMatchObject({ status: 422, body: { errors: [{ pointer: "#/horizonH" }] } });
-    const contradicts = await post(address, "/api/predictions", {
-      ...body,
-      doses: [{ kind: "absorbed", atH: 0, amountMg: 1 }],
-    });
-    expect(contradicts.status).toBe(422);
     child.kill("SIGTERM");
     await ended;
   });

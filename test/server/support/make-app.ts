@@ -8,7 +8,7 @@ import { sqliteStores } from "../../../db/stores.ts";
 import { createApp } from "../../../server/app.ts";
 import type { AppNeeds } from "../../../server/app-needs.ts";
 import { makeLogger } from "../../../server/logger.ts";
-import { calculateHere } from "../../../server/predictions/calculator.ts";
+import { answerQuestion } from "../../../server/predictions/answer-question.ts";
 import { appraise } from "../../../server/revisions/appraise.ts";
 import { writeSheet } from "../../../server/sheet/sheet.ts";
 import type { Case, Regimen, Revision } from "../../../shared/contract/case.ts";
@@ -43,7 +43,7 @@ export function makeApp(changes: Partial<AppNeeds> = {}): Made {
     ids: randomUUID,
     logger: makeLogger("trace", lines),
     writeSheet,
-    calculate: calculateHere,
+    calculate: async (question) => answerQuestion(question),
     appraise: async (content) => appraise(content),
     settings: { host: "127.0.0.1", publicNames: [], transport: "plain", requestsPerMinute: 1_000_000 },
     giveUp: (why) => gaveUp.push(why),

@@ -1,4 +1,5 @@
 import { type ChildProcess, execFileSync, spawn } from "node:child_process";
+import { randomUUID } from "node:crypto";
 import { once } from "node:events";
 import { join } from "node:path";
 import { onTestFinished } from "vitest";
@@ -65,4 +66,19 @@ function launch(environment: Readonly<Record<string, string>>) {
     );
   });
   return { child, output, ended, ready };
+}
+
+export interface Answer {
+  readonly status: number;
+  readonly body: { readonly [name: string]: unknown };
+}
+
+/** Posts JSON to a running program, as a page does. */
+export async function post(address: string, path: string, body: unknown, key: string = randomUUID()): Promise<Answer> {
+  const answer = await fetch(address + path, {
+    method: "POST",
+    headers: { "Content-Type": "application/json", "Idempotency-Key": key },
+    body: JSON.stringify(body),
+  });
+  return { status: answer.status, body: (await answer.json()) as Answer["body"] };
 }
