@@ -1,8 +1,7 @@
 import type { Schedule } from "../../shared/contract/case.ts";
-import type { Give } from "../../shared/contract/schedule.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
+import { sayGiven } from "../../shared/schedule/say-order.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
-import { formatDose, formatDuration, formatHours } from "../../shared/units/format.ts";
 
 /** What a dose is called, whatever time it is moved to: "dose 3", "dose 3 of order 2", "order 1", "extra dose". */
 export function nameOfDose(dose: ScheduledDose, { orders }: Schedule): string {
@@ -12,14 +11,6 @@ export function nameOfDose(dose: ScheduledDose, { orders }: Schedule): string {
     return orders.length === 1 ? "single dose" : `single dose of order ${index + 1}`;
   const number = `dose ${(dose.occurrence ?? 0) + 1}`;
   return orders.length === 1 ? number : `${number} of order ${index + 1}`;
-}
-
-/** Amount and, where there is one, duration: "500 mg over 1 h". */
-export function sayGiven(give: Give): string {
-  if (give.kind === "infusion") return `${formatDose(give.amountMg)} over ${formatDuration(give.durationH)}`;
-  if (give.kind === "bolus") return `${formatDose(give.amountMg)} as a bolus`;
-  if (give.kind === "absorbed") return `${formatDose(give.amountMg)} to be absorbed`;
-  return `pump log over ${formatHours(give.steps.at(-1)!.afterH)}`;
 }
 
 /** What became of a dose, in words. */

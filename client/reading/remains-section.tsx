@@ -1,11 +1,12 @@
 import { useComputed, useSignal } from "@preact/signals";
 import type { RegimenContent } from "../../shared/contract/case.ts";
 import { sayClock } from "../../shared/schedule/clock.ts";
+import { sayGiven } from "../../shared/schedule/say-order.ts";
 import { formatLevel, formatPercent } from "../../shared/units/format.ts";
 import type { CaseModel } from "../case/case-model.ts";
 import { CsvButton } from "./csv-button.tsx";
 import { sayHour } from "./cursor-words.ts";
-import { capital, nameOfDose, sayGiven } from "./dose-words.ts";
+import { capital, nameOfDose } from "./dose-words.ts";
 import { levelAt, predictionOf } from "./predictions.ts";
 import { type Part, partsAt, sayGathered } from "./remains-parts.ts";
 import { type PictureSlice, RemainsPicture } from "./remains-picture.tsx";

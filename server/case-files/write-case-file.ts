@@ -1,3 +1,4 @@
+import { standingCaution } from "../../shared/cautions/standing.ts";
 import type { Case, CaseFile, Regimen, Revision } from "../../shared/contract/case.ts";
 
 /** A case as a file: all that was entered and saved, and nothing that can be computed again. */
@@ -26,5 +27,6 @@ export function writeCaseFile(
           contentHash,
         })),
     })),
+    cautions: [standingCaution],
   };
 }

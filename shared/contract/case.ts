@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { Caution } from "./caution.ts";
 import { counts } from "./limits.ts";
 import { DoseRecord, ExtraDose, eachIdOnce, Instant, Order } from "./schedule.ts";
 import { CaseSetting } from "./setting.ts";
@@ -183,6 +184,8 @@ export const CaseFile = z
         }),
       )
       .max(100),
+    /** For whoever reads the file; taken in again, cautions are computed anew. */
+    cautions: z.array(Caution).max(100).exactOptional(),
   })
   .meta({ id: "CaseFile" });
 export type CaseFile = z.infer<typeof CaseFile>;

@@ -5,6 +5,7 @@ import { hoursBetween, toLocal } from "./clock.ts";
 import { elapsedDose } from "./elapsed-dose.ts";
 import { spanOf } from "./expand-orders.ts";
 import { type DueTime, dueTimes } from "./order-times.ts";
+import { restWithin } from "./rest-within.ts";
 
 /** What the repeating orders settle into, if they go on as they end. */
 export type Cycle =
@@ -83,7 +84,7 @@ function cycleDoses(
 ): Dose[] {
   const { give } = order;
   if (when.kind === "every") {
-    const phaseH = positiveRest(hoursBetween(startsAt, due[0]!.at), when.intervalH);
+    const phaseH = phase(hoursBetween(startsAt, due[0]!.at), when.intervalH);
     const times = Array.from(
       { length: Math.round(cycleH / when.intervalH) },
       (_, index) => phaseH + index * when.intervalH,
@@ -93,7 +94,7 @@ function cycleDoses(
   const startMinutes = minutesOfDay(toLocal(startsAt, zone).slice(11));
   return Array.from({ length: Math.round(cycleH / 24) }, (_, day) => day).flatMap((day) =>
     when.times.map(({ time, amountMg }) => {
-      const atH = 24 * day + positiveRest((minutesOfDay(time) - startMinutes) / 60, 24);
+      const atH = 24 * day + phase((minutesOfDay(time) - startMinutes) / 60, 24);
       return elapsedDose(amountMg === undefined || give.kind === "pump" ? give : { ...give, amountMg }, atH, lagH);
     }),
   );
@@ -105,9 +106,8 @@ function minutesOfDay(time: string): number {
 }
 
 /** Tidied to a ten-millionth of an hour, so that a phase of 11.999999999 h is not taken for one of its own. */
-function positiveRest(value: number, divisor: number): number {
-  const rest = value - divisor * Math.floor(value / divisor);
-  const tidy = Number(rest.toFixed(7));
+function phase(value: number, divisor: number): number {
+  const tidy = Number(restWithin(value, divisor).toFixed(7));
   return tidy >= divisor ? 0 : tidy;
 }
 

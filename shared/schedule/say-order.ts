@@ -1,5 +1,5 @@
 import type { Give, Order, When } from "../contract/schedule.ts";
-import { formatDose, formatDuration, formatRate } from "../units/format.ts";
+import { formatDose, formatDuration, formatHours, formatRate } from "../units/format.ts";
 import { sayClock } from "./clock.ts";
 import { amountGivenMg } from "./given-amount.ts";
 
@@ -10,16 +10,22 @@ export function sayOrder({ give, when }: Order, zone: string): string {
 
 /** What is given, in words: "500 mg over 1 h (500 mg per hour)". */
 export function sayGive(give: Give): string {
-  if (give.kind === "bolus") return `${formatDose(give.amountMg)} as a bolus`;
-  if (give.kind === "absorbed") return `${formatDose(give.amountMg)} to be absorbed`;
-  if (give.kind === "infusion")
-    return `${formatDose(give.amountMg)} over ${formatDuration(give.durationH)} (${formatRate(give.amountMg / give.durationH)})`;
+  if (give.kind === "infusion") return `${sayGiven(give)} (${formatRate(give.amountMg / give.durationH)})`;
+  if (give.kind !== "pump") return sayGiven(give);
   const highest = give.steps.reduce((most, { rateMgPerH }) => Math.max(most, rateMgPerH), 0);
   const rates = give.steps.length - 1;
   const firstH = give.steps.find(({ rateMgPerH }) => rateMgPerH > 0)?.afterH ?? 0;
   const waits = firstH > 0 ? `, the first rate after ${formatDuration(firstH)}` : "";
   const lasts = formatDuration(give.steps.at(-1)!.afterH);
   return `pump log of ${rates} ${rates === 1 ? "rate" : "rates"} over ${lasts}${waits}, ${formatDose(amountGivenMg(give))} in all, at most ${formatRate(highest)}`;
+}
+
+/** The same in brief: amount and, where there is one, duration, "500 mg over 1 h". */
+export function sayGiven(give: Give): string {
+  if (give.kind === "infusion") return `${formatDose(give.amountMg)} over ${formatDuration(give.durationH)}`;
+  if (give.kind === "bolus") return `${formatDose(give.amountMg)} as a bolus`;
+  if (give.kind === "absorbed") return `${formatDose(give.amountMg)} to be absorbed`;
+  return `pump log over ${formatHours(give.steps.at(-1)!.afterH)}`;
 }
 
 /** When it is given, in words, with date and 24-hour time. */

@@ -1,4 +1,5 @@
 import type { Course } from "../../kinetics/course.ts";
+import { restWithin } from "../../schedule/rest-within.ts";
 import { partsOf } from "./parts.ts";
 import { type ArithmeticStep, carried, put, step } from "./step.ts";
 
@@ -124,7 +125,7 @@ function boxShare(
 function absorbedShare(cycle: HandCycle, reading: Reading, { atH, amountMg }: Dosed, title: string): Share {
   const { volumeL, k, cycleH: P, accumulation: A, course } = cycle;
   const ka = course.absorptionRatePerH!;
-  const u = carried(positiveRest(reading.atH - atH, P));
+  const u = carried(restWithin(reading.atH - atH, P));
   const { bioavailability: F, saltFactor: S } = course;
   const amount = `${F === 1 ? "" : `${put(F, "")} × `}${saltedNumber(course)}${put(amountMg, "mg")}`;
   const head = `${amount} × ${put(ka, "per h")} ÷ [${put(volumeL, "L")} × (${put(ka, "per h")} − ${put(k, "per h")})]`;
@@ -141,14 +142,10 @@ function absorbedShare(cycle: HandCycle, reading: Reading, { atH, amountMg }: Do
 
 /** Hours since the latest such dose, as printed; a dose at the reading's own hour is the last cycle's if read before it. */
 function hoursSince(atH: number, reading: Reading, cycleH: number): number {
-  const since = positiveRest(reading.atH - atH, cycleH);
+  const since = restWithin(reading.atH - atH, cycleH);
   const own = since < sameHourH || since > cycleH - sameHourH;
   if (own) return reading.side === "before" ? cycleH : 0;
   return carried(since);
-}
-
-function positiveRest(value: number, divisor: number): number {
-  return value - divisor * Math.floor(value / divisor);
 }
 
 function salted({ saltFactor }: Course): string {
