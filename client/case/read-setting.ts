@@ -7,8 +7,9 @@ import {
   resolveKinetics,
 } from "../../shared/kinetics/disposition.ts";
 import { formatPercent, formatQuantity } from "../../shared/units/format.ts";
+import { printedUnit } from "../../shared/units/printed-unit.ts";
 import { readMoment } from "../controls/moment.ts";
-import { readLimited, readOptional, unitOf } from "../controls/read-field.ts";
+import { readLimited, readOptional } from "../controls/read-field.ts";
 import type { SettingForm, StatedName, StatedText } from "./setting-form.ts";
 
 /** Fields of the setting that can have a problem; each is also the end of its element's id. */
@@ -123,7 +124,7 @@ function derivedProblems(kinetics: Kinetics, note: Note): boolean {
   });
   if (absurd === undefined) return false;
   const [low, high] = limits[absurd].hard;
-  const say = (value: number) => formatQuantity(value, unitOf(absurd));
+  const say = (value: number) => formatQuantity(value, printedUnit(absurd));
   const from = kinetics.given.map((name) => shortNames[name]).join(" and ");
   note(
     kinetics.given[1] ?? absurd,
@@ -138,7 +139,7 @@ function disagreement(values: KineticValues, field: KineticName): string {
   if (!others.ok) return `${limits[field].label} disagrees with the other values`;
   const derived = others.kinetics[field];
   const from = others.kinetics.given.map((name) => shortNames[name]).join(" and ");
-  const say = (value: number) => formatQuantity(value, unitOf(field));
+  const say = (value: number) => formatQuantity(value, printedUnit(field));
   const apart = formatPercent((100 * Math.abs(stated - derived)) / derived);
   return `${limits[field].label} ${say(stated)} disagrees with ${from}, which give ${say(derived)}: ${apart} apart. Leave one of the three empty, or mend it`;
 }

@@ -1,18 +1,12 @@
 import { type LimitName, limits } from "../../shared/contract/limits.ts";
 import { formatQuantity } from "../../shared/units/format.ts";
+import { printedUnit } from "../../shared/units/printed-unit.ts";
 import { readNumber } from "../../shared/units/read-number.ts";
 
 /** What a field says, or why it cannot be used: field, value and what is allowed. */
 export type ReadField =
   | { readonly ok: true; readonly value: number }
   | { readonly ok: false; readonly problem: string };
-
-/** A unit as it stands beside a field: a slash before h in a rate of doses can be read as a 1. */
-export function unitOf(name: LimitName): string {
-  const { unit } = limits[name];
-  if (unit === "1/h") return "per h";
-  return unit === "mg/h" ? "mg per hour" : unit;
-}
 
 /**
  * The number in a field, within the hard limits of its quantity.
@@ -24,7 +18,7 @@ export function readLimited(name: LimitName, text: string, label: string = limit
   if (!read.ok) return { ok: false, problem: `${label} ${read.problem}` };
   const [low, high] = limits[name].hard;
   if (read.value >= low && read.value <= high) return read;
-  const say = (value: number) => formatQuantity(value, unitOf(name), 12);
+  const say = (value: number) => formatQuantity(value, printedUnit(name), 12);
   return { ok: false, problem: `${label} must be from ${say(low)} to ${say(high)}, got ${say(read.value)}` };
 }
 

@@ -1,5 +1,5 @@
 import type { TimeWindow } from "../../shared/kinetics/monotone-pieces.ts";
-import { instantAt, secondInstant, toInstant, toLocal } from "../../shared/schedule/clock.ts";
+import { hoursBetween, instantAt, secondInstant, toInstant, toLocal } from "../../shared/schedule/clock.ts";
 import type { ClockSpan } from "./snap.ts";
 
 /** A line across the plot with its clock time or day below it. */
@@ -50,7 +50,7 @@ function daysIn(span: ClockSpan, window: TimeWindow): LocalDay[] {
   const first = toLocal(instantAt(span.start, window.fromH, span.timeZone), span.timeZone).slice(0, 10);
   for (let dayNumber = Date.parse(`${first}T00:00:00Z`) / msPerDay; ; dayNumber++) {
     const date = new Date(dayNumber * msPerDay).toISOString().slice(0, 10);
-    const fromH = hourOf(toInstant(`${date}T00:00`, span.timeZone).instant, span);
+    const fromH = hoursBetween(span.start, toInstant(`${date}T00:00`, span.timeZone).instant);
     if (days.length > 0 && fromH >= window.toH) return days;
     days.push({ date, dayNumber, fromH });
   }
@@ -65,7 +65,7 @@ function timeTicks(span: ClockSpan, window: TimeWindow, days: readonly LocalDay[
       if (resolution === "skipped") continue;
       const second = resolution === "repeated" ? secondInstant(`${date}T${text}`, span.timeZone) : undefined;
       for (const each of second === undefined ? [instant] : [instant, second])
-        ticks.push({ atH: hourOf(each, span), text, weight: minute === 0 ? "strong" : "light" });
+        ticks.push({ atH: hoursBetween(span.start, each), text, weight: minute === 0 ? "strong" : "light" });
     }
   }
   return ticks.filter(({ atH }) => atH >= window.fromH && atH <= window.toH).sort((one, other) => one.atH - other.atH);
@@ -114,8 +114,4 @@ function say(date: string, options: Intl.DateTimeFormatOptions): string {
   );
   const part = (type: string) => parts.find((each) => each.type === type)?.value;
   return [part("weekday"), part("day"), part("month"), part("year")].filter(Boolean).join(" ");
-}
-
-function hourOf(instant: string, { start }: ClockSpan): number {
-  return (Date.parse(instant) - Date.parse(start)) / 3_600_000;
 }

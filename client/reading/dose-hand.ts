@@ -1,7 +1,7 @@
 import { batch, computed, type ReadonlySignal, signal } from "@preact/signals";
 import type { RegimenContent, Schedule } from "../../shared/contract/case.ts";
 import { DomainError } from "../../shared/errors.ts";
-import { instantAt, sayClock } from "../../shared/schedule/clock.ts";
+import { hoursBetween, instantAt, sayClock } from "../../shared/schedule/clock.ts";
 import { spanOf } from "../../shared/schedule/expand-orders.ts";
 import type { ScheduledDose } from "../../shared/schedule/scheduled-dose.ts";
 import { letterOf, withSchedule } from "../case/case-document.ts";
@@ -169,7 +169,7 @@ export function createDoseHand(model: CaseModel): DoseHand {
 
 function instantWithin(wanted: string, { setting, timeZone }: RegimenContent): Pick<Clamped, "why"> & { at: string } {
   const { start } = setting.plan;
-  const { atH, why } = withinPlan((Date.parse(wanted) - Date.parse(start)) / 3_600_000, {
+  const { atH, why } = withinPlan(hoursBetween(start, wanted), {
     ...setting.plan,
     timeZone,
   });

@@ -1,9 +1,9 @@
 import { counts } from "../../shared/contract/limits.ts";
 import type { DatedEliminationChange } from "../../shared/contract/setting.ts";
+import { printedUnit } from "../../shared/units/printed-unit.ts";
 import { momentFields, momentIn, textIn } from "../case/drafts.ts";
 import { ChoiceField } from "../controls/choice-field.tsx";
 import { MomentField } from "../controls/moment-field.tsx";
-import { unitOf } from "../controls/read-field.ts";
 import { TextField } from "../controls/text-field.tsx";
 import { DraftForm, type EditorProps } from "../shell/draft-form.tsx";
 import { type ChangeKind, changeKinds, kindOfChange, readChangeDraft } from "./change-draft.ts";
@@ -41,7 +41,7 @@ export function ChangeEditor({ id, draft, timeZone, title, onDraft, onApply, onC
             <TextField
               id={name("value")}
               label={changeKinds[kind].value}
-              unit={unitOf(changeKinds[kind].limit)}
+              unit={printedUnit(changeKinds[kind].limit)}
               mode="decimal"
               text={textIn(draft, "value")}
               onText={(value) => onDraft({ value })}

@@ -1,10 +1,10 @@
 import { limits } from "../../shared/contract/limits.ts";
 import type { KineticName } from "../../shared/kinetics/disposition.ts";
 import { formatQuantity } from "../../shared/units/format.ts";
+import { printedUnit } from "../../shared/units/printed-unit.ts";
 import type { CasePage } from "../case/case-page.ts";
 import { type SettingReading, shortNames } from "../case/read-setting.ts";
 import type { StatedName } from "../case/setting-form.ts";
-import { unitOf } from "../controls/read-field.ts";
 import { refusedAt } from "../saving/refused.ts";
 import { StatedRow } from "./stated-row.tsx";
 
@@ -26,7 +26,7 @@ export function KineticsTable({ page }: { page: CasePage }) {
       key={name}
       id={`setting-${name}`}
       label={labelOf(name)}
-      unit={unitOf(name)}
+      unit={printedUnit(name)}
       stated={form.kinetics[name]}
       onStated={(stated, field) =>
         model.change(
@@ -64,7 +64,7 @@ function labelOf(name: StatedName): string {
 /** What is derived says from what; a third value that was given says what it was held against. */
 function sayDerived(name: KineticName, { kinetics }: SettingReading, text: string): string | undefined {
   if (kinetics === undefined || kinetics.given.includes(name)) return undefined;
-  const value = formatQuantity(kinetics[name], unitOf(name));
+  const value = formatQuantity(kinetics[name], printedUnit(name));
   const from = kinetics.given.map((each) => shortNames[each]).join(" and ");
   return text.trim() === ""
     ? `derived from ${from}: ${value}`

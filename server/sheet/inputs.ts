@@ -2,6 +2,7 @@ import { limits } from "../../shared/contract/limits.ts";
 import { scheduleFacts, settingFacts } from "../../shared/figures/facts.ts";
 import type { Prepared } from "../../shared/figures/prepared.ts";
 import { formatQuantity } from "../../shared/units/format.ts";
+import { printedUnit } from "../../shared/units/printed-unit.ts";
 import type { Paper } from "./paper.ts";
 import { heading, paragraph, table } from "./writing.ts";
 
@@ -14,9 +15,9 @@ export function writeInputs(paper: Paper, { content, course }: Prepared): void {
   const derived = kineticNames
     .filter((name) => content.setting.kinetics[name] === undefined)
     .map((name) => {
-      const { label, unit } = limits[name];
+      const { label } = limits[name];
       const from = course.kinetics.given.map((given) => limits[given].label.toLowerCase()).join(" and ");
-      return [label, formatQuantity(course.kinetics[name], unit === "1/h" ? "per h" : unit, 6), `derived from ${from}`];
+      return [label, formatQuantity(course.kinetics[name], printedUnit(name), 6), `derived from ${from}`];
     });
   table(
     paper,

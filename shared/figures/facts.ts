@@ -5,6 +5,7 @@ import type { DatedEliminationChange, Origin, StatedKinetics } from "../contract
 import { hoursBetween, sayClock } from "../schedule/clock.ts";
 import { sayGive, sayWhen } from "../schedule/say-order.ts";
 import { formatDose, formatDuration, formatLevel, formatQuantity } from "../units/format.ts";
+import { printedUnit } from "../units/printed-unit.ts";
 
 /** One thing that an alternative states, in words with units; `path` stays the same while it is the same thing. */
 export interface Fact {
@@ -102,8 +103,8 @@ export function sayOrigin(origin: Origin): string {
 
 function kineticFacts(kinetics: StatedKinetics): Fact[] {
   return Object.entries(kinetics).map(([name, { value, origin }]) => {
-    const { label, unit } = limits[name as keyof StatedKinetics];
-    const printed = unit === "1/h" ? "per h" : unit;
+    const { label } = limits[name as keyof StatedKinetics];
+    const printed = printedUnit(name as keyof StatedKinetics);
     return { path: `setting/kinetics/${name}`, label, words: entered(value, printed), origin: sayOrigin(origin) };
   });
 }

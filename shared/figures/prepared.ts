@@ -4,6 +4,7 @@ import { DomainError } from "../errors.ts";
 import type { Course } from "../kinetics/course.ts";
 import { type SteadyState, steadyState } from "../kinetics/steady-state.ts";
 import { type Walk, walk } from "../kinetics/walk.ts";
+import { hoursBetween } from "../schedule/clock.ts";
 import { courseOfContent } from "../schedule/course-of-content.ts";
 import { cycleOf } from "../schedule/cycle.ts";
 import type { ScheduledDose } from "../schedule/scheduled-dose.ts";
@@ -57,7 +58,7 @@ function settledOf(content: RegimenContent, course: Course): Settled {
     doses: cycle.doses,
     horizonH: cycle.cycleH,
   };
-  const startsAtH = (Date.parse(cycle.startsAt) - Date.parse(content.setting.plan.start)) / 3_600_000;
+  const startsAtH = hoursBetween(content.setting.plan.start, cycle.startsAt);
   return solved(() => ({
     kind: "cycle",
     startsAt: cycle.startsAt,

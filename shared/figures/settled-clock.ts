@@ -1,5 +1,5 @@
 import type { Instant } from "../contract/schedule.ts";
-import { hoursBetween, instantAt, toInstant, toLocal } from "../schedule/clock.ts";
+import { hoursBetween, instantAt, msPerHour, toInstant, toLocal } from "../schedule/clock.ts";
 import { formatHours } from "../units/format.ts";
 import type { Prepared, Settled } from "./prepared.ts";
 
@@ -16,7 +16,7 @@ const mostClockTimes = 4;
  */
 export function cycleStartH({ content }: Prepared, { startsAt, startsAtH, steady, keepsClock }: Cycle, number: number) {
   if (!keepsClock) return startsAtH + number * steady.cycleH;
-  const localMs = Date.parse(`${toLocal(startsAt, content.timeZone)}:00Z`) + number * steady.cycleH * 3_600_000;
+  const localMs = Date.parse(`${toLocal(startsAt, content.timeZone)}:00Z`) + number * steady.cycleH * msPerHour;
   const { instant } = toInstant(new Date(localMs).toISOString().slice(0, 16), content.timeZone);
   return number === 0 ? startsAtH : hoursBetween(content.setting.plan.start, instant);
 }

@@ -1,7 +1,7 @@
 import type { RegimenContent } from "../contract/case.ts";
 import type { Dose } from "../contract/dose.ts";
 import type { Instant, Order } from "../contract/schedule.ts";
-import { hoursBetween, toLocal } from "./clock.ts";
+import { hoursBetween, msPerHour, toLocal } from "./clock.ts";
 import { elapsedDose } from "./elapsed-dose.ts";
 import { spanOf } from "./expand-orders.ts";
 import { type DueTime, dueTimes } from "./order-times.ts";
@@ -68,7 +68,7 @@ function repeatingOrders(content: RegimenContent): Repeating[] {
 function stillRunning(repeating: readonly Repeating[]): Repeating[] {
   const lastMs = Math.max(...repeating.map(({ due }) => Date.parse(due.at(-1)!.at)));
   // A day's clock times may lie 25 hours apart when the clock goes back.
-  const slackMs = 3_600_000;
+  const slackMs = msPerHour;
   return repeating.filter(({ due, periodS, when }) => {
     const endsMs = Date.parse(due.at(-1)!.at) + periodS * 1_000 + (when.kind === "clock-times" ? slackMs : 0);
     return endsMs > lastMs;

@@ -1,5 +1,6 @@
 import { describe, expect, test } from "vitest";
-import { readLimited, readOptional, unitOf } from "../../../client/controls/read-field.ts";
+import { readLimited, readOptional } from "../../../client/controls/read-field.ts";
+import { printedUnit } from "../../../shared/units/printed-unit.ts";
 
 describe("readLimited", () => {
   test("takes the ends of what is allowed", () => {
@@ -22,6 +23,6 @@ describe("readLimited", () => {
 });
 
 test("no unit on screen has a slash that can be read as a 1", () => {
-  expect(unitOf("eliminationRatePerH")).toBe("per h");
-  expect(unitOf("rateMgPerH")).toBe("mg per hour");
+  expect(printedUnit("eliminationRatePerH")).toBe("per h");
+  expect(printedUnit("rateMgPerH")).toBe("mg per hour");
 });

@@ -187,9 +187,28 @@ describe("cautionsForContent", () => {
       about: "/setting/startConcentration",
       setting: { plan, kinetics, startConcentration: { valueMgPerL: 2_000, origin: typed } },
     },
-  ])("asks for a reason at $about", ({ about, setting }) => {
-    const stops = cautionsForContent(inventedContent({ setting })).filter(({ severity }) => severity === "stop");
+    {
+      about: "/schedule/orders/0",
+      setting: { plan, kinetics },
+      schedule: {
+        orders: [
+          {
+            ...everyEight,
+            give: {
+              kind: "pump" as const,
+              steps: [
+                { afterH: 0, rateMgPerH: 30_000 },
+                { afterH: 1, rateMgPerH: 0 },
+              ],
+            },
+          },
+        ],
+      },
+    },
+  ])("asks for a reason at $about", ({ about, ...change }) => {
+    const stops = cautionsForContent(inventedContent(change)).filter(({ severity }) => severity === "stop");
     expect(stops.map((stop) => stop.about)).toContain(about);
+    for (const { text } of stops) expect(findWritingFaults(text)).toEqual([]);
   });
 });
 
