@@ -1,8 +1,8 @@
 import { counts } from "../../shared/contract/limits.ts";
-import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
+import { type Draft, textIn } from "../case/drafts.ts";
 import { plainText } from "../case/form-of-setting.ts";
 import { ChoiceField } from "../controls/choice-field.tsx";
-import { MomentField } from "../controls/moment-field.tsx";
+import { DraftMoment } from "../controls/draft-moment.tsx";
 import { TextField } from "../controls/text-field.tsx";
 import { AmountField, DurationField } from "../orders/give-fields.tsx";
 import { DraftForm, type EditorProps } from "../shell/draft-form.tsx";
@@ -69,21 +69,18 @@ interface PartsProps {
   readonly onDraft: (fields: Draft) => void;
 }
 
-function Parts({ dose, draft, timeZone, problems, prefix, name, onDraft }: PartsProps) {
+function Parts(props: PartsProps) {
+  const { dose, draft, problems, prefix, name, onDraft } = props;
   const { give } = dose;
   const field = (part: string) => `${prefix}-${part}`;
   const amountText = textIn(draft, field("amount"));
   return (
     <div class="fields">
-      <MomentField
-        id={name(field("at"))}
+      <DraftMoment
+        {...props}
+        field={field("at")}
         label="Time"
-        moment={momentIn(draft, field("at"))}
-        timeZone={timeZone}
-        onMoment={(moment) => onDraft(momentFields(field("at"), moment))}
-        problem={problems[field("at")]}
         hint="24-hour, such as 2026-03-29 08:00; empty: the time stays"
-        emptiness="allowed"
       />
       {give.kind !== "pump" && (
         <AmountField

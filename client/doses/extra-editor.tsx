@@ -1,7 +1,7 @@
 import { counts } from "../../shared/contract/limits.ts";
 import type { ExtraDose } from "../../shared/contract/schedule.ts";
-import { momentFields, momentIn, textIn } from "../case/drafts.ts";
-import { MomentField } from "../controls/moment-field.tsx";
+import { textIn } from "../case/drafts.ts";
+import { DraftMoment } from "../controls/draft-moment.tsx";
 import { TextField } from "../controls/text-field.tsx";
 import { GiveFields } from "../orders/give-fields.tsx";
 import { DraftForm, type EditorProps } from "../shell/draft-form.tsx";
@@ -15,20 +15,13 @@ interface ExtraEditorProps extends EditorProps<ExtraDose> {
 export function ExtraEditor({ id, title, draft, timeZone, onDraft, onApply, onCancel }: ExtraEditorProps) {
   const read = readExtraDraft(draft, id, timeZone);
   const name = (field: string) => `extra-${id}-${field}`;
+  const parts = { name, draft, timeZone, onDraft };
   return (
     <DraftForm title={title} read={read} name={name} onApply={() => read.ok && onApply(read.extra)} onCancel={onCancel}>
       {(problems) => (
         <>
           <div class="fields">
-            <MomentField
-              id={name("at")}
-              label="Given at"
-              moment={momentIn(draft, "at")}
-              timeZone={timeZone}
-              onMoment={(moment) => onDraft(momentFields("at", moment))}
-              problem={problems["at"]}
-              emptiness="allowed"
-            />
+            <DraftMoment {...parts} problems={problems} field="at" label="Given at" />
           </div>
           <GiveFields name={name} draft={draft} problems={problems} onDraft={onDraft} />
           <TextField

@@ -1,8 +1,8 @@
 import { counts } from "../../shared/contract/limits.ts";
 import { formatDose, formatDuration } from "../../shared/units/format.ts";
-import { type Draft, momentFields, momentIn, textIn } from "../case/drafts.ts";
+import { type Draft, textIn } from "../case/drafts.ts";
 import { ChoiceField } from "../controls/choice-field.tsx";
-import { MomentField } from "../controls/moment-field.tsx";
+import { DraftMoment } from "../controls/draft-moment.tsx";
 import { readLimited } from "../controls/read-field.ts";
 import { TextField } from "../controls/text-field.tsx";
 import { focusOn } from "../shell/focus.ts";
@@ -19,7 +19,7 @@ interface WhenFieldsProps {
 
 /** When it is given: once, every so many hours or at clock times; from when, and until when. */
 export function WhenFields(props: WhenFieldsProps) {
-  const { name, draft, timeZone, problems, onDraft } = props;
+  const { name, draft, problems, onDraft } = props;
   const when = whenKindOf(draft);
   const interval = readLimited("intervalH", textIn(draft, "interval"));
   return (
@@ -36,15 +36,7 @@ export function WhenFields(props: WhenFieldsProps) {
         onChoice={(value) => onDraft({ when: value })}
       />
       <div class="fields">
-        <MomentField
-          id={name("at")}
-          label={when === "once" ? "Given at" : "From"}
-          moment={momentIn(draft, "at")}
-          timeZone={timeZone}
-          onMoment={(moment) => onDraft(momentFields("at", moment))}
-          problem={problems["at"]}
-          emptiness="allowed"
-        />
+        <DraftMoment {...props} field="at" label={when === "once" ? "Given at" : "From"} />
         {when === "every" && (
           <TextField
             id={name("interval")}
@@ -116,7 +108,8 @@ function ClockTimes({ name, draft, problems, onDraft }: WhenFieldsProps) {
   );
 }
 
-function EndFields({ name, draft, timeZone, problems, onDraft }: WhenFieldsProps) {
+function EndFields(props: WhenFieldsProps) {
+  const { name, draft, problems, onDraft } = props;
   const end = endKindOf(draft);
   return (
     <>
@@ -144,14 +137,10 @@ function EndFields({ name, draft, timeZone, problems, onDraft }: WhenFieldsProps
               hint="doses that are left out count too"
             />
           ) : (
-            <MomentField
-              id={name("until")}
+            <DraftMoment
+              {...props}
+              field="until"
               label="Until"
-              moment={momentIn(draft, "until")}
-              timeZone={timeZone}
-              onMoment={(moment) => onDraft(momentFields("until", moment))}
-              problem={problems["until"]}
-              emptiness="allowed"
               hint="24-hour, such as 2026-04-01 08:00; nothing is given at that time or later"
             />
           )}

@@ -1,9 +1,9 @@
 import { counts } from "../../shared/contract/limits.ts";
 import type { DatedEliminationChange } from "../../shared/contract/setting.ts";
 import { printedUnit } from "../../shared/units/printed-unit.ts";
-import { momentFields, momentIn, textIn } from "../case/drafts.ts";
+import { textIn } from "../case/drafts.ts";
 import { ChoiceField } from "../controls/choice-field.tsx";
-import { MomentField } from "../controls/moment-field.tsx";
+import { DraftMoment } from "../controls/draft-moment.tsx";
 import { TextField } from "../controls/text-field.tsx";
 import { DraftForm, type EditorProps } from "../shell/draft-form.tsx";
 import { type ChangeKind, changeKinds, kindOfChange, readChangeDraft } from "./change-draft.ts";
@@ -17,6 +17,7 @@ export function ChangeEditor({ id, draft, timeZone, title, onDraft, onApply, onC
   const kind = kindOfChange(draft);
   const read = readChangeDraft(draft, id, timeZone);
   const name = (field: string) => `change-${id}-${field}`;
+  const parts = { name, draft, timeZone, onDraft };
   return (
     <DraftForm
       title={title}
@@ -47,26 +48,8 @@ export function ChangeEditor({ id, draft, timeZone, title, onDraft, onApply, onC
               onText={(value) => onDraft({ value })}
               problem={problems["value"]}
             />
-            <MomentField
-              id={name("from")}
-              label="From"
-              moment={momentIn(draft, "from")}
-              timeZone={timeZone}
-              onMoment={(moment) => onDraft(momentFields("from", moment))}
-              problem={problems["from"]}
-              emptiness="allowed"
-            />
-            {kind === "added-clearance" && (
-              <MomentField
-                id={name("until")}
-                label="Until"
-                moment={momentIn(draft, "until")}
-                timeZone={timeZone}
-                onMoment={(moment) => onDraft(momentFields("until", moment))}
-                problem={problems["until"]}
-                emptiness="allowed"
-              />
-            )}
+            <DraftMoment {...parts} problems={problems} field="from" label="From" />
+            {kind === "added-clearance" && <DraftMoment {...parts} problems={problems} field="until" label="Until" />}
             <TextField
               id={name("note")}
               label="Where it came from"
